@@ -1,5 +1,6 @@
 /** An expected failure is a value; exceptions are left for bugs. */
-export type Result<T, E = Problem> = { readonly ok: true; readonly value: T } | { readonly ok: false; readonly error: E };
+export type Result<T, E = Problem> =
+  { readonly ok: true; readonly value: T } | { readonly ok: false; readonly error: E };
 
 /** A sentence a planner can act on, under a permanent code. */
 export interface Problem {

@@ -1,0 +1,23 @@
+import type { Fixing, Placement } from '../plant/activity';
+
+/** What an edit can change of an activity. */
+export interface PlanState {
+  readonly placement: Placement | null;
+  readonly fixing: Fixing;
+}
+
+/** One activity's change; `revision` is the one that was read. */
+export interface Change {
+  readonly activityId: string;
+  readonly revision: number;
+  readonly before: PlanState;
+  readonly after: PlanState;
+}
+
+export type EditKind = 'place' | 'move' | 'takeOff' | 'fix' | 'slip' | 'level' | 'undo' | 'redo';
+
+/** A change of the plan as a value; undo is its reverse. */
+export interface Edit {
+  readonly kind: EditKind;
+  readonly changes: readonly Change[];
+}
