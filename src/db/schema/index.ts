@@ -1,0 +1,7 @@
+export * from './account';
+export * from './floor';
+export * from './library';
+export * from './orders';
+export * from './plan';
+export * from './plant';
+export * from './record';

@@ -1,0 +1,120 @@
+import { doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
+import type { LimitUse, Phase, Stage } from '../../core/plant/activity';
+import type { UnitKind } from '../../core/plant/plant';
+import { createdAt, id, instant } from './columns';
+import { plantId, units } from './plant';
+
+export const families = pgTable('families', { id: id(), plantId: plantId(), name: text('name').notNull() }, (t) => [
+  index('families_plant').on(t.plantId),
+]);
+
+export const cleaningRules = pgTable(
+  'cleaning_rules',
+  {
+    id: id(),
+    plantId: plantId(),
+    unitKind: text('unit_kind').$type<UnitKind>().notNull(),
+    fromFamilyId: text('from_family_id')
+      .notNull()
+      .references(() => families.id),
+    toFamilyId: text('to_family_id')
+      .notNull()
+      .references(() => families.id),
+    minutes: integer('minutes').notNull(),
+    kind: text('kind').$type<'rinse' | 'wash' | 'allergen'>().notNull(),
+    phases: jsonb('phases').$type<Phase[]>().notNull(),
+    uses: jsonb('uses').$type<LimitUse[]>().notNull(),
+  },
+  (t) => [unique('cleaning_rules_pair').on(t.plantId, t.unitKind, t.fromFamilyId, t.toFamilyId)],
+);
+
+export const products = pgTable(
+  'products',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    familyId: text('family_id')
+      .notNull()
+      .references(() => families.id),
+    /** Mass fractions; carbohydrate net of fibre. */
+    composition: jsonb('composition').$type<Record<string, number>>().notNull(),
+    containerKg: doublePrecision('container_kg').notNull(),
+    fillKg: doublePrecision('fill_kg').notNull(),
+    casePieces: integer('case_pieces').notNull(),
+  },
+  (t) => [index('products_plant').on(t.plantId)],
+);
+
+/**
+ * Thermal-process data of a product. It can be planned with only while released, and never by the person who entered
+ * it; a change is a new row.
+ */
+export const processData = pgTable(
+  'process_data',
+  {
+    id: id(),
+    plantId: plantId(),
+    productId: text('product_id')
+      .notNull()
+      .references(() => products.id),
+    document: text('document').notNull(),
+    issue: text('issue').notNull(),
+    /** Process temperature [degC], process time [min], vent schedule, longest waits [min], initial temperature [degC]. */
+    values: jsonb('values').$type<ProcessValues>().notNull(),
+    enteredBy: text('entered_by').notNull(),
+    createdAt: createdAt(),
+    releasedBy: text('released_by'),
+    releasedAt: instant('released_at'),
+    withdrawnAt: instant('withdrawn_at'),
+  },
+  (t) => [index('process_data_product').on(t.plantId, t.productId)],
+);
+
+export interface ProcessValues {
+  readonly processC: number;
+  readonly processMinutes: number;
+  readonly ventMinutes: number;
+  readonly ventToC: number;
+  readonly comeUpMinutes: number;
+  readonly leastInitialC: number;
+  readonly longestWaitSinceClosingMinutes: number;
+  readonly longestWaitForInitialTemperatureMinutes: number | null;
+}
+
+/** Inputs of a duty model (core/duty), by its name; `typed` holds a measured profile instead. */
+export const duties = pgTable(
+  'duties',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    model: text('model')
+      .$type<'steamBlancher' | 'jacketedKettle' | 'stillRetort' | 'waterHeating' | 'typed'>()
+      .notNull(),
+    inputs: jsonb('inputs').$type<Record<string, unknown>>().notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [index('duties_plant').on(t.plantId)],
+);
+
+/** One stage of a product's route on one eligible unit. */
+export const routeModes = pgTable(
+  'route_modes',
+  {
+    id: id(),
+    plantId: plantId(),
+    productId: text('product_id')
+      .notNull()
+      .references(() => products.id),
+    position: integer('position').notNull(),
+    stage: text('stage').$type<Stage>().notNull(),
+    unitId: text('unit_id')
+      .notNull()
+      .references(() => units.id),
+    minutes: integer('minutes').notNull(),
+    dutyId: text('duty_id').references(() => duties.id),
+    uses: jsonb('uses').$type<LimitUse[]>().notNull(),
+  },
+  (t) => [unique('route_modes_stage_unit').on(t.productId, t.position, t.unitId)],
+);

@@ -1,0 +1,210 @@
+import { boolean, doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
+import type { HeaderFeed, UnitKind } from '../../core/plant/plant';
+import { createdAt, id, instant } from './columns';
+
+export const plants = pgTable('plants', {
+  id: id(),
+  name: text('name').notNull(),
+  isDemo: boolean('is_demo').notNull().default(false),
+  timeZone: text('time_zone').notNull(),
+  /** 1 is Monday. */
+  weekStartsOn: integer('week_starts_on').notNull().default(1),
+  altitudeM: doublePrecision('altitude_m').notNull().default(0),
+  displayUnits: text('display_units').$type<'si' | 'us'>().notNull().default('si'),
+  snapMinutes: integer('snap_minutes').notNull().default(5),
+  reserveFraction: doublePrecision('reserve_fraction').notNull().default(0),
+  sagToleranceBar: doublePrecision('sag_tolerance_bar').notNull().default(0.5),
+  createdAt: createdAt(),
+});
+
+/** Columns that every row of a plant carries. */
+export const plantId = () =>
+  text('plant_id')
+    .notNull()
+    .references(() => plants.id, { onDelete: 'cascade' });
+
+export const lines = pgTable(
+  'lines',
+  { id: id(), plantId: plantId(), name: text('name').notNull(), position: integer('position').notNull() },
+  (t) => [index('lines_plant').on(t.plantId)],
+);
+
+export const headers = pgTable(
+  'headers',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    pressureBarG: doublePrecision('pressure_bar_g').notNull(),
+    dryness: doublePrecision('dryness'),
+    superheatK: doublePrecision('superheat_k'),
+    feed: jsonb('feed').$type<HeaderFeed>().notNull(),
+    position: integer('position').notNull(),
+  },
+  (t) => [index('headers_plant').on(t.plantId)],
+);
+
+export const ventGroups = pgTable(
+  'vent_groups',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    ventsAtOnce: integer('vents_at_once').notNull(),
+    steamOnsAtOnce: integer('steam_ons_at_once').notNull(),
+    steamOnMinutes: integer('steam_on_minutes').notNull().default(1),
+    marginMinutes: integer('margin_minutes').notNull().default(0),
+    source: text('source').notNull(),
+  },
+  (t) => [index('vent_groups_plant').on(t.plantId)],
+);
+
+export const units = pgTable(
+  'units',
+  {
+    id: id(),
+    plantId: plantId(),
+    lineId: text('line_id')
+      .notNull()
+      .references(() => lines.id),
+    name: text('name').notNull(),
+    kind: text('kind').$type<UnitKind>().notNull(),
+    headerId: text('header_id').references(() => headers.id),
+    ventGroupId: text('vent_group_id').references(() => ventGroups.id),
+    position: integer('position').notNull(),
+  },
+  (t) => [index('units_plant').on(t.plantId)],
+);
+
+export const boilers = pgTable(
+  'boilers',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    headerId: text('header_id')
+      .notNull()
+      .references(() => headers.id),
+    ratingFromAndAtKgPerH: doublePrecision('rating_from_and_at_kg_per_h').notNull(),
+    pressureBarG: doublePrecision('pressure_bar_g').notNull(),
+    feedTankBarG: doublePrecision('feed_tank_bar_g').notNull(),
+    blowdownFraction: doublePrecision('blowdown_fraction').notNull(),
+    condensateReturnFraction: doublePrecision('condensate_return_fraction').notNull(),
+    condensateC: doublePrecision('condensate_c').notNull(),
+    makeUpC: doublePrecision('make_up_c').notNull(),
+    turndown: doublePrecision('turndown').notNull(),
+    greatestRiseFractionPerMin: doublePrecision('greatest_rise_fraction_per_min').notNull(),
+    waterTonnes: doublePrecision('water_tonnes').notNull(),
+    position: integer('position').notNull(),
+  },
+  (t) => [index('boilers_plant').on(t.plantId)],
+);
+
+/**
+ * What the utilities lead has said of a boiler for a span; a later row overrules an earlier one where they overlap.
+ * Never changed or deleted.
+ */
+export const boilerFirings = pgTable(
+  'boiler_firings',
+  {
+    id: id(),
+    plantId: plantId(),
+    boilerId: text('boiler_id')
+      .notNull()
+      .references(() => boilers.id),
+    fromAt: instant('from_at').notNull(),
+    toAt: instant('to_at').notNull(),
+    /** 0: shut; 1: lit at full rating; between: derated. */
+    share: doublePrecision('share').notNull(),
+    reason: text('reason').notNull(),
+    authorId: text('author_id').notNull(),
+    sequence: integer('sequence').generatedAlwaysAsIdentity().notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [index('boiler_firings_span').on(t.plantId, t.fromAt, t.toAt)],
+);
+
+/** A steam limit set for a span; `limit_kg_per_h` null takes a set limit back. Later rows overrule earlier ones. */
+export const steamLimits = pgTable(
+  'steam_limits',
+  {
+    id: id(),
+    plantId: plantId(),
+    headerId: text('header_id')
+      .notNull()
+      .references(() => headers.id),
+    fromAt: instant('from_at').notNull(),
+    toAt: instant('to_at').notNull(),
+    limitKgPerH: doublePrecision('limit_kg_per_h'),
+    reason: text('reason').notNull(),
+    authorId: text('author_id').notNull(),
+    sequence: integer('sequence').generatedAlwaysAsIdentity().notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [index('steam_limits_span').on(t.plantId, t.fromAt, t.toAt)],
+);
+
+/** Losses and users outside the plan, by hour of the week (0 is the first hour of the week). */
+export const baseLoads = pgTable(
+  'base_loads',
+  {
+    id: id(),
+    plantId: plantId(),
+    headerId: text('header_id')
+      .notNull()
+      .references(() => headers.id),
+    fromHour: integer('from_hour').notNull(),
+    toHour: integer('to_hour').notNull(),
+    kgPerH: doublePrecision('kg_per_h').notNull(),
+    note: text('note').notNull(),
+  },
+  (t) => [index('base_loads_plant').on(t.plantId)],
+);
+
+/** Crates, cooling water, hoist, operators: capacity by hour of the week as [fromHour, value] steps. */
+export const sharedLimits = pgTable(
+  'shared_limits',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    unit: text('unit').notNull(),
+    capacity: jsonb('capacity').$type<{ fromHour: number; value: number }[]>().notNull(),
+  },
+  (t) => [index('shared_limits_plant').on(t.plantId)],
+);
+
+/** A shift of the week, wall-clock times in the plant's zone; one that ends at or before its start runs past midnight. */
+export const shifts = pgTable(
+  'shifts',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    /** 1 is Monday. */
+    days: jsonb('days').$type<number[]>().notNull(),
+    /** "06:00" */
+    startsAt: text('starts_at').notNull(),
+    endsAt: text('ends_at').notNull(),
+    /** Lines that the shift runs; null: all. */
+    lineIds: jsonb('line_ids').$type<string[]>(),
+    position: integer('position').notNull(),
+  },
+  (t) => [unique('shifts_name').on(t.plantId, t.name)],
+);
+
+/** A day or span that differs: holiday, maintenance, overtime. */
+export const calendarExceptions = pgTable(
+  'calendar_exceptions',
+  {
+    id: id(),
+    plantId: plantId(),
+    /** null: every unit. */
+    unitId: text('unit_id').references(() => units.id),
+    fromAt: instant('from_at').notNull(),
+    toAt: instant('to_at').notNull(),
+    open: boolean('open').notNull(),
+    reason: text('reason').notNull(),
+  },
+  (t) => [index('calendar_exceptions_span').on(t.plantId, t.fromAt, t.toAt)],
+);
