@@ -1,0 +1,48 @@
+import { ROLES, type Role } from '@/contracts/account';
+import { fail, ok, problem, type Result } from '@/core/result';
+import type { Actor } from './actor';
+
+/** Who may do what at a plant: the only such table. */
+export const PERMISSIONS = {
+  'account.own': ROLES,
+  'plant.follow': ROLES,
+  'plan.read': ROLES,
+  'plan.edit': ['planner'],
+  'plan.level': ['planner'],
+  'plan.issue': ['planner'],
+  'steam.agree': ['utilitiesLead'],
+  'capacity.read': ROLES,
+  'capacity.set': ['utilitiesLead'],
+  'floor.read': ROLES,
+  'floor.record': ['lineSupervisor'],
+  'processData.read': ROLES,
+  'processData.release': ['qualityLead'],
+} as const satisfies Record<string, readonly Role[]>;
+
+export type Permission = keyof typeof PERMISSIONS;
+
+export const ROLE_NAMES: Readonly<Record<Role, string>> = {
+  planner: 'planner',
+  utilitiesLead: 'utilities lead',
+  lineSupervisor: 'line supervisor',
+  qualityLead: 'quality lead',
+  administrator: 'administrator',
+};
+
+declare const checked: unique symbol;
+
+/** An actor found to hold a permission. Only `authorize` makes one, so a forgotten check does not compile. */
+export type Authorized<P extends Permission> = Actor & { readonly [checked]: { readonly [K in P]: true } };
+
+/** True where one of the actor's roles carries the permission. */
+export function may(actor: Pick<Actor, 'roles'>, permission: Permission): boolean {
+  const roles: readonly Role[] = PERMISSIONS[permission];
+  return actor.roles.some((role) => roles.includes(role));
+}
+
+/** The actor as one who holds the permission; a refusal names the roles that do. */
+export function authorize<P extends Permission>(actor: Actor, permission: P): Result<Authorized<P>> {
+  if (may(actor, permission)) return ok(actor as Authorized<P>);
+  const names = PERMISSIONS[permission].map((role) => ROLE_NAMES[role]).join(' or ');
+  return fail(problem('ROLE', `Only a ${names} of ${actor.plantName} may do this.`));
+}
