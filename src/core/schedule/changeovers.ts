@@ -1,0 +1,139 @@
+import type { Activity } from '../plant/activity';
+import type { CleaningRule, UnitKind } from '../plant/plant';
+import { occupationsByUnit, type Occupation } from './occupation';
+import type { Week } from './week';
+import { indexOf } from './weekIndex';
+
+/** A cleaning that the sequence on a unit asks for, between two runs. */
+export interface Changeover {
+  /** `clean:` and the id of the run before. It draws steam and uses limits like any other activity. */
+  readonly cleaning: Activity;
+  readonly unitId: string;
+  readonly previousId: string;
+  readonly nextId: string;
+  readonly rule: CleaningRule;
+  /** When the unit is free for it. */
+  readonly from: number;
+  /** Minutes until the next run starts; less than 0 where the runs overlap. */
+  readonly availableMin: number;
+}
+
+/**
+ * The cleanings between runs of product families on each unit, in order of unit and time. Cleanliness is a state: an
+ * allergen clean that the next family asks for after any family since the last allergen clean is asked for here, even
+ * where others ran between. A stored cleaning between the runs of at least the rule's length stands in for it.
+ */
+export function changeovers(week: Week): Changeover[] {
+  const byUnit = occupationsByUnit(week.activities, week);
+  return [...byUnit.keys()].sort().flatMap((unitId) => unitChangeovers(byUnit.get(unitId) as Occupation[], week));
+}
+
+/** The week with the cleanings that its sequence asks for among its activities: what draws steam and uses limits. */
+export function drawnActivities(week: Week, found: readonly Changeover[] = changeovers(week)): Activity[] {
+  return [...week.activities, ...found.map((changeover) => changeover.cleaning)];
+}
+
+/** The rule for a change of family on a kind of unit; undefined where nothing has to be done. */
+export function cleaningRule(
+  rules: readonly CleaningRule[],
+  unitKind: UnitKind,
+  fromFamilyId: string,
+  toFamilyId: string,
+): CleaningRule | undefined {
+  return rules.find(
+    (rule) => rule.unitKind === unitKind && rule.fromFamilyId === fromFamilyId && rule.toFamilyId === toFamilyId,
+  );
+}
+
+interface UnitState {
+  previous: { readonly run: Activity; readonly taken: Occupation } | null;
+  /** Families run since the last allergen clean. */
+  families: Set<string>;
+  /** Stored cleanings since the previous run. [min] */
+  longestCleaningMin: number;
+}
+
+function unitChangeovers(taken: readonly Occupation[], week: Week): Changeover[] {
+  const index = indexOf(week);
+  const kind = index.units.get(taken[0]?.unitId ?? '')?.kind;
+  if (!kind) return [];
+  const state: UnitState = { previous: null, families: new Set(), longestCleaningMin: 0 };
+  const found: Changeover[] = [];
+  for (const span of taken) {
+    const activity = index.activities.get(span.activityId) as Activity;
+    if (activity.kind === 'cleaning') {
+      state.longestCleaningMin = Math.max(state.longestCleaningMin, span.to - span.from);
+    } else if (activity.kind === 'stage' && activity.familyId !== null) {
+      const rule = requiredRule(week.plant.cleaning, kind, state, activity.familyId);
+      if (rule && state.previous && state.longestCleaningMin < rule.minutes) {
+        found.push(changeover(rule, state.previous.run, state.previous.taken, activity, span));
+      }
+      if (rule?.kind === 'allergen') state.families.clear();
+      state.families.add(activity.familyId);
+      state.previous = { run: activity, taken: span };
+      state.longestCleaningMin = 0;
+    }
+  }
+  return found;
+}
+
+function requiredRule(
+  rules: readonly CleaningRule[],
+  kind: UnitKind,
+  state: UnitState,
+  toFamilyId: string,
+): CleaningRule | undefined {
+  const fromFamilyId = state.previous?.run.familyId;
+  const pair = fromFamilyId ? cleaningRule(rules, kind, fromFamilyId, toFamilyId) : undefined;
+  if (pair?.kind === 'allergen') return pair;
+  const allergen = [...state.families]
+    .map((familyId) => cleaningRule(rules, kind, familyId, toFamilyId))
+    .filter((rule) => rule?.kind === 'allergen')
+    .sort((a, b) => (b?.minutes ?? 0) - (a?.minutes ?? 0));
+  return allergen[0] ?? pair;
+}
+
+function changeover(
+  rule: CleaningRule,
+  previous: Activity,
+  taken: Occupation,
+  next: Activity,
+  nextTaken: Occupation,
+): Changeover {
+  const from = taken.to + (previous.placement?.cleanAfterMin ?? 0);
+  return {
+    cleaning: cleaningActivity(rule, previous, taken.unitId, from),
+    unitId: taken.unitId,
+    previousId: previous.id,
+    nextId: next.id,
+    rule,
+    from,
+    availableMin: nextTaken.from - from,
+  };
+}
+
+const CLEANING_TITLES = { rinse: 'Rinse', wash: 'Wash', allergen: 'Allergen clean' } as const;
+
+function cleaningActivity(rule: CleaningRule, previous: Activity, unitId: string, start: number): Activity {
+  const { minutes, phases, uses } = rule;
+  return {
+    id: `clean:${previous.id}`,
+    kind: 'cleaning',
+    stage: null,
+    batchId: null,
+    code: previous.code,
+    title: `${CLEANING_TITLES[rule.kind]} after ${previous.code}`,
+    productId: null,
+    familyId: null,
+    modes: [{ unitId, minutes, phases, uses, dutyId: null }],
+    placement: { unitId, start },
+    fixing: 'free',
+    occupiesUntil: 'end',
+    earliestStart: 0,
+    latestStart: null,
+    due: null,
+    weight: 1,
+    processData: null,
+    revision: 0,
+  };
+}
