@@ -1,0 +1,107 @@
+import {
+  useId,
+  type InputHTMLAttributes,
+  type ReactNode,
+  type SelectHTMLAttributes,
+  type TextareaHTMLAttributes,
+} from 'react';
+
+const BOX =
+  'flex min-h-10 items-center rounded-md border bg-surface transition-colors ' +
+  'has-[:focus-visible]:outline-2 has-[:focus-visible]:outline-offset-2 has-[:focus-visible]:outline-focus ';
+const INPUT = 'min-w-0 flex-1 bg-transparent px-3 py-2 text-md outline-none disabled:opacity-60';
+
+interface FrameProps {
+  readonly label: string;
+  /** Stands inside the field, after the value. */
+  readonly unit?: string;
+  readonly hint?: ReactNode;
+  readonly error?: string | undefined;
+  readonly className?: string;
+}
+
+interface Described {
+  readonly id: string;
+  readonly 'aria-invalid'?: true;
+  readonly 'aria-describedby'?: string;
+}
+
+/** Label above, unit inside, hint or error below; the line below is kept free so that an error moves nothing. */
+function Frame({
+  label,
+  unit,
+  hint,
+  error,
+  className,
+  children,
+}: FrameProps & { readonly children: (described: Described) => ReactNode }) {
+  const id = useId();
+  const note = error ?? hint;
+  const described: Described = {
+    id,
+    ...(error ? { 'aria-invalid': true } : {}),
+    ...(note ? { 'aria-describedby': `${id}-note` } : {}),
+  };
+  return (
+    <div className={className}>
+      <label htmlFor={id} className="label mb-1 block">
+        {label}
+      </label>
+      <div className={`${BOX} ${error ? 'border-over' : 'border-edge'}`}>
+        {children(described)}
+        {unit ? <span className="pr-3 text-sm text-ink-muted">{unit}</span> : null}
+      </div>
+      <p id={`${id}-note`} className={`mt-1 min-h-4.5 text-xs ${error ? 'text-over' : 'text-ink-muted'}`}>
+        {note}
+      </p>
+    </div>
+  );
+}
+
+export function Field({
+  label,
+  unit,
+  hint,
+  error,
+  className,
+  ...input
+}: FrameProps & Omit<InputHTMLAttributes<HTMLInputElement>, 'className'>) {
+  return (
+    <Frame {...{ label, unit, hint, error, className }}>
+      {(described) => <input {...described} {...input} className={INPUT} />}
+    </Frame>
+  );
+}
+
+export function TextField({
+  label,
+  hint,
+  error,
+  className,
+  ...area
+}: Omit<FrameProps, 'unit'> & Omit<TextareaHTMLAttributes<HTMLTextAreaElement>, 'className'>) {
+  return (
+    <Frame {...{ label, hint, error, className }}>
+      {(described) => <textarea rows={3} {...described} {...area} className={`${INPUT} resize-y`} />}
+    </Frame>
+  );
+}
+
+export function SelectField({
+  label,
+  hint,
+  error,
+  className,
+  children,
+  ...select
+}: Omit<FrameProps, 'unit'> & Omit<SelectHTMLAttributes<HTMLSelectElement>, 'className'>) {
+  return (
+    <Frame {...{ label, hint, error, className }}>
+      {(described) => (
+        <select {...described} {...select} className={`${INPUT} cursor-pointer [&>option]:bg-surface`}>
+          {children}
+        </select>
+      )}
+    </Frame>
+  );
+}
