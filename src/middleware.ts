@@ -1,0 +1,65 @@
+import type { APIContext, MiddlewareHandler } from 'astro';
+import { lucia } from './server/auth/lucia';
+import { signedIn, type SignedIn } from './server/auth/session';
+import { themeOf } from './server/http/cookies';
+import { needsSignIn, safeNext, signInAddress } from './server/http/gate';
+import { originAllowed } from './server/http/origin';
+import { problemResponse, type HttpProblem } from './server/http/problem';
+import { setSecurityHeaders } from './server/http/securityHeaders';
+
+const foreignOrigin: HttpProblem = {
+  status: 403,
+  code: 'ORIGIN',
+  message: 'This request came from another site and was refused. Open Steadmain itself and try again.',
+};
+
+const noDatabase: HttpProblem = {
+  status: 503,
+  code: 'NO-DATABASE',
+  message: 'The database does not answer. Nothing was changed; try again in a minute.',
+};
+
+/** Session to actor; gives the cookie to set where it was renewed or has ended. */
+async function identify(context: APIContext): Promise<string | null> {
+  const cookies = context.request.headers.get('cookie') ?? '';
+  const sessionId = lucia.readSessionCookie(cookies);
+  context.locals.theme = themeOf(cookies);
+  context.locals.actor = null;
+  context.locals.sessionId = null;
+  if (!sessionId) return null;
+  const found: SignedIn | null = await signedIn(sessionId);
+  if (!found) return lucia.createBlankSessionCookie().serialize();
+  context.locals.actor = found.actor;
+  context.locals.sessionId = sessionId;
+  return found.session.fresh ? lucia.createSessionCookie(sessionId).serialize() : null;
+}
+
+const redirect = (location: string): Response => new Response(null, { status: 302, headers: { location } });
+
+function redirected({ locals, url, routePattern }: APIContext): Response | null {
+  if (!locals.actor) return needsSignIn(url.pathname, routePattern) ? redirect(signInAddress(url)) : null;
+  return routePattern === '/sign-in' ? redirect(safeNext(url.searchParams.get('next'))) : null;
+}
+
+async function respond(context: APIContext, next: () => Promise<Response>): Promise<Response> {
+  if (!originAllowed(context.request)) return problemResponse(foreignOrigin);
+  let cookie: string | null;
+  try {
+    cookie = await identify(context);
+  } catch (error) {
+    if (!context.url.pathname.startsWith('/api/')) throw error;
+    console.error('the session could not be read:', error);
+    return problemResponse(noDatabase);
+  }
+  const response = redirected(context) ?? (await next());
+  if (cookie && !response.headers.has('set-cookie')) response.headers.append('set-cookie', cookie);
+  return response;
+}
+
+/** Who is asking, whether they may change anything from where they come, and what every answer carries. */
+export const onRequest: MiddlewareHandler = async (context, next) => {
+  if (context.isPrerendered) return next();
+  const response = await respond(context, next);
+  setSecurityHeaders(response.headers);
+  return response;
+};

@@ -1,0 +1,19 @@
+/** The cookie that keeps the theme; written in the browser, read there before the first paint too. */
+export const THEME_COOKIE = 'theme';
+
+const THEMES = ['light', 'dark', 'system'] as const;
+
+/** A cookie's value out of the request's header; null where there is none. */
+export function readCookie(header: string | null, name: string): string | null {
+  for (const part of header?.split(';') ?? []) {
+    const at = part.indexOf('=');
+    if (at > 0 && part.slice(0, at).trim() === name) return part.slice(at + 1).trim();
+  }
+  return null;
+}
+
+/** The theme that a person chose on this device; `system` unless chosen. */
+export function themeOf(header: string | null): (typeof THEMES)[number] {
+  const value = readCookie(header, THEME_COOKIE);
+  return THEMES.find((theme) => theme === value) ?? 'system';
+}
