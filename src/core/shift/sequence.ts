@@ -5,14 +5,11 @@ import { occupation, type Occupation } from '../schedule/occupation';
 import type { Week } from '../schedule/week';
 import { indexOf } from '../schedule/weekIndex';
 import type { Interval } from '../time/interval';
+import type { FloorEventKind } from './floorEvent';
 
-/** Moments that the floor acts at or records. */
-export type ShiftEventKind =
-  'start' | 'cratesIn' | 'steamOn' | 'ventsClosed' | 'processTiming' | 'steamOff' | 'empty' | 'end';
-
-/** A moment as planned. [min of the week] */
-export interface ShiftEvent {
-  readonly kind: ShiftEventKind;
+/** A moment as planned, by the name under which the floor records it. [min of the week] */
+export interface PlannedEvent {
+  readonly kind: FloorEventKind;
   readonly minute: number;
 }
 
@@ -30,7 +27,7 @@ export interface ShiftRow {
   readonly from: number;
   readonly to: number;
   /** In order of time. */
-  readonly events: readonly ShiftEvent[];
+  readonly events: readonly PlannedEvent[];
 }
 
 /** What a line has to do in a shift: activities that overlap it, cleanings included, in order of start, then unit. */
@@ -47,32 +44,35 @@ export function shiftSequence(week: Week, lineId: string, shift: Interval): Shif
 }
 
 /**
- * The moments of a placed activity, from its phases: a retort run has crates in, steam on, vents closed, process timing
- * started, steam off, empty; anything else start, steam on and steam off where it draws steam, and end.
+ * The moments of a placed activity, from its phases, in the order of a retort's cycle; an activity that is no retort run has
+ * only the first and the last: its start and when its unit is free.
  */
-export function plannedEvents(activity: Activity, week: Week): ShiftEvent[] {
+export function plannedEvents(activity: Activity, week: Week): PlannedEvent[] {
   const taken = occupation(activity, week);
   if (!taken) return [];
-  const phases = placedPhases(activity);
-  const retort = activity.stage === 'retort';
+  const cycle = activity.stage === 'retort' ? retortEvents(placedPhases(activity)) : [];
+  return [{ kind: 'cratesIn', minute: taken.from }, ...cycle, { kind: 'empty', minute: taken.to }];
+}
+
+function retortEvents(phases: readonly PlacedPhase[]): PlannedEvent[] {
   const drawing = phases.filter((phase) => phase.steamKgPerH > 0);
-  const events: (ShiftEvent | null)[] = [
-    { kind: retort ? 'cratesIn' : 'start', minute: taken.from },
+  const ofKind = (kind: PlacedPhase['kind']) => phases.filter((phase) => phase.kind === kind);
+  const events = [
     at('steamOn', earliest(drawing)),
-    retort ? at('ventsClosed', latest(phases.filter((phase) => phase.kind === 'vent'))) : null,
-    retort ? at('processTiming', earliest(phases.filter((phase) => phase.kind === 'process'))) : null,
+    at('ventsClosed', latest(ofKind('vent'))),
+    at('timingStarted', earliest(ofKind('process'))),
     at('steamOff', latest(drawing)),
-    { kind: retort ? 'empty' : 'end', minute: taken.to },
+    at('cooled', latest(ofKind('cool'))),
   ];
   return events.filter((event) => event !== null);
 }
 
 /** The first planned moment at or after a minute; null where nothing is left. */
-export function nextEvent(row: ShiftRow, minute: number): ShiftEvent | null {
+export function nextEvent(row: ShiftRow, minute: number): PlannedEvent | null {
   return row.events.find((event) => event.minute >= minute) ?? null;
 }
 
-function row(activity: Activity, unitName: string, taken: Occupation, events: readonly ShiftEvent[]): ShiftRow {
+function row(activity: Activity, unitName: string, taken: Occupation, events: readonly PlannedEvent[]): ShiftRow {
   return {
     activityId: activity.id,
     kind: activity.kind,
@@ -89,7 +89,7 @@ function row(activity: Activity, unitName: string, taken: Occupation, events: re
   };
 }
 
-function at(kind: ShiftEventKind, minute: number | null): ShiftEvent | null {
+function at(kind: FloorEventKind, minute: number | null): PlannedEvent | null {
   return minute === null ? null : { kind, minute };
 }
 
