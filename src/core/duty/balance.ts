@@ -1,0 +1,112 @@
+/** The few lines that every heat balance repeats, as steps of a working. */
+import type { SpecificHeat } from './specificHeat';
+import type { WorkingSheet } from './working';
+
+export const ENERGY_BALANCE = 'Energy balance';
+export const IF97 = 'IAPWS R7-97(2012)';
+
+/** Carbon steel and stainless steel alike, near 0.12 Btu/lbF. Energy-management handbook, kettle example. */
+export const STEEL_KJ_PER_KG_K = 0.5;
+
+/** Heat to warm a mass [kJ]: m c (T2 - T1). */
+export function sensibleHeat(
+  sheet: WorkingSheet,
+  what: { readonly symbol: string; readonly name: string },
+  kg: number,
+  kJPerKgK: number,
+  fromC: number,
+  toC: number,
+): number {
+  return sheet.step({
+    ...what,
+    formula: 'm · c · (T_2 − T_1)',
+    unit: 'kJ',
+    source: ENERGY_BALANCE,
+    inputs: { m: [kg, 'kg'], c: [kJPerKgK, 'kJ/kgK'], T_1: [fromC, '°C'], T_2: [toC, '°C'] },
+    value: ({ m, c, T_1, T_2 }) => m * c * (T_2 - T_1),
+  });
+}
+
+/** Heat lost from a bare surface [kW]: U A (T - T_ambient). */
+export function surfaceLoss(
+  sheet: WorkingSheet,
+  wPerM2K: number,
+  areaM2: number,
+  surfaceC: number,
+  ambientC: number,
+): number {
+  return sheet.step({
+    symbol: 'q_loss',
+    name: 'Heat lost from the bare surface',
+    formula: 'k · A · (T_s − T_a) / 1000',
+    unit: 'kW',
+    source: 'About 14 W/m²K for bare steel near 120 °C: heat-loss rule, common practice',
+    inputs: { k: [wPerM2K, 'W/m²K'], A: [areaM2, 'm²'], T_s: [surfaceC, '°C'], T_a: [ambientC, '°C'] },
+    value: ({ k, A, T_s, T_a }) => (k * A * (T_s - T_a)) / 1000,
+  });
+}
+
+/** Heat that a kilogram of header steam gives up, condensate leaving at h_c [kJ/kg]: h - h_c. */
+export function heatGivenUp(sheet: WorkingSheet, headerH: number, condensateH: number, condensateC: number): number {
+  return sheet.step({
+    symbol: 'Δh',
+    name: `Heat given up per kg of header steam, condensate leaving at ${Number(condensateC.toFixed(1))} °C`,
+    formula: 'h − h_c',
+    unit: 'kJ/kg',
+    source: IF97,
+    inputs: { h: [headerH, 'kJ/kg'], h_c: [condensateH, 'kJ/kg'] },
+    value: ({ h, h_c }) => h - h_c,
+  });
+}
+
+/** Writes down the specific heat used [kJ/kgK]. */
+export function writeSpecificHeat(sheet: WorkingSheet, cp: SpecificHeat, atC: number): number {
+  return sheet.step({
+    symbol: 'c_p',
+    name: 'Specific heat of the product',
+    formula: cp.formula,
+    unit: 'kJ/kgK',
+    source: cp.source,
+    inputs: { t: [atC, '°C'] },
+    value: () => cp.value,
+  });
+}
+
+/** Steam for an amount of heat [kg]: Q / dh. */
+export function steamForHeat(sheet: WorkingSheet, symbol: string, name: string, heatKJ: number, dh: number): number {
+  return sheet.step({
+    symbol,
+    name,
+    formula: 'Q / Δh',
+    unit: 'kg',
+    source: ENERGY_BALANCE,
+    inputs: { Q: [heatKJ, 'kJ'], Δh: [dh, 'kJ/kg'] },
+    value: ({ Q, Δh }) => Q / Δh,
+  });
+}
+
+/** Steam rate for a heat rate [kg/h]: 3600 q / dh. */
+export function steamForPower(sheet: WorkingSheet, symbol: string, name: string, kW: number, dh: number): number {
+  return sheet.step({
+    symbol,
+    name,
+    formula: '3600 · q / Δh',
+    unit: 'kg/h',
+    source: ENERGY_BALANCE,
+    inputs: { q: [kW, 'kW'], Δh: [dh, 'kJ/kg'] },
+    value: ({ q, Δh }) => (3600 * q) / Δh,
+  });
+}
+
+/** Average rate of a spell [kg/h]. */
+export function averageRate(sheet: WorkingSheet, kg: number, minutes: number): number {
+  return sheet.step({
+    symbol: 'ṁ',
+    name: 'Average steam rate',
+    formula: '60 · m / t',
+    unit: 'kg/h',
+    source: ENERGY_BALANCE,
+    inputs: { m: [kg, 'kg'], t: [minutes, 'min'] },
+    value: ({ m, t }) => (60 * m) / t,
+  });
+}
