@@ -14,7 +14,7 @@ const RETORT: readonly Draw[] = [
 ];
 const BASE_KG_PER_H = 420;
 
-export const DRAWN_MINUTES = 180;
+export const DRAWN_MINUTES = 192;
 export const DRAWN_LIMIT_KG_PER_H = 2_900;
 export const BY_HABIT: readonly number[] = [12, 15, 19, 66, 68, 71, 120, 123, 125];
 export const APART: readonly number[] = [3, 15, 27, 56, 68, 80, 111, 123, 135];
