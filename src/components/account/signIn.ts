@@ -5,12 +5,6 @@ const OFFLINE: ProblemDto = {
   message: 'No connection to Steadmain. Check the network, then try again.',
 };
 
-/** Where to go after signing in: a page of this site only, else the person's first page. */
-export function pageAfterSignIn(search: string): string {
-  const next = new URLSearchParams(search).get('next') ?? '/';
-  return /^\/(?![/\\])/.test(next) ? next : '/';
-}
-
 async function postSession(form: HTMLFormElement): Promise<ProblemDto | null> {
   const data = new FormData(form);
   const body = JSON.stringify({ email: String(data.get('email') ?? '').trim(), password: data.get('password') });
@@ -37,7 +31,7 @@ function showProblem(form: HTMLFormElement, problem: ProblemDto | null): void {
   form.querySelector<HTMLInputElement>('[aria-invalid]')?.focus();
 }
 
-/** Lets the sign-in form post itself as JSON and say what is wrong beside the field. */
+/** Lets the sign-in form post itself as JSON, say what is wrong beside the field, and go on to its `data-next`. */
 export function followSignIn(form: HTMLFormElement): void {
   const button = form.querySelector<HTMLButtonElement>('button[type=submit]');
   form.addEventListener('submit', (event) => {
@@ -45,7 +39,7 @@ export function followSignIn(form: HTMLFormElement): void {
     if (button?.ariaBusy === 'true') return;
     if (button) button.ariaBusy = 'true';
     void postSession(form).then((problem) => {
-      if (!problem) return location.assign(pageAfterSignIn(location.search));
+      if (!problem) return location.assign(form.dataset.next ?? '/');
       if (button) button.ariaBusy = 'false';
       showProblem(form, problem);
     });

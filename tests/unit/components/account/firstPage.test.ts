@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import { firstPage } from '@/components/account/firstPage';
-import { pageAfterSignIn } from '@/components/account/signIn';
 import {
   APART,
   BY_HABIT,
@@ -9,19 +8,6 @@ import {
   furthestMove,
   minutesOver,
 } from '@/components/account/ventsDrawn';
-
-describe('pageAfterSignIn', () => {
-  it('goes back to the page that asked for the sign-in', () => {
-    expect(pageAfterSignIn('?next=%2Fshift%2F2026-11-30%3Fline%3Da')).toBe('/shift/2026-11-30?line=a');
-  });
-
-  it.each(['', '?next=', '?next=https://elsewhere.example', '?next=//elsewhere.example', '?next=/\\elsewhere.example'])(
-    'keeps to this site: %s',
-    (search) => {
-      expect(pageAfterSignIn(search)).toBe('/');
-    },
-  );
-});
 
 describe('firstPage', () => {
   it('is the page that a role works on', () => {
