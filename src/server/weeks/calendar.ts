@@ -1,7 +1,7 @@
 import type { UnitCalendar } from '@/core/plant/plant';
 import { mergeIntervals, type Interval } from '@/core/time/interval';
 import type { ShiftSpan } from '@/contracts/week';
-import { addDays, minuteOf, wallMinute, weekdayOf, type WeekTime } from './weekTime';
+import { addDays, ceilMinuteOf, minuteOf, wallMinute, weekdayOf, type WeekTime } from './weekTime';
 
 /** A shift as the plant sets it; one that ends at or before its start runs past midnight. */
 export interface ShiftRow {
@@ -63,12 +63,11 @@ export function unitCalendars(
 
 function withExceptions(time: WeekTime, open: readonly Interval[], exceptions: readonly ExceptionRow[]): Interval[] {
   const spans = (wanted: boolean): Interval[] =>
-    exceptions.filter((e) => e.open === wanted).map((e) => ({ from: minuteOf(time, e.fromAt), to: endOf(time, e) }));
+    exceptions
+      .filter((e) => e.open === wanted)
+      .map((e) => ({ from: minuteOf(time, e.fromAt), to: ceilMinuteOf(time, e.toAt) }));
   return subtract(mergeIntervals([...open, ...spans(true)]), mergeIntervals(spans(false)));
 }
-
-const endOf = (time: WeekTime, exception: ExceptionRow): number =>
-  Math.ceil((exception.toAt.getTime() - time.firstInstant.getTime()) / 60_000);
 
 function subtract(spans: readonly Interval[], taken: readonly Interval[]): Interval[] {
   return taken.reduce<Interval[]>(

@@ -35,6 +35,11 @@ export function minuteOf(time: WeekTime, instant: Date): number {
   return Math.floor((instant.getTime() - time.firstInstant.getTime()) / MINUTE_MS);
 }
 
+/** The first elapsed minute of the week that begins at or after an instant. */
+export function ceilMinuteOf(time: WeekTime, instant: Date): number {
+  return Math.ceil((instant.getTime() - time.firstInstant.getTime()) / MINUTE_MS);
+}
+
 /** The instant at which an elapsed minute of the week begins. */
 export function instantOf(time: WeekTime, minute: number): Date {
   return new Date(time.firstInstant.getTime() + minute * MINUTE_MS);
