@@ -23,7 +23,7 @@ export function keepAlive(name: string, file: string, env: Record<string, string
       current = startProcess(file, env, (line) => console.log(`[${name}] ${line}`));
       const reason = await current.ended;
       if (stopping) return;
-      waitMs = Date.now() - startedAt > STEADY_AFTER_MS ? FIRST_WAIT_MS : Math.min(waitMs * 2, LONGEST_WAIT_MS);
+      if (Date.now() - startedAt > STEADY_AFTER_MS) waitMs = FIRST_WAIT_MS;
       say(`The ${name} process ended by itself (${reason}); starting it again in ${waitMs / 1000} s`);
       await new Promise<void>((resolve) => {
         const timer = setTimeout(resolve, waitMs);
@@ -32,6 +32,7 @@ export function keepAlive(name: string, file: string, env: Record<string, string
           resolve();
         };
       });
+      waitMs = Math.min(waitMs * 2, LONGEST_WAIT_MS);
     }
   };
 

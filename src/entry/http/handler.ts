@@ -25,7 +25,7 @@ const FOR_EVER = 'public, max-age=31536000, immutable';
 /** The whole of the web process: health, client files, body limit, then the pages. */
 export function createHandler({ pages, clientDir, answers, behindProxy }: HandlerOptions): RequestListener {
   const compress = compression({
-    filter: (req, res) => mayCompress(res as unknown as ServerResponse) && compression.filter(req, res),
+    filter: (req, res) => mayCompress(res) && compression.filter(req, res),
   }) as unknown as (req: IncomingMessage, res: ServerResponse, next: Next) => void;
   const files = sirv(clientDir, {
     etag: true,
