@@ -1,0 +1,60 @@
+import type { BoilerDto, CapacityDto } from '@/contracts/capacity';
+import { capacityMinutes } from '@/core/header/judgement';
+import { overLimit, type OverSummary } from '@/core/header/over';
+import type { HeaderCapacity } from '@/core/plant/plant';
+import { toMinutes } from '@/core/time/stepFunction';
+import type { Draft } from './draft';
+
+interface PreviewInput {
+  readonly capacity: HeaderCapacity;
+  readonly reserveFraction: number;
+  readonly boilers: readonly BoilerDto[];
+  readonly loadKgPerH: Float64Array;
+}
+
+const sameRate = (a: number, b: number): boolean => Math.abs(a - b) < 0.5;
+
+/** The limit per minute as it would stand with the draft; null: not judged. The server has the last word. [kg/h] */
+export function limitWith(draft: Draft, input: PreviewInput): Float64Array | null {
+  const horizonMin = input.loadKgPerH.length;
+  const { limitKgPerH, exportKgPerH } = capacityMinutes(input.capacity, horizonMin);
+  if (draft.subject.kind === 'firing') return limitWithFiring(draft, input, limitKgPerH, exportKgPerH);
+  const limit = limitKgPerH?.slice() ?? new Float64Array(horizonMin).fill(Number.POSITIVE_INFINITY);
+  for (let t = draft.fromMin; t < draft.toMin; t++) {
+    const kept = exportKgPerH ? (exportKgPerH[t] ?? 0) * (1 - input.reserveFraction) : Number.POSITIVE_INFINITY;
+    limit[t] = Math.min(kept, draft.value ?? Number.POSITIVE_INFINITY);
+  }
+  return limit;
+}
+
+function limitWithFiring(
+  draft: Draft,
+  input: PreviewInput,
+  limitNow: Float64Array | null,
+  exportNow: Float64Array | null,
+): Float64Array | null {
+  const { subject } = draft;
+  const boiler = subject.kind === 'firing' ? input.boilers.find((b) => b.id === subject.boilerId) : undefined;
+  if (!boiler || !limitNow || !exportNow) return limitNow;
+  const share = toMinutes(boiler.share, limitNow.length);
+  const limit = limitNow.slice();
+  for (let t = draft.fromMin; t < draft.toMin; t++) {
+    const now = exportNow[t] ?? 0;
+    const kept = now * (1 - input.reserveFraction);
+    const then = (now + boiler.netKgPerH * ((draft.value ?? 0) - (share[t] ?? 0))) * (1 - input.reserveFraction);
+    const set = limitNow[t] ?? 0;
+    limit[t] = sameRate(set, kept) ? then : Math.min(set, then);
+  }
+  return limit;
+}
+
+/** What the plan would be over with the draft in force. */
+export function overWith(draft: Draft, input: PreviewInput): OverSummary | null {
+  const limit = limitWith(draft, input);
+  return limit && overLimit(input.loadKgPerH, limit, null);
+}
+
+/** The header's capacity and the boilers that feed it. */
+export function capacityOf(dto: CapacityDto, headerId: string): HeaderCapacity | undefined {
+  return dto.capacities.find((capacity) => capacity.headerId === headerId);
+}
