@@ -19,8 +19,19 @@ export function addableKgPerH(steamKgPerH: number): number {
   return Math.round(steamKgPerH * PARTS_PER_KG_PER_H) / PARTS_PER_KG_PER_H;
 }
 
-/** The phases of a placed activity in minutes of the week; none where it is not placed. */
-export function placedPhases(activity: Activity): PlacedPhase[] {
+const phasesByActivity = new WeakMap<Activity, readonly PlacedPhase[]>();
+
+/** The phases of a placed activity in minutes of the week, worked out once; none where it is not placed. */
+export function placedPhases(activity: Activity): readonly PlacedPhase[] {
+  let placed = phasesByActivity.get(activity);
+  if (!placed) {
+    placed = phasesInWeek(activity);
+    phasesByActivity.set(activity, placed);
+  }
+  return placed;
+}
+
+function phasesInWeek(activity: Activity): PlacedPhase[] {
   const start = activity.placement?.start;
   if (start === undefined) return [];
   return (drawnMode(activity)?.phases ?? []).map((phase) => ({
@@ -43,13 +54,9 @@ export function phasesPeakKgPerH(phases: readonly Phase[]): number {
 
 /** What an activity draws at a minute of the week; 0 outside its phases or not placed. [kg/h] */
 export function drawAt(activity: Activity, minute: number): number {
-  const start = activity.placement?.start;
-  if (start === undefined) return 0;
-  const offset = minute - start;
   let kgPerH = 0;
-  for (const phase of drawnMode(activity)?.phases ?? []) {
-    if (phase.offsetMin <= offset && offset < phase.offsetMin + phase.minutes) kgPerH += phase.steamKgPerH;
-  }
+  for (const phase of placedPhases(activity))
+    if (phase.from <= minute && minute < phase.to) kgPerH += phase.steamKgPerH;
   return kgPerH;
 }
 

@@ -1,7 +1,7 @@
-import { drawAt } from '../demand/activityLoad';
+import { drawAt, placedPhases } from '../demand/activityLoad';
 import type { Activity } from '../plant/activity';
-import { countsOn } from './network';
 import type { LoadSource } from './loadCurve';
+import { countsOn, headersOfUnit } from './network';
 
 /** An activity's draw at a moment. */
 export interface DrawShare {
@@ -10,36 +10,61 @@ export interface DrawShare {
   readonly kgPerH: number;
 }
 
+/** Answers who draws, for many moments of one plan. */
+export interface DrawFinder {
+  /** The activities that draw on a header at a minute, directly or through letdowns, greatest first. [kg/h] */
+  whoDraws(headerId: string, minute: number): DrawShare[];
+  /** Those whose draw is higher than in the minute before, greatest rise first. [kg/h] */
+  whoRises(headerId: string, minute: number): DrawShare[];
+}
+
+interface Drawing {
+  readonly activity: Activity;
+  readonly unitId: string;
+  readonly from: number;
+  readonly to: number;
+}
+
+/** A finder over placed activities, cleanings included where they are among them. */
+export function drawFinder(source: Pick<LoadSource, 'plant' | 'activities'>): DrawFinder {
+  const drawing = source.activities.flatMap((activity): Drawing[] => {
+    const unitId = activity.placement?.unitId;
+    if (unitId === undefined || headersOfUnit(source.plant, unitId).length === 0) return [];
+    return drawSpan(activity, unitId);
+  });
+  const find = (headerId: string, minute: number, kgPerHOf: (activity: Activity) => number) => {
+    const shares: DrawShare[] = [];
+    for (const { activity, unitId, from, to } of drawing) {
+      if (minute < from || minute >= to || !countsOn(source.plant, unitId, headerId)) continue;
+      const kgPerH = kgPerHOf(activity);
+      if (kgPerH > 0) shares.push({ activityId: activity.id, unitId, kgPerH });
+    }
+    return shares.sort(greatestFirst);
+  };
+  return {
+    whoDraws: (headerId, minute) => find(headerId, minute, (activity) => drawAt(activity, minute)),
+    whoRises: (headerId, minute) =>
+      find(headerId, minute, (activity) => drawAt(activity, minute) - drawAt(activity, minute - 1)),
+  };
+}
+
 /** The activities that draw on a header at a minute, directly or through letdowns, greatest first. [kg/h] */
 export function whoDraws(
   source: Pick<LoadSource, 'plant' | 'activities'>,
   headerId: string,
   minute: number,
 ): DrawShare[] {
-  return source.activities
-    .map((activity) => shareAt(activity, minute))
-    .filter((share) => share.kgPerH > 0 && countsOn(source.plant, share.unitId, headerId))
-    .sort(greatestFirst);
+  return drawFinder(source).whoDraws(headerId, minute);
 }
 
-/** The activities whose draw on a header is higher at a minute than in the minute before, greatest rise first. [kg/h] */
-export function whoRises(
-  source: Pick<LoadSource, 'plant' | 'activities'>,
-  headerId: string,
-  minute: number,
-): DrawShare[] {
-  return source.activities
-    .map((activity) => {
-      const share = shareAt(activity, minute);
-      return share.kgPerH > 0 ? { ...share, kgPerH: share.kgPerH - drawAt(activity, minute - 1) } : share;
-    })
-    .filter((share) => share.kgPerH > 0 && countsOn(source.plant, share.unitId, headerId))
-    .sort(greatestFirst);
-}
-
-function shareAt(activity: Activity, minute: number): DrawShare {
-  const unitId = activity.placement?.unitId ?? '';
-  return { activityId: activity.id, unitId, kgPerH: drawAt(activity, minute) };
+function drawSpan(activity: Activity, unitId: string): Drawing[] {
+  let from = Infinity;
+  let to = -Infinity;
+  for (const phase of placedPhases(activity)) {
+    from = Math.min(from, phase.from);
+    to = Math.max(to, phase.to);
+  }
+  return from < to ? [{ activity, unitId, from, to }] : [];
 }
 
 function greatestFirst(a: DrawShare, b: DrawShare): number {

@@ -1,17 +1,16 @@
 import type { HeaderJudgement } from '../header/judgement';
 import type { OverSummary } from '../header/over';
-import { whoDraws, whoRises } from '../header/whoDraws';
+import { drawFinder, type DrawFinder } from '../header/whoDraws';
 import type { Activity } from '../plant/activity';
 import type { PlantModel } from '../plant/plant';
 import type { SteamBreach } from './breach';
 
-interface Drawn {
-  readonly plant: PlantModel;
-  readonly activities: readonly Activity[];
-}
-
 /** Spans over the limit or over a letdown, and steps too steep, of the headers judged. */
-export function steamBreaches(headers: readonly HeaderJudgement[], drawn: Drawn): SteamBreach[] {
+export function steamBreaches(
+  headers: readonly HeaderJudgement[],
+  source: { readonly plant: PlantModel; readonly activities: readonly Activity[] },
+): SteamBreach[] {
+  const drawn = drawFinder(source);
   return headers.flatMap((header) => [
     ...overBreaches('overLimit', header.headerId, header.over, drawn),
     ...overBreaches('letdownOver', header.headerId, header.letdown, drawn),
@@ -23,7 +22,7 @@ function overBreaches(
   code: 'overLimit' | 'letdownOver',
   headerId: string,
   over: OverSummary | null,
-  drawn: Drawn,
+  drawn: DrawFinder,
 ): SteamBreach[] {
   return (over?.spans ?? []).map((span) => ({
     id: `${code}:${headerId}:${span.from}`,
@@ -31,7 +30,7 @@ function overBreaches(
     code,
     from: span.from,
     to: span.to,
-    activityIds: whoDraws(drawn, headerId, span.peakMinute).map((share) => share.activityId),
+    activityIds: drawn.whoDraws(headerId, span.peakMinute).map((share) => share.activityId),
     headerId,
     overKgPerH: span.peakOverKgPerH,
     kg: span.kg,
@@ -39,14 +38,14 @@ function overBreaches(
   }));
 }
 
-function stepBreaches(header: HeaderJudgement, drawn: Drawn): SteamBreach[] {
+function stepBreaches(header: HeaderJudgement, drawn: DrawFinder): SteamBreach[] {
   return header.steps.map((step) => ({
     id: `stepTooSteep:${header.headerId}:${step.from}`,
     class: 'steam',
     code: 'stepTooSteep',
     from: step.from,
     to: step.to,
-    activityIds: whoRises(drawn, header.headerId, step.from).map((share) => share.activityId),
+    activityIds: drawn.whoRises(header.headerId, step.from).map((share) => share.activityId),
     headerId: header.headerId,
     overKgPerH: step.heightKgPerH,
     kg: step.kg,
