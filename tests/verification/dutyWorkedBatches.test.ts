@@ -152,7 +152,7 @@ describe('worked batch C: still retort', () => {
     ['Retort and load', 'c_p', 3.6267],
     ['Retort and load', 'A', 21.1115],
     ['Retort and load', 'V_0', 4.84461],
-    ['Retort and load', 'ṁ', 42.7604],
+    ['Retort and load', 'ṁ_o', 42.7604],
     ['Vent', 'Q_shell', 131_555.6],
     ['Vent', 'Q_baskets', 14_800],
     ['Vent', 'Q_cans', 2181.67],
@@ -176,7 +176,7 @@ describe('worked batch C: still retort', () => {
   });
 
   it('loses 68.8093 kg by the vents', () => {
-    expectFigure((stepValue(working, 'Vent', 'ṁ') * 6) / 60, 68.8093);
+    expectFigure((stepValue(working, 'Vent', 'ṁ_o') * 6) / 60, 68.8093);
   });
 
   it('takes 0.401690 kg of steam per kg of contents, 150.568 kg/h in process time', () => {

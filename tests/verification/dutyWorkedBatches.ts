@@ -2,7 +2,7 @@
 import { STANDARD_ATMOSPHERE } from '@/core/quantity/pressure';
 import { barGauge } from '@/core/quantity/units';
 import type { SteamSupply } from '@/core/duty/duty';
-import type { JacketedKettleInput } from '@/core/duty/jacketedKettle';
+import type { JacketedKettleInput } from '@/core/duty/jacketedKettleInput';
 import type { SteamBlancherInput } from '@/core/duty/steamBlancher';
 import type { StillRetortInput } from '@/core/duty/stillRetortInput';
 import { steamState } from '@/core/steam/steamState';

@@ -60,14 +60,14 @@ export function heatGivenUp(sheet: WorkingSheet, headerH: number, condensateH: n
 }
 
 /** Writes down the specific heat used [kJ/kgK]. */
-export function writeSpecificHeat(sheet: WorkingSheet, cp: SpecificHeat, atC: number): number {
+export function writeSpecificHeat(sheet: WorkingSheet, cp: SpecificHeat): number {
   return sheet.step({
     symbol: 'c_p',
     name: 'Specific heat of the product',
     formula: cp.formula,
     unit: 'kJ/kgK',
     source: cp.source,
-    inputs: { t: [atC, '°C'] },
+    inputs: cp.inputs,
     value: () => cp.value,
   });
 }

@@ -7,58 +7,16 @@
 import { toAbsolute } from '../quantity/pressure';
 import { shortNumber } from '../quantity/range';
 import { barGauge, celsius } from '../quantity/units';
-import { fail, ok, problem, type Problem, type Result } from '../result';
+import { fail, ok, problem, type Result } from '../result';
 import { saturationAtPressure, saturationAtTemperature, type Saturation } from '../steam/saturation';
 import { throttle, type SteamState } from '../steam/steamState';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
 import { fallingRate, heatUpPieces, pieceSteamKg, type FallingRate } from './fallingRate';
-import { allOf, checkInputs, range, type InputRanges } from './inputs';
-import { specificHeat, type SpecificHeat, type SpecificHeatBasis } from './specificHeat';
+import { allOf } from './inputs';
+import { checkJacketedKettle, type JacketedKettleInput } from './jacketedKettleInput';
+import { specificHeat, type SpecificHeat } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
-
-export interface JacketedKettleInput {
-  readonly batchKg: number;
-  readonly product: SpecificHeatBasis;
-  readonly kettleSteelKg: number;
-  readonly startC: number;
-  /** End of the heat-up, and boiling point while boiling off. */
-  readonly endC: number;
-  readonly jacketPressureBarG: number;
-  readonly heatTransferWPerM2K: number;
-  readonly jacketAreaM2: number;
-  /** Lost from jacket and kettle while heating up and boiling off. */
-  readonly heatingLossKW: number;
-  /** Water to boil off; 0 leaves the phase out, as a length of 0 does with the hold. */
-  readonly boilOffKg: number;
-  readonly holdMin: number;
-  readonly holdLossKW: number;
-}
-
-export const JACKETED_KETTLE_RANGES: InputRanges<JacketedKettleInput> = {
-  batchKg: range('Batch', 'kg', 1, 20_000),
-  kettleSteelKg: range('Kettle steel', 'kg', 0, 10_000),
-  startC: range('Temperature at the start', '°C', 0, 99),
-  endC: range('Temperature at the end', '°C', 1, 130),
-  jacketPressureBarG: range('Jacket pressure', 'bar g', 0, 10),
-  heatTransferWPerM2K: range('Heat transfer coefficient', 'W/m²K', 20, 5000),
-  jacketAreaM2: range('Jacket surface', 'm²', 0.05, 50),
-  heatingLossKW: range('Loss while heating', 'kW', 0, 200),
-  boilOffKg: range('Water boiled off', 'kg', 0, 10_000),
-  holdMin: range('Hold', 'min', 0, 1440),
-  holdLossKW: range('Loss while holding', 'kW', 0, 200),
-};
-
-function checkOrder({ startC, endC, batchKg, boilOffKg }: JacketedKettleInput): Problem | undefined {
-  if (endC <= startC) {
-    return problem('DUTY-ORDER', `The batch must end hotter than it starts: ${startC} to ${endC} °C.`, 'endC');
-  }
-  if (boilOffKg >= batchKg) {
-    const amounts = `${boilOffKg} kg of a batch of ${batchKg} kg`;
-    return problem('DUTY-ORDER', `Water boiled off must be less than the batch: ${amounts}.`, 'boilOffKg');
-  }
-  return undefined;
-}
 
 interface Conditions {
   readonly cp: SpecificHeat;
@@ -81,9 +39,9 @@ function conditionsOf(input: JacketedKettleInput, supply: SteamSupply): Result<C
   if (!conditions.ok) return conditions;
   const { temperature } = conditions.value.jacketSaturation;
   if (temperature - input.endC >= LEAST_DIFFERENCE_K) return conditions;
-  const text = `The jacket condenses at ${shortNumber(temperature)} °C; to bring the batch to ${input.endC} °C it must be
- at least ${LEAST_DIFFERENCE_K} K hotter: raise the jacket pressure.`;
-  return fail(problem('DUTY-JACKET', text.replace(/\n/, ''), 'jacketPressureBarG'));
+  const need = shortNumber(input.endC + LEAST_DIFFERENCE_K);
+  const text = `The jacket condenses at ${shortNumber(temperature)} °C; it must be at least ${need} °C to heat the batch.`;
+  return fail(problem('DUTY-JACKET', `${text} Raise the jacket pressure.`, 'jacketPressureBarG'));
 }
 
 /** What all phases share, written down as it is worked out. */
@@ -97,7 +55,7 @@ interface Common {
 
 function common(sheet: WorkingSheet, input: JacketedKettleInput, header: SteamState, at: Conditions): Common {
   sheet.section('Kettle and jacket');
-  const cp = balance.writeSpecificHeat(sheet, at.cp, (input.startC + input.endC) / 2);
+  const cp = balance.writeSpecificHeat(sheet, at.cp);
   const capacityKJPerK = sheet.step({
     symbol: 'C',
     name: 'Heat capacity of batch and kettle',
@@ -169,7 +127,7 @@ function rateAt(sheet: WorkingSheet, symbol: string, name: string, batchC: numbe
  * @returns as {@link jacketedKettle}.
  */
 export function kettleHeatUp(input: JacketedKettleInput, supply: SteamSupply): Result<FallingRate> {
-  const bad = checkInputs(input, JACKETED_KETTLE_RANGES) ?? checkOrder(input);
+  const bad = checkJacketedKettle(input);
   if (bad) return fail(bad);
   const at = conditionsOf(input, supply);
   if (!at.ok) return at;
@@ -248,7 +206,7 @@ function hold(sheet: WorkingSheet, input: JacketedKettleInput, { dh }: Common): 
  * STEAM-THROTTLE when the header's pressure is below the jacket's; STEAM-RANGE.
  */
 export function jacketedKettle(input: JacketedKettleInput, supply: SteamSupply): Result<Duty> {
-  const bad = checkInputs(input, JACKETED_KETTLE_RANGES) ?? checkOrder(input);
+  const bad = checkJacketedKettle(input);
   if (bad) return fail(bad);
   const at = conditionsOf(input, supply);
   if (!at.ok) return at;

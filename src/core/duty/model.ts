@@ -1,7 +1,8 @@
 /** One door to the duty models: a stage's data names its model and inputs; a typed profile is what a meter says. */
 import { fail, ok, problem, type Result } from '../result';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
-import { jacketedKettle, type JacketedKettleInput } from './jacketedKettle';
+import { jacketedKettle } from './jacketedKettle';
+import type { JacketedKettleInput } from './jacketedKettleInput';
 import { steamBlancher, type SteamBlancherInput } from './steamBlancher';
 import { stillRetort } from './stillRetort';
 import type { StillRetortInput } from './stillRetortInput';

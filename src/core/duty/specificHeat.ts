@@ -28,6 +28,8 @@ export interface SpecificHeat {
   readonly value: number;
   readonly formula: string;
   readonly source: string;
+  /** What the formula took: symbol to value and unit. */
+  readonly inputs: Readonly<Record<string, readonly [value: number, unit: string]>>;
 }
 
 /** a + b t + c t2 [kJ/kgK], t in degC. */
@@ -70,12 +72,21 @@ function fromComposition(composition: FoodComposition, tC: number): Result<Speci
   const sum = COMPONENTS.reduce((total, name) => total + composition[name], 0);
   const bad = checkInputs(composition, FRACTIONS) ?? checkRange(DUTY_RANGE, SUM, sum, 'composition');
   if (bad) return fail(bad);
+  const fractions = COMPONENTS.map((name) => [`x_${name}`, [composition[name], '']] as const);
   return ok({
     value: choiOkos(composition, tC),
-    formula: 'Σ x_i (a_i + b_i t + c_i t²)',
+    formula: 'Σ x_i · (a_i + b_i · t + c_i · t²)',
     source: 'Choi & Okos (1986)',
+    inputs: { t: [tC, '°C'], ...Object.fromEntries(fractions) },
   });
 }
+
+const fromWater = (water: number): SpecificHeat => ({
+  value: siebel(water),
+  formula: '0.837 + 3.349 · x_w',
+  source: 'Siebel (1892), from water alone: rough',
+  inputs: { x_w: [water, ''] },
+});
 
 /**
  * Specific heat at a temperature [degC].
@@ -91,11 +102,7 @@ export function specificHeat(basis: SpecificHeatBasis, tC: number): Result<Speci
     case 'waterOnly': {
       const bad = checkRange(DUTY_RANGE, FRACTIONS.water, basis.water, 'water');
       if (bad) return fail(bad);
-      return ok({
-        value: siebel(basis.water),
-        formula: '0.837 + 3.349 x_w',
-        source: 'Siebel (1892), water only: rough',
-      });
+      return ok(fromWater(basis.water));
     }
     case 'given': {
       const bad = checkRange(DUTY_RANGE, range('Specific heat', 'kJ/kgK', 0.5, 4.5), basis.kJPerKgK, 'kJPerKgK');
@@ -103,7 +110,7 @@ export function specificHeat(basis: SpecificHeatBasis, tC: number): Result<Speci
       if (basis.source.trim() === '') {
         return fail(problem('DUTY-SOURCE', 'Say where the specific heat comes from.', 'source'));
       }
-      return ok({ value: basis.kJPerKgK, formula: 'as given', source: basis.source });
+      return ok({ value: basis.kJPerKgK, formula: 'as given', source: basis.source, inputs: {} });
     }
   }
 }

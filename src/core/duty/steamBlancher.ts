@@ -103,7 +103,7 @@ function warmUp(sheet: WorkingSheet, input: SteamBlancherInput, h: number, at: E
 function run(sheet: WorkingSheet, input: SteamBlancherInput, h: number, at: Enthalpies, lossKW: number): DutyPhase {
   if (input.runMin === 0) return { kind: 'run', minutes: 0, steamKgPerH: 0 };
   sheet.section('Run');
-  const cp = balance.writeSpecificHeat(sheet, at.cp, meanC(input));
+  const cp = balance.writeSpecificHeat(sheet, at.cp);
   const heatKW = sheet.step({
     symbol: 'q_product',
     name: 'Heat into the product',

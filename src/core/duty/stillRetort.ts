@@ -7,18 +7,18 @@
 import { toAbsolute } from '../quantity/pressure';
 import { barGauge, celsius } from '../quantity/units';
 import { fail, ok, problem, type Result } from '../result';
-import { boreAreaMm2, openingFlowKgPerH } from '../steam/opening';
+import { boreAreaMm2, openingAt, type Opening } from '../steam/opening';
 import { saturationAtTemperature, type Saturation } from '../steam/saturation';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
 import { allOf } from './inputs';
+import { openingFlow, surfaceArea, voidVolume } from './retortVessel';
 import { specificHeat, type SpecificHeat } from './specificHeat';
 import { checkStillRetort, type StillRetortInput } from './stillRetortInput';
 import { openWorking, type WorkingSheet } from './working';
 
 const PROCESS_CAUTION =
   'Vent, come-up and process time stand as the process authority set them; this page works out their steam, no more.';
-const STEEL_KG_PER_M3 = 7850;
 
 /** Looked up or worked out once for the cycle. */
 interface Cycle {
@@ -29,7 +29,7 @@ interface Cycle {
   readonly voidM3: number;
   readonly vent: Saturation;
   readonly process: Saturation;
-  readonly ventKgPerH: number;
+  readonly ventOpening: Opening;
   readonly bleedersKgPerH: number;
 }
 
@@ -37,38 +37,7 @@ interface Lookups {
   readonly cp: SpecificHeat;
   readonly vent: Saturation;
   readonly process: Saturation;
-  readonly ventKgPerH: number;
-}
-
-function voidVolume(sheet: WorkingSheet, input: StillRetortInput): number {
-  return sheet.step({
-    symbol: 'V_0',
-    name: 'Void that steam fills',
-    formula: 'π/4 · D² · L − n · V_c − m_b / ρ',
-    unit: 'm³',
-    source: 'Geometry',
-    inputs: {
-      D: [input.shellDiameterM, 'm'],
-      L: [input.shellLengthM, 'm'],
-      n: [input.containers, ''],
-      V_c: [input.containerVolumeM3, 'm³'],
-      m_b: [input.basketsKg, 'kg'],
-      ρ: [STEEL_KG_PER_M3, 'kg/m³'],
-    },
-    value: ({ D, L, n, V_c, m_b, ρ }) => (Math.PI / 4) * D ** 2 * L - n * V_c - m_b / ρ,
-  });
-}
-
-function surfaceArea(sheet: WorkingSheet, input: StillRetortInput): number {
-  return sheet.step({
-    symbol: 'A',
-    name: 'Bare surface, flat ends',
-    formula: 'π · D · L + 2 · π/4 · D²',
-    unit: 'm²',
-    source: 'Geometry',
-    inputs: { D: [input.shellDiameterM, 'm'], L: [input.shellLengthM, 'm'] },
-    value: ({ D, L }) => Math.PI * D * L + (Math.PI / 2) * D ** 2,
-  });
+  readonly ventOpening: Opening;
 }
 
 function contentsCapacity(sheet: WorkingSheet, input: StillRetortInput, cp: number): number {
@@ -83,18 +52,6 @@ function contentsCapacity(sheet: WorkingSheet, input: StillRetortInput, cp: numb
   });
 }
 
-function writeFlow(sheet: WorkingSheet, name: string, count: number, boreMm: number, kgPerH: number): number {
-  return sheet.step({
-    symbol: 'ṁ',
-    name,
-    formula: 'min(C_d · A · √(2 · ρ · Δp), C_d · 0.525154 · A · p)',
-    unit: 'kg/h',
-    source: "Napier's rule when choked, incompressible flow below",
-    inputs: { n: [count, ''], d: [boreMm, 'mm'] },
-    value: () => kgPerH,
-  });
-}
-
 function lookUp(input: StillRetortInput, { ambient }: SteamSupply): Result<Lookups> {
   const venting = toAbsolute(barGauge(input.ventPressureBarG), ambient);
   const ventArea = input.vents * boreAreaMm2(input.ventBoreMm);
@@ -102,28 +59,28 @@ function lookUp(input: StillRetortInput, { ambient }: SteamSupply): Result<Looku
     cp: specificHeat(input.contents, input.specificHeatAtC),
     vent: saturationAtTemperature(celsius(input.ventEndC)),
     process: saturationAtTemperature(celsius(input.processC)),
-    ventKgPerH: openingFlowKgPerH(venting, ambient, ventArea, input.ventDischarge),
+    ventOpening: openingAt(venting, ambient, ventArea, input.ventDischarge),
   });
 }
 
 function cycleOf(sheet: WorkingSheet, input: StillRetortInput, supply: SteamSupply): Result<Cycle> {
   const at = lookUp(input, supply);
   if (!at.ok) return at;
-  const { cp, vent, process, ventKgPerH } = at.value;
+  const { cp, vent, process, ventOpening } = at.value;
   const bleederArea = input.bleeders * boreAreaMm2(input.bleederBoreMm);
-  const bleeding = openingFlowKgPerH(process.pressure, supply.ambient, bleederArea, 1);
+  const bleeding = openingAt(process.pressure, supply.ambient, bleederArea, 1);
   if (!bleeding.ok) return bleeding;
   sheet.section('Retort and load');
-  const contentsKJPerK = contentsCapacity(sheet, input, balance.writeSpecificHeat(sheet, cp, input.specificHeatAtC));
+  const contentsKJPerK = contentsCapacity(sheet, input, balance.writeSpecificHeat(sheet, cp));
   const areaM2 = surfaceArea(sheet, input);
   const voidM3 = voidVolume(sheet, input);
   if (voidM3 < 0) {
     const text = `Containers and baskets take ${(-voidM3).toFixed(2)} m³ more than the retort holds.`;
     return fail(problem('DUTY-VOID', `${text} Check their number and size.`, 'containers'));
   }
-  const bleedersKgPerH = writeFlow(sheet, 'Bleeders', input.bleeders, input.bleederBoreMm, bleeding.value);
+  const bleedersKgPerH = openingFlow(sheet, 'Leaving by the bleeders', bleeding.value);
   const headerH = supply.header.h;
-  return ok({ input, headerH, contentsKJPerK, areaM2, voidM3, vent, process, ventKgPerH, bleedersKgPerH });
+  return ok({ input, headerH, contentsKJPerK, areaM2, voidM3, vent, process, ventOpening, bleedersKgPerH });
 }
 
 /** Heat into the contents and lost from the shell over a spell, with what the metal takes [kJ]. */
@@ -188,7 +145,7 @@ function fillKg(sheet: WorkingSheet, voidM3: number, beforeKgPerM3: number, afte
 }
 
 function vent(sheet: WorkingSheet, cycle: Cycle): DutyPhase {
-  const { input, headerH, voidM3, ventKgPerH } = cycle;
+  const { input, headerH, voidM3, ventOpening } = cycle;
   const { ventEndC: endC, ventMin: minutes, containers } = input;
   sheet.section('Vent');
   const steel = (symbol: string, name: string, kg: number, fromC: number) =>
@@ -203,7 +160,7 @@ function vent(sheet: WorkingSheet, cycle: Cycle): DutyPhase {
   const dh = balance.heatGivenUp(sheet, headerH, cycle.vent.hf, endC);
   const condensedKg = balance.steamForHeat(sheet, 'm_c', 'Steam condensed', heatKJ, dh);
   const filled = fillKg(sheet, voidM3, 0, 1 / cycle.vent.vg);
-  const outKgPerH = writeFlow(sheet, 'Leaving by the vents', input.vents, input.ventBoreMm, ventKgPerH);
+  const outKgPerH = openingFlow(sheet, 'Leaving by the vents', ventOpening);
   return spellPhase(sheet, 'vent', minutes, { condensedKg, fillKg: filled, outKgPerH });
 }
 
