@@ -1,0 +1,55 @@
+import { and, asc, eq, gt, lt } from 'drizzle-orm';
+import type { Db } from '@/db/client';
+import { baseLoads, boilerFirings, boilers, headers, plants, steamLimits } from '@/db/schema/index';
+import type { WeekTime } from '../weeks/weekTime';
+
+export type CapacityRows = Awaited<ReturnType<typeof capacityRows>>;
+export type BoilerRow = CapacityRows['boilers'][number];
+export type FiringRow = CapacityRows['firings'][number];
+export type LimitRow = CapacityRows['limits'][number];
+
+async function plantRow(tx: Db, plantId: string) {
+  const [plant] = await tx
+    .select({ altitudeM: plants.altitudeM, reserveFraction: plants.reserveFraction })
+    .from(plants)
+    .where(eq(plants.id, plantId));
+  if (!plant) throw new Error(`no plant ${plantId}`);
+  return plant;
+}
+
+function firingsOf(tx: Db, plantId: string, time: WeekTime) {
+  const touches = and(lt(boilerFirings.fromAt, time.endInstant), gt(boilerFirings.toAt, time.firstInstant));
+  return tx
+    .select()
+    .from(boilerFirings)
+    .where(and(eq(boilerFirings.plantId, plantId), touches))
+    .orderBy(asc(boilerFirings.sequence));
+}
+
+function limitsOf(tx: Db, plantId: string, time: WeekTime) {
+  const touches = and(lt(steamLimits.fromAt, time.endInstant), gt(steamLimits.toAt, time.firstInstant));
+  return tx
+    .select()
+    .from(steamLimits)
+    .where(and(eq(steamLimits.plantId, plantId), touches))
+    .orderBy(asc(steamLimits.sequence));
+}
+
+/** All that the capacity of a plant's week is made of; what was said later comes later. */
+export async function capacityRows(tx: Db, plantId: string, time: WeekTime) {
+  const plant = await plantRow(tx, plantId);
+  const headerRows = await tx
+    .select()
+    .from(headers)
+    .where(eq(headers.plantId, plantId))
+    .orderBy(asc(headers.position), asc(headers.id));
+  const boilerRows = await tx
+    .select()
+    .from(boilers)
+    .where(eq(boilers.plantId, plantId))
+    .orderBy(asc(boilers.position), asc(boilers.id));
+  const firings = await firingsOf(tx, plantId, time);
+  const limits = await limitsOf(tx, plantId, time);
+  const base = await tx.select().from(baseLoads).where(eq(baseLoads.plantId, plantId)).orderBy(asc(baseLoads.id));
+  return { plant, headers: headerRows, boilers: boilerRows, firings, limits, baseLoads: base };
+}

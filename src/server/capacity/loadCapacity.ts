@@ -1,0 +1,40 @@
+import { buildHeaderCapacity, NOT_JUDGED_KG_PER_H } from '@/core/header/capacity';
+import type { HeaderCapacity } from '@/core/plant/plant';
+import { stepsFromSpans, type ValuedSpan } from '@/core/time/stepMath';
+import type { Db } from '@/db/client';
+import { sumByHour } from '../weeks/weeklySteps';
+import type { WeekTime } from '../weeks/weekTime';
+import { capacityRows, type CapacityRows } from './capacity.repo';
+import { boilerInForce, spanInWeek, spansOf } from './inForce';
+
+/** Limits in force on a header: what was said later holds, and a row without a limit takes earlier ones back. */
+function setLimits(rows: CapacityRows, headerId: string, time: WeekTime): ValuedSpan[] {
+  const own = rows.limits.filter((limit) => limit.headerId === headerId);
+  const said = own.map((row) => ({ ...spanInWeek(time, row), value: row.limitKgPerH ?? NOT_JUDGED_KG_PER_H }));
+  return spansOf(stepsFromSpans(said, NOT_JUDGED_KG_PER_H), NOT_JUDGED_KG_PER_H, time.horizonMin);
+}
+
+/** Every header's capacity over a week, from rows. */
+export function headerCapacities(rows: CapacityRows, time: WeekTime): HeaderCapacity[] {
+  return rows.headers.map((header) =>
+    buildHeaderCapacity({
+      headerId: header.id,
+      boilers: rows.boilers
+        .filter((boiler) => boiler.headerId === header.id)
+        .map((boiler) => boilerInForce(rows, boiler, time)),
+      reserveFraction: rows.plant.reserveFraction,
+      setLimits: setLimits(rows, header.id, time),
+      baseLoadKgPerH: sumByHour(
+        time,
+        rows.baseLoads
+          .filter((load) => load.headerId === header.id)
+          .map(({ fromHour, toHour, kgPerH }) => ({ fromHour, toHour, value: kgPerH })),
+      ),
+    }),
+  );
+}
+
+/** Every header's capacity over a plant's week, in the plant's order of headers. */
+export async function loadCapacity(tx: Db, plantId: string, time: WeekTime): Promise<HeaderCapacity[]> {
+  return headerCapacities(await capacityRows(tx, plantId, time), time);
+}
