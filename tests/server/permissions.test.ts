@@ -1,0 +1,85 @@
+import type { APIRoute } from 'astro';
+import { beforeAll, describe, expect, it } from 'vitest';
+import { ROLES, type Role } from '@/contracts/account';
+import { ROLE_NAMES } from '@/server/auth/permissions';
+import { callApi } from '../support/api';
+import { openWorld, sessionOf } from '../support/world';
+
+const METHODS = ['GET', 'POST', 'PUT', 'PATCH', 'DELETE', 'HEAD', 'OPTIONS', 'ALL'];
+
+const EVERYBODY: readonly Role[] = ROLES;
+const PLANNER: readonly Role[] = ['planner'];
+const UTILITIES: readonly Role[] = ['utilitiesLead'];
+
+/** Who may call what, written out a second time on purpose; `anybody` needs no session. */
+const WHO_MAY: Readonly<Record<string, readonly Role[] | 'anybody'>> = {
+  'POST session/index': 'anybody',
+  'DELETE session/index': 'anybody',
+  'POST session/plant': EVERYBODY,
+  'GET events': EVERYBODY,
+  'GET process-data/index': EVERYBODY,
+  'POST process-data/[id]/release': ['qualityLead'],
+  'GET weeks/[week]/capacity': EVERYBODY,
+  'POST weeks/[week]/firings': UTILITIES,
+  'POST weeks/[week]/limits': UTILITIES,
+  'GET weeks/[week]/index': EVERYBODY,
+  'POST weeks/[week]/edits': PLANNER,
+  'POST weeks/[week]/issues': PLANNER,
+  'POST weeks/[week]/agreements': UTILITIES,
+  'GET weeks/[week]/shift-sheet': EVERYBODY,
+  'POST weeks/[week]/floor-events': ['lineSupervisor'],
+  'POST weeks/[week]/levelling': PLANNER,
+  'GET levelling/[run]/index': EVERYBODY,
+  'POST levelling/[run]/cancel': PLANNER,
+  'POST levelling/[run]/accept': PLANNER,
+  'POST levelling/[run]/discard': PLANNER,
+};
+
+const files = import.meta.glob<Record<string, unknown>>('../../src/pages/api/**/*.ts', { eager: true });
+const endpoints = new Map<string, APIRoute>(
+  Object.entries(files).flatMap(([file, exported]) => {
+    const path = file.replace('../../src/pages/api/', '').replace(/\.ts$/, '');
+    return Object.entries(exported).map(([method, route]) => [`${method} ${path}`, route as APIRoute] as const);
+  }),
+);
+
+beforeAll(openWorld);
+
+/** The answer to a call without input: what is refused for its input has passed the role. */
+async function call(name: string, session?: string): Promise<{ status: number; text: string }> {
+  const method = name.split(' ')[0] ?? 'GET';
+  const controller = new AbortController();
+  const params = { week: 'none', run: 'none', id: 'none' };
+  const route = endpoints.get(name);
+  if (!route) throw new Error(`no endpoint ${name}`);
+  const response = await callApi(route, { method, params, signal: controller.signal, ...(session ? { session } : {}) });
+  controller.abort();
+  return { status: response.status, text: response.status === 204 ? '' : await response.text() };
+}
+
+describe('endpoints', () => {
+  it('are all in the table of who may call them, and the table names no others', () => {
+    expect([...endpoints.keys()].sort()).toEqual(Object.keys(WHO_MAY).sort());
+  });
+
+  it('export methods and nothing else', () => {
+    expect([...endpoints.keys()].map((name) => name.split(' ')[0]).filter((m) => !METHODS.includes(m ?? ''))).toEqual(
+      [],
+    );
+  });
+});
+
+describe.each(Object.entries(WHO_MAY))('%s', (name, who) => {
+  it(who === 'anybody' ? 'asks for no session' : 'asks for a session', async () => {
+    const { status, text } = await call(name);
+    if (who === 'anybody') expect(status).not.toBe(401);
+    else expect([status, JSON.parse(text)]).toMatchObject([401, { code: 'SIGN-IN' }]);
+  });
+
+  it.each(who === 'anybody' ? [] : ROLES)('answers a %s as the table says', async (role) => {
+    const { status, text } = await call(name, await sessionOf(`north-${role}`));
+    if (who.includes(role)) return expect([401, 403, 500]).not.toContain(status);
+    expect([status, JSON.parse(text)]).toMatchObject([403, { code: 'ROLE' }]);
+    for (const one of who as readonly Role[]) expect(text).toContain(ROLE_NAMES[one]);
+  });
+});
