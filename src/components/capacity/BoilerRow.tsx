@@ -1,0 +1,129 @@
+import type { KeyboardEvent, PointerEvent } from 'react';
+import type { BoilerDto } from '@/contracts/capacity';
+import { valueAt } from '@/core/time/stepFunction';
+import type { Clock } from '../time';
+import type { Draft, Grip } from './draft';
+import { Grips } from './Grips';
+import { minuteAtX, segments, xOf, type DeskScale } from './scale';
+import type { DayOfWeek } from './wallTime';
+
+interface Props {
+  readonly boiler: BoilerDto;
+  /** Across as the strip above; its height is this row's. */
+  readonly scale: DeskScale;
+  readonly days: readonly DayOfWeek[];
+  readonly clock: Clock;
+  readonly nowMin: number;
+  readonly horizonMin: number;
+  readonly draft: Draft | null;
+  readonly canSet: boolean;
+  readonly onHold: (event: PointerEvent<Element>, start: Draft, grip: Grip) => void;
+  readonly onMove: (event: PointerEvent<Element>) => void;
+  readonly onRelease: (event: PointerEvent<Element>) => void;
+  readonly onKey: (event: KeyboardEvent, draft: Draft, grip: Grip) => void;
+}
+
+const PAD = 7;
+
+/** 'lit', 'shut', 'at 70 %' */
+export function shareText(share: number): string {
+  if (share <= 0) return 'shut';
+  return share >= 1 ? 'lit' : `at ${Math.round(share * 100)} %`;
+}
+
+/** A boiler over the week as a bar: full where it is lit, lower where it is derated, a gap where it is shut. */
+export function BoilerRow(props: Props) {
+  const { boiler, scale, days, clock, draft, canSet } = props;
+  const parts = segments(boiler.share, scale.from, scale.to);
+  const inner = scale.height - 2 * PAD;
+  const shown = draft?.subject.kind === 'firing' && draft.subject.boilerId === boiler.id ? draft : null;
+
+  const drawFrom = (event: PointerEvent<SVGRectElement>): void => {
+    if (!canSet) return;
+    const minute = minuteAtX(scale, event.clientX - event.currentTarget.getBoundingClientRect().left);
+    const snapped = Math.round(minute / 5) * 5;
+    const value = valueAt(boiler.share, Math.min(snapped, props.horizonMin - 1)) > 0 ? 0 : 1;
+    props.onHold(
+      event,
+      { subject: { kind: 'firing', boilerId: boiler.id }, fromMin: snapped, toMin: snapped, value },
+      'draw',
+    );
+  };
+
+  return (
+    <svg
+      width={scale.width}
+      height={scale.height}
+      className={`block touch-pan-y select-none ${canSet ? 'cursor-crosshair' : ''}`}
+      role="group"
+      aria-label={`${boiler.name}: ${parts.map((p) => `${shareText(p.value)} ${clock.dayTime(p.from)} to ${clock.dayTime(p.to)}`).join(', ')}`}
+      onPointerMove={props.onMove}
+      onPointerUp={props.onRelease}
+      onPointerCancel={props.onRelease}
+    >
+      {days.map((day) => (
+        <line
+          key={day.date}
+          x1={xOf(scale, day.from)}
+          x2={xOf(scale, day.from)}
+          y2={scale.height}
+          className="stroke-rule"
+        />
+      ))}
+      {parts.map((part) => {
+        const x = xOf(scale, part.from);
+        const width = Math.max(1, xOf(scale, part.to) - x);
+        const height = inner * part.value;
+        return (
+          <g key={part.from} aria-hidden="true">
+            <rect x={x} y={PAD} width={width} height={inner} className="fill-sunken stroke-rule" />
+            <rect x={x} y={PAD + inner - height} width={width} height={height} className="fill-room opacity-75" />
+            {width > 62 ? (
+              <text
+                x={x + 8}
+                y={scale.height / 2 + 4}
+                className={`text-2xs font-medium ${part.value > 0.55 ? 'fill-on-room' : 'fill-ink'}`}
+              >
+                {shareText(part.value)}
+              </text>
+            ) : null}
+          </g>
+        );
+      })}
+      <rect
+        width={scale.width}
+        height={scale.height}
+        className="fill-transparent"
+        onPointerDown={drawFrom}
+        aria-hidden="true"
+      />
+      {props.nowMin > scale.from && props.nowMin < scale.to ? (
+        <line
+          x1={xOf(scale, props.nowMin)}
+          x2={xOf(scale, props.nowMin)}
+          y2={scale.height}
+          className="stroke-ink"
+          strokeWidth={1.5}
+          pointerEvents="none"
+        />
+      ) : null}
+      {shown ? (
+        <Grips
+          draft={shown}
+          clock={clock}
+          horizonMin={props.horizonMin}
+          topKgPerH={1}
+          box={{
+            left: xOf(scale, shown.fromMin),
+            right: xOf(scale, shown.toMin),
+            level: 0,
+            top: 0,
+            bottom: scale.height,
+          }}
+          onHold={(event, grip) => props.onHold(event, shown, grip)}
+          onKey={(event, grip) => props.onKey(event, shown, grip)}
+        />
+      ) : null}
+    </svg>
+  );
+}

@@ -1,0 +1,91 @@
+import { useMemo } from 'react';
+import type { CapacityDto } from '@/contracts/capacity';
+import type { HeaderJudgement } from '@/core/header/judgement';
+import type { HeaderCapacity } from '@/core/plant/plant';
+import { rateText, type Clock } from '../time';
+import { useWidth } from '../ui/useWidth';
+import { Axis } from './Axis';
+import { BoilerRow } from './BoilerRow';
+import type { Draft } from './draft';
+import { LoadStrip, RateLabels } from './LoadStrip';
+import { roundTop, type DeskScale } from './scale';
+import { useSpanDrag } from './useSpanDrag';
+import type { DayOfWeek } from './wallTime';
+
+interface Props {
+  readonly dto: CapacityDto;
+  readonly headerId: string;
+  readonly capacity: HeaderCapacity | undefined;
+  readonly judged: HeaderJudgement;
+  /** The day shown; null: the week. */
+  readonly day: DayOfWeek | null;
+  readonly days: readonly DayOfWeek[];
+  readonly clock: Clock;
+  readonly nowMin: number;
+  readonly draft: Draft | null;
+  readonly canSet: boolean;
+  readonly onDraft: (draft: Draft | null) => void;
+}
+
+const STRIP_HEIGHT = 300;
+const BOILER_HEIGHT = 52;
+
+/** Load, limit and boilers on one time axis. */
+export function DeskChart(props: Props) {
+  const { dto, headerId, capacity, judged, day, days, clock, nowMin, draft, canSet, onDraft } = props;
+  const [ref, width] = useWidth<HTMLDivElement>(720);
+  const topKgPerH = useMemo(() => {
+    const sent = Math.max(0, ...(capacity?.exportKgPerH ?? []).map((step) => step.value));
+    return roundTop(Math.max(sent, judged.peak.kgPerH));
+  }, [capacity, judged]);
+  const scale = useMemo<DeskScale>(
+    () => ({ from: day?.from ?? 0, to: day?.to ?? dto.horizonMin, width, height: STRIP_HEIGHT, topKgPerH }),
+    [day, dto.horizonMin, width, topKgPerH],
+  );
+  const boilerScale = useMemo<DeskScale>(() => ({ ...scale, height: BOILER_HEIGHT }), [scale]);
+  const drag = useSpanDrag(
+    { minutes: (scale.to - scale.from) / width, kgPerH: topKgPerH / STRIP_HEIGHT },
+    { horizonMin: dto.horizonMin, snapMin: day ? 5 : 15, topKgPerH },
+    onDraft,
+    draft,
+  );
+  const shared = {
+    days,
+    clock,
+    nowMin,
+    horizonMin: dto.horizonMin,
+    draft,
+    canSet,
+    onHold: drag.hold,
+    onMove: drag.move,
+    onRelease: drag.release,
+    onKey: drag.key,
+  };
+  const boilers = dto.boilers.filter((boiler) => boiler.headerId === headerId);
+
+  return (
+    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] border-y border-rule sm:grid-cols-[9.5rem_minmax(0,1fr)]">
+      <div />
+      <div ref={ref} className="border-l border-rule">
+        <Axis scale={scale} days={days} clock={clock} />
+      </div>
+      <div className="flex justify-end bg-surface">
+        <RateLabels scale={scale} />
+      </div>
+      <div className="border-l border-rule">
+        <LoadStrip scale={scale} capacity={capacity} loadKgPerH={judged.loadKgPerH} {...shared} />
+      </div>
+      {boilers.map((boiler) => (
+        <div key={boiler.id} className="contents">
+          <div className="border-t border-rule py-2 pr-2">
+            <p className="text-sm leading-4 font-semibold">{boiler.name}</p>
+            <p className="mt-1 text-2xs text-ink-muted max-sm:hidden">{rateText(boiler.netKgPerH)} net</p>
+          </div>
+          <div className="border-t border-l border-rule">
+            <BoilerRow boiler={boiler} scale={boilerScale} {...shared} />
+          </div>
+        </div>
+      ))}
+    </div>
+  );
+}

@@ -1,0 +1,185 @@
+import { useMemo, type KeyboardEvent, type PointerEvent } from 'react';
+import type { HeaderCapacity } from '@/core/plant/plant';
+import { fromMinutes, valueAt, type StepFunction } from '@/core/time/stepFunction';
+import { Hatch } from '../ui/Hatch';
+import { groupDigits, rateText, type Clock } from '../time';
+import type { Draft, Grip } from './draft';
+import { Grips } from './Grips';
+import { areaPath, linePath, minuteAtX, rateTicks, xOf, yOf, type DeskScale } from './scale';
+import type { DayOfWeek } from './wallTime';
+
+interface Props {
+  readonly scale: DeskScale;
+  readonly days: readonly DayOfWeek[];
+  readonly clock: Clock;
+  readonly capacity: HeaderCapacity | undefined;
+  readonly loadKgPerH: Float64Array;
+  readonly nowMin: number;
+  readonly horizonMin: number;
+  readonly draft: Draft | null;
+  readonly canSet: boolean;
+  readonly onHold: (event: PointerEvent<Element>, start: Draft, grip: Grip) => void;
+  readonly onMove: (event: PointerEvent<Element>) => void;
+  readonly onRelease: (event: PointerEvent<Element>) => void;
+  readonly onKey: (event: KeyboardEvent, draft: Draft, grip: Grip) => void;
+}
+
+const NONE: StepFunction = [];
+
+/** What stands over the limit, as rectangles from the limit up to the load. */
+function overPath(scale: DeskScale, load: StepFunction, limit: StepFunction): string {
+  const edges = [...new Set([...load, ...limit].map((step) => step.from).concat(scale.from, scale.to))]
+    .filter((minute) => minute >= scale.from && minute <= scale.to)
+    .sort((a, b) => a - b);
+  return edges
+    .slice(0, -1)
+    .map((from, i) => {
+      const to = edges[i + 1] ?? scale.to;
+      const [asked, may] = [valueAt(load, from), valueAt(limit, from)];
+      if (asked <= may) return '';
+      const [left, right] = [xOf(scale, from), Math.max(xOf(scale, to), xOf(scale, from) + 0.75)];
+      return `M${left.toFixed(1)} ${yOf(scale, asked).toFixed(1)}H${right.toFixed(1)}V${yOf(scale, may).toFixed(1)}H${left.toFixed(1)}Z`;
+    })
+    .join('');
+}
+
+/** The plan's load under its limit; the limit is a line that one can take hold of. */
+export function LoadStrip(props: Props) {
+  const { scale, days, clock, capacity, nowMin, draft, canSet, horizonMin } = props;
+  const load = useMemo(() => fromMinutes(props.loadKgPerH), [props.loadKgPerH]);
+  const limit = capacity?.limitKgPerH ?? null;
+  const base = capacity?.baseLoadKgPerH ?? NONE;
+  const sent = capacity?.exportKgPerH ?? null;
+  const paths = useMemo(
+    () => ({
+      load: areaPath(scale, load),
+      outline: linePath(scale, load),
+      base: areaPath(scale, base),
+      room: limit && areaPath(scale, limit),
+      limit: limit && linePath(scale, limit),
+      sent: sent && linePath(scale, sent),
+      over: limit && overPath(scale, load, limit),
+    }),
+    [scale, load, base, limit, sent],
+  );
+  const shown = draft?.subject.kind === 'limit' && draft.subject.headerId === capacity?.headerId ? draft : null;
+
+  const drawFrom = (event: PointerEvent<SVGRectElement>): void => {
+    if (!canSet || !capacity) return;
+    const minute = minuteAtX(scale, event.clientX - event.currentTarget.getBoundingClientRect().left);
+    const snapped = Math.round(minute / 5) * 5;
+    const value = limit ? Math.round(valueAt(limit, Math.min(snapped, horizonMin - 1)) / 50) * 50 : scale.topKgPerH / 2;
+    const start = { subject: { kind: 'limit', headerId: capacity.headerId }, fromMin: snapped, toMin: snapped, value };
+    props.onHold(event, start as Draft, 'draw');
+  };
+
+  return (
+    <svg
+      width={scale.width}
+      height={scale.height}
+      className={`block touch-pan-y overflow-hidden select-none ${canSet ? 'cursor-crosshair' : ''}`}
+      role="group"
+      aria-label="The plan's steam load against the limit"
+      onPointerMove={props.onMove}
+      onPointerUp={props.onRelease}
+      onPointerCancel={props.onRelease}
+    >
+      <defs>
+        <Hatch id="desk-over" />
+      </defs>
+      <rect width={scale.width} height={scale.height} className="fill-surface" />
+      {paths.room ? <path d={paths.room} className="fill-room-soft" /> : null}
+      {days.map((day) => (
+        <line
+          key={day.date}
+          x1={xOf(scale, day.from)}
+          x2={xOf(scale, day.from)}
+          y2={scale.height}
+          className="stroke-rule"
+        />
+      ))}
+      {rateTicks(scale.topKgPerH).map((rate) => (
+        <line
+          key={rate}
+          x2={scale.width}
+          y1={yOf(scale, rate)}
+          y2={yOf(scale, rate)}
+          className="stroke-rule"
+          strokeDasharray="1 4"
+        />
+      ))}
+      <path d={paths.load} className="fill-steam opacity-45" />
+      <path d={paths.base} className="fill-steam opacity-70" />
+      <path
+        d={paths.outline}
+        className="fill-none stroke-steam"
+        strokeWidth={scale.to - scale.from > 2_000 ? 0.75 : 1.25}
+      />
+      {paths.over ? <path d={paths.over} fill="url(#desk-over)" /> : null}
+      {paths.sent ? (
+        <path d={paths.sent} className="fill-none stroke-room" strokeWidth={1.25} strokeDasharray="5 4" />
+      ) : null}
+      {paths.limit ? (
+        <>
+          <path d={paths.limit} className="fill-none stroke-surface" strokeWidth={5.5} />
+          <path d={paths.limit} className="fill-none stroke-room" strokeWidth={2.5} />
+        </>
+      ) : null}
+      <rect
+        width={scale.width}
+        height={scale.height}
+        className="fill-transparent"
+        onPointerDown={drawFrom}
+        aria-hidden="true"
+      />
+      {nowMin > scale.from && nowMin < scale.to ? (
+        <g pointerEvents="none">
+          <line
+            x1={xOf(scale, nowMin)}
+            x2={xOf(scale, nowMin)}
+            y2={scale.height}
+            className="stroke-ink"
+            strokeWidth={1.5}
+          />
+          <text x={xOf(scale, nowMin) + 5} y={14} className="fill-ink text-2xs font-semibold">
+            now
+          </text>
+        </g>
+      ) : null}
+      {shown ? (
+        <Grips
+          draft={shown}
+          clock={clock}
+          horizonMin={horizonMin}
+          topKgPerH={scale.topKgPerH}
+          box={{
+            left: xOf(scale, shown.fromMin),
+            right: xOf(scale, shown.toMin),
+            level: yOf(scale, shown.value ?? 0),
+            top: 0,
+            bottom: scale.height,
+          }}
+          onHold={(event, grip) => props.onHold(event, shown, grip)}
+          onKey={(event, grip) => props.onKey(event, shown, grip)}
+        />
+      ) : null}
+    </svg>
+  );
+}
+
+/** Rates at the side of the strip. */
+export function RateLabels({ scale }: { readonly scale: DeskScale }) {
+  return (
+    <svg width={72} height={scale.height} className="block overflow-visible" aria-hidden="true">
+      {rateTicks(scale.topKgPerH).map((rate) => (
+        <text key={rate} x={66} y={yOf(scale, rate) + 4} textAnchor="end" className="fill-ink-muted text-2xs">
+          {groupDigits(rate)}
+        </text>
+      ))}
+      <text x={66} y={scale.height - 4} textAnchor="end" className="fill-ink-muted text-2xs">
+        kg/h
+      </text>
+      <title>{`Up to ${rateText(scale.topKgPerH)}`}</title>
+    </svg>
+  );
+}
