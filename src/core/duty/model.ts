@@ -1,6 +1,7 @@
 /** One door to the duty models: a stage's data names its model and inputs; a typed profile is what a meter says. */
 import { fail, ok, problem, type Result } from '../result';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
+import { checkInputs, range, type InputRanges } from './inputs';
 import { jacketedKettle } from './jacketedKettle';
 import type { JacketedKettleInput } from './jacketedKettleInput';
 import { steamBlancher, type SteamBlancherInput } from './steamBlancher';
@@ -24,7 +25,7 @@ export type DutyModel =
 
 /**
  * Works a duty out on the steam of a header.
- * @returns the model's own problems; DUTY-RANGE for a typed profile with a negative draw or length.
+ * @returns the model's own problems; DUTY-RANGE for a typed phase whose length or draw is out of range.
  */
 export function workOut(duty: DutyModel, supply: SteamSupply): Result<Duty> {
   switch (duty.model) {
@@ -41,11 +42,15 @@ export function workOut(duty: DutyModel, supply: SteamSupply): Result<Duty> {
   }
 }
 
+const TYPED_RANGES: InputRanges<DutyPhase> = {
+  minutes: range('Length of a typed phase', 'min', 0.01, 10_080),
+  steamKgPerH: range('Draw of a typed phase', 'kg/h', 0, 200_000),
+};
+
 function typedProfile({ phases, source }: TypedProfile): Result<Duty> {
-  const bad = phases.findIndex((p) => !(p.minutes > 0) || !(p.steamKgPerH >= 0) || p.steamKgPerH > 200_000);
-  if (bad >= 0) {
-    const text = `Phase ${bad + 1} of the typed profile needs a length above 0 min and a draw of 0 to 200000 kg/h.`;
-    return fail(problem('DUTY-RANGE', text, `phases.${bad}`));
+  for (const [index, phase] of phases.entries()) {
+    const bad = checkInputs(phase, TYPED_RANGES);
+    if (bad) return fail(problem(bad.code, bad.message, `phases.${index}.${bad.field}`));
   }
   return ok(closeDuty(openWorking(`Draw as entered: ${source}`, [ESTIMATE_CAUTION]), phases));
 }
