@@ -20,7 +20,7 @@ mkdir -p .steadmain 2>/dev/null || true
 if missing="$(node scripts/installed.mjs)"; then
   say 'Packages are installed'
 else
-  say "Installing the packages named in package-lock.json ($missing)"
-  npm ci --no-audit --no-fund --loglevel=error </dev/null ||
+  say "Installing the packages named in package-lock.json, a minute or two ($missing)"
+  npm ci --no-audit --no-fund --prefer-offline --progress=false --loglevel=error </dev/null ||
     stop_with 'The packages could not be installed. npm says why above; a machine without a network is the usual cause.'
 fi

@@ -27,6 +27,8 @@ export function undoAll(): Promise<void> {
  * `work` gives the exit code.
  */
 export async function runCommand(work: () => Promise<number>): Promise<never> {
+  // A closed terminal makes every further line fail; what is left to undo must be undone all the same.
+  for (const stream of [process.stdout, process.stderr]) stream.on('error', () => undefined);
   let signalled = 0;
   const onSignal = (code: number) => () => {
     if (signalled) return;

@@ -12,16 +12,18 @@ export interface Finished {
 interface RunOptions extends SpawnOptions {
   /** Keep the output instead of passing it to the terminal. */
   readonly capture?: boolean;
+  /** Let it finish even when this process is asked to stop: it is short, and half done is worse than done. */
+  readonly toItsEnd?: boolean;
 }
 
 const running = new Set<ChildProcess>();
 
 /** Runs a command in the project's folder and waits for its end. Never throws: look at the code. */
 export function run(command: string, args: readonly string[], options: RunOptions = {}): Promise<Finished> {
-  const { capture = false, ...spawnOptions } = options;
+  const { capture = false, toItsEnd = false, ...spawnOptions } = options;
   const stdio = capture ? (['ignore', 'pipe', 'pipe'] as const) : (['ignore', 'inherit', 'inherit'] as const);
-  const child = spawn(command, args, { cwd: projectDir, stdio: [...stdio], ...spawnOptions });
-  running.add(child);
+  const child = spawn(command, args, { cwd: projectDir, stdio: [...stdio], detached: toItsEnd, ...spawnOptions });
+  if (!toItsEnd) running.add(child);
   let output = '';
   child.stdout?.on('data', (chunk: Buffer) => (output += chunk.toString()));
   child.stderr?.on('data', (chunk: Buffer) => (output += chunk.toString()));

@@ -32,7 +32,7 @@ const dataDir = (place: Place): string => join(place.folder, 'data');
 
 /** Runs one of PostgreSQL's programs as the owner, apart from the terminal's Ctrl-C. */
 const program = (bin: string, place: Place, name: string, args: string[]): Promise<Finished> =>
-  run(join(bin, name), args, { ...asOwner(place.owner), env: cleanEnv(), capture: true, detached: true });
+  run(join(bin, name), args, { ...asOwner(place.owner), env: cleanEnv(), capture: true, toItsEnd: true });
 
 /** The server that runs on this place's data now, told by its process and not only by the file that names it. */
 export function findRunning(place: Place): RunningServer | undefined {
