@@ -9,7 +9,7 @@ import { indexOf, openSpansOf } from './weekIndex';
 
 /**
  * Places the activities of a batch that are not yet placed, one after the other along their links, each on the eligible
- * unit that is free and open first, at or after `fromMinute`. A first place for the hand to go on from: greatest waits
+ * unit that has it done first, at or after `fromMinute`. A first place for the hand to go on from: greatest waits
  * and steam are not looked at. Fails where a unit has no room left in the week.
  */
 export function placeBatch(week: Week, batchId: string, fromMinute: number): Result<Edit> {
@@ -48,12 +48,12 @@ function inLinkOrder(activities: readonly Activity[], links: readonly Link[]): s
 
 function firstPlace(activity: Activity, week: Week, fromMinute: number): Placement | null {
   const taken = occupationsByUnit(week.activities, week);
-  const places = activity.modes.flatMap((mode): Placement[] => {
+  const places = activity.modes.flatMap((mode) => {
     const ready = Math.max(fromMinute, activity.earliestStart, readyByLinks(activity, mode, week));
     const start = firstFree(mode, ready, taken.get(mode.unitId) ?? [], week);
-    return start === null ? [] : [{ unitId: mode.unitId, start }];
+    return start === null ? [] : [{ placement: { unitId: mode.unitId, start }, end: start + mode.minutes }];
   });
-  return places.reduce<Placement | null>((best, place) => (best && best.start <= place.start ? best : place), null);
+  return places.sort((a, b) => a.end - b.end)[0]?.placement ?? null;
 }
 
 function readyByLinks(activity: Activity, mode: Mode, week: Week): number {
