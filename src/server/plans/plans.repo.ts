@@ -1,15 +1,6 @@
-import { and, asc, desc, eq, inArray, isNull, or } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm';
 import type { Db } from '@/db/client';
-import {
-  activities,
-  agreements,
-  floorEvents,
-  issues,
-  levellingRuns,
-  links,
-  plans,
-  processData,
-} from '@/db/schema/index';
+import { activities, floorEvents, issues, levellingRuns, links, plans, processData } from '@/db/schema/index';
 import { newId } from '../id';
 
 export type PlanRow = typeof plans.$inferSelect;
@@ -116,17 +107,6 @@ export async function latestIssueRow(tx: Db, plan: PlanRow) {
     .orderBy(desc(issues.number))
     .limit(1);
   return row ?? null;
-}
-
-/** Agreements to the plan's present revision, newest first, and the one that an issue was made under. */
-export async function agreementRows(tx: Db, plan: PlanRow, issueAgreementId: string | null) {
-  const present = eq(agreements.revision, plan.revision);
-  const wanted = issueAgreementId === null ? present : or(present, eq(agreements.id, issueAgreementId));
-  return tx
-    .select()
-    .from(agreements)
-    .where(and(eq(agreements.plantId, plan.plantId), eq(agreements.planId, plan.id), wanted))
-    .orderBy(desc(agreements.createdAt), desc(agreements.id));
 }
 
 /** The newest levelling run of a plan that waits, runs or has proposed; null where there is none. */
