@@ -2,9 +2,10 @@ import type { APIContext, MiddlewareHandler } from 'astro';
 import { lucia } from './server/auth/lucia';
 import { signedIn, type SignedIn } from './server/auth/session';
 import { themeOf } from './server/http/cookies';
+import { faultProblem } from './server/http/fault';
 import { needsSignIn, safeNext, signInAddress } from './server/http/gate';
 import { originAllowed } from './server/http/origin';
-import { problemResponse, type HttpProblem } from './server/http/problem';
+import { notFound, problemResponse, type HttpProblem } from './server/http/problem';
 import { setSecurityHeaders } from './server/http/securityHeaders';
 
 const foreignOrigin: HttpProblem = {
@@ -13,11 +14,10 @@ const foreignOrigin: HttpProblem = {
   message: 'This request came from another site and was refused. Open Steadmain itself and try again.',
 };
 
-const noDatabase: HttpProblem = {
-  status: 503,
-  code: 'NO-DATABASE',
-  message: 'The database does not answer. Nothing was changed; try again in a minute.',
-};
+const unknown = notFound('There is no such endpoint, or it does not take this method.');
+
+const isEndpoint = ({ url }: APIContext): boolean => url.pathname.startsWith('/api/');
+const isJson = ({ headers }: Response): boolean => headers.get('content-type')?.startsWith('application/json') ?? false;
 
 /** Session to actor; gives the cookie to set where it was renewed or has ended. */
 async function identify(context: APIContext): Promise<string | null> {
@@ -47,11 +47,12 @@ async function respond(context: APIContext, next: () => Promise<Response>): Prom
   try {
     cookie = await identify(context);
   } catch (error) {
-    if (!context.url.pathname.startsWith('/api/')) throw error;
+    if (!isEndpoint(context)) throw error;
     console.error('the session could not be read:', error);
-    return problemResponse(noDatabase);
+    return problemResponse(faultProblem(error));
   }
-  const response = redirected(context) ?? (await next());
+  const answer = redirected(context) ?? (await next());
+  const response = answer.status === 404 && isEndpoint(context) && !isJson(answer) ? problemResponse(unknown) : answer;
   if (cookie && !response.headers.has('set-cookie')) response.headers.append('set-cookie', cookie);
   return response;
 }

@@ -24,8 +24,11 @@ function connect(): { readonly pool: pg.Pool; readonly orm: NodePgDatabase<Schem
     connectionTimeoutMillis: 10_000,
     idleTimeoutMillis: 30_000,
   });
-  // Without a listener a stopped database would end the process; the pool itself drops the broken connection.
-  pool.on('error', (error) => console.error('database connection lost:', error.message));
+  const lost = (error: Error): void => console.error('database connection lost:', error.message);
+  // Without listeners a stopped database would end the process: the pool listens only to connections that are idle.
+  // Broken ones are dropped by themselves, and what was running on them fails where it was called.
+  pool.on('error', lost);
+  pool.on('connect', (client) => client.on('error', lost));
   return { pool, orm: drizzle(pool, { schema }) };
 }
 

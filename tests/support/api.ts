@@ -37,7 +37,7 @@ function contextOf(call: Call): APIContext {
   const request = new Request(url, {
     method,
     headers: headersOf(call),
-    ...(body === undefined ? {} : { body }),
+    ...(body === undefined ? {} : { body, duplex: 'half' }),
     ...(call.signal ? { signal: call.signal } : {}),
   });
   const context: Partial<APIContext> = {

@@ -53,5 +53,6 @@ export async function signIn(attempt: SignInAttempt): Promise<Result<SignedIn, H
   if (attempt.oldSessionId) await endSession(attempt.oldSessionId);
   const session = await lucia.createSession(person.id, { plantId: plant.plantId });
   await touchPerson(person.id, now());
+  await lucia.deleteExpiredSessions();
   return ok({ actor: actorAt(person, plant), session });
 }

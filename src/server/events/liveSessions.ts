@@ -1,4 +1,4 @@
-import { and, eq, gt, inArray } from 'drizzle-orm';
+import { and, eq, gt, inArray, sql } from 'drizzle-orm';
 import { db } from '@/db/client';
 import { memberships, people, sessions } from '@/db/schema/index';
 
@@ -15,8 +15,8 @@ export async function liveSessions<T extends Held>(held: readonly T[]): Promise<
     .from(sessions)
     .innerJoin(people, and(eq(people.id, sessions.userId), eq(people.active, true)))
     .innerJoin(memberships, and(eq(memberships.personId, people.id), eq(memberships.plantId, sessions.plantId)))
-    // Sessions expire by the machine's clock, as they were made by it.
-    .where(and(inArray(sessions.id, ids), gt(sessions.expiresAt, new Date())));
+    // Sessions are made and expire by the machines' clocks, never by a clock that was set.
+    .where(and(inArray(sessions.id, ids), gt(sessions.expiresAt, sql`now()`)));
   const plantOf = new Map(rows.map((row) => [row.id, row.plantId]));
   return new Set(held.filter((one) => plantOf.get(one.sessionHash) === one.plantId));
 }

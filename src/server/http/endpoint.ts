@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import type { Result } from '@/core/result';
 import { authorize, type Authorized, type Permission } from '../auth/permissions';
 import { check, readJson } from './body';
+import { faultProblem } from './fault';
 import { json, problemResponse, withStatus, type HttpProblem } from './problem';
 
 type Params = Readonly<Record<string, string>>;
@@ -37,8 +38,7 @@ const signInFirst: HttpProblem = { status: 401, code: 'SIGN-IN', message: 'Sign 
 
 function fault(context: APIContext, error: unknown): Response {
   console.error(`${context.request.method} ${context.url.pathname} failed:`, error);
-  const message = 'Something went wrong on our side; nothing was changed. Try again, then tell your administrator.';
-  return problemResponse({ status: 500, code: 'FAULT', message });
+  return problemResponse(faultProblem(error));
 }
 
 async function readInput<B, Q>(context: APIContext, schemas: Schemas<B, Q>): Promise<Result<Input<B, Q>, HttpProblem>> {
