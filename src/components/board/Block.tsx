@@ -1,0 +1,133 @@
+import { useDraggable } from '@dnd-kit/core';
+import { memo, useMemo } from 'react';
+import { drawnMode, type Activity, type Mode } from '../../core/plant/activity';
+import type { Breach } from '../../core/schedule/breach';
+import type { FloorEventDto } from '../../contracts/week';
+import { canCarry } from './carry';
+import type { Drawn } from './drawn';
+import { FixingMark } from './FixingMark';
+import { fittingWords, outlinePath, spellsOf, titleSlot } from './outline';
+
+export const OUTLINE_PX = 36;
+/** Height that words take from the top of the outline. */
+const WORDS_PX = 17;
+const NARROW_PX = 18;
+
+/** The outline of a mode's steam, stretched to whatever holds it. */
+export const Outline = memo(function Outline({ mode, peak }: { readonly mode: Mode; readonly peak: number }) {
+  const path = useMemo(() => outlinePath(spellsOf(mode.phases, mode.minutes), peak, OUTLINE_PX), [mode, peak]);
+  return (
+    <svg
+      className="outline"
+      viewBox={`0 0 ${mode.minutes} ${OUTLINE_PX}`}
+      preserveAspectRatio="none"
+      aria-hidden="true"
+      focusable="false"
+    >
+      <path d={path} />
+    </svg>
+  );
+});
+
+function Words({ activity, mode, peak, pxPerMin }: InsideProps & { readonly mode: Mode }) {
+  const words = useMemo(() => {
+    const spells = spellsOf(mode.phases, mode.minutes);
+    const slot = titleSlot(spells, (peak * (OUTLINE_PX - WORDS_PX)) / OUTLINE_PX, pxPerMin);
+    if (!slot) return null;
+    const room = slot.widthPx - 8 - (activity.fixing === 'free' ? 0 : 12);
+    const text = fittingWords(activity.title, activity.code, room);
+    return text === '' ? null : { text, left: slot.leftPx + 4, width: room + 2 };
+  }, [activity, mode, peak, pxPerMin]);
+  if (!words) return null;
+  return (
+    <span className="block-words" style={{ left: words.left, width: words.width }}>
+      {words.text}
+    </span>
+  );
+}
+
+interface InsideProps {
+  readonly activity: Activity;
+  readonly peak: number;
+  readonly pxPerMin: number;
+}
+
+interface Props extends InsideProps {
+  readonly drawn: Drawn;
+  readonly label: string;
+  readonly breaches: readonly Breach[] | undefined;
+  readonly events: readonly FloorEventDto[] | undefined;
+  readonly selected: boolean;
+  readonly kin: boolean;
+  readonly tabbable: boolean;
+  readonly carried: boolean;
+  readonly readOnly: boolean;
+}
+
+const Inside = memo(function Inside({ drawn, breaches, events, ...inside }: Omit<Props, 'label'>) {
+  const { activity, peak, pxPerMin } = inside;
+  const mode = drawnMode(activity);
+  const width = drawn.minutes * pxPerMin;
+  if (!mode) return null;
+  return (
+    <>
+      <Outline mode={mode} peak={peak} />
+      {(breaches ?? []).map((breach) => (
+        <BreachMark key={breach.id} breach={breach} drawn={drawn} pxPerMin={pxPerMin} />
+      ))}
+      {width > NARROW_PX * 1.5 ? <Words {...{ activity, mode, peak, pxPerMin }} /> : null}
+      {width > NARROW_PX ? <FixingMark fixing={activity.fixing} /> : null}
+      {(events ?? []).map((event) => (
+        <svg
+          key={event.id}
+          className="block-event"
+          viewBox="0 0 8 8"
+          style={{ left: (event.minute - drawn.start) * pxPerMin }}
+          aria-hidden="true"
+        >
+          <path
+            d={event.event === 'steamOn' ? 'M4 0 8 8H0Z' : event.event === 'empty' ? 'M0 0h8L4 8Z' : 'M3 0h2v8H3Z'}
+          />
+        </svg>
+      ))}
+    </>
+  );
+});
+
+function BreachMark({ breach, drawn, pxPerMin }: { breach: Breach; drawn: Drawn; pxPerMin: number }) {
+  const from = Math.max(drawn.start, Math.min(breach.from, drawn.start + drawn.minutes - 1));
+  const to = Math.max(from + 1, Math.min(breach.to, drawn.start + drawn.minutes));
+  return (
+    <span
+      className="block-breach"
+      style={{ left: (from - drawn.start) * pxPerMin, width: (to - from) * pxPerMin }}
+      aria-hidden="true"
+    />
+  );
+}
+
+/** An activity on its unit. It can be dragged; keys and clicks are listened to above it. */
+export const Block = memo(function Block({ label, ...inside }: Props) {
+  const { drawn, activity, pxPerMin, selected, kin, tabbable, carried, readOnly } = inside;
+  const still = readOnly || !canCarry(activity);
+  const { setNodeRef, listeners } = useDraggable({ id: activity.id, disabled: still });
+  return (
+    <div
+      ref={setNodeRef}
+      {...listeners}
+      role="button"
+      tabIndex={tabbable ? 0 : -1}
+      aria-label={label}
+      aria-pressed={selected}
+      className="block"
+      data-activity={activity.id}
+      data-kin={kin}
+      data-still={still}
+      data-follows={activity.kind === 'cleaning'}
+      data-carried={carried}
+      style={{ left: drawn.start * pxPerMin, width: Math.max(2, drawn.minutes * pxPerMin - 1) }}
+    >
+      <Inside {...inside} />
+    </div>
+  );
+});

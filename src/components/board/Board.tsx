@@ -1,0 +1,159 @@
+import { DndContext, DragOverlay } from '@dnd-kit/core';
+import { useMemo, useRef, useState } from 'react';
+import type { MeDto } from '../../contracts/account';
+import type { WeekDto } from '../../contracts/week';
+import { Button } from '../ui/Button';
+import { Hatch } from '../ui/Hatch';
+import { BoardBar } from './BoardBar';
+import { BoardRows } from './BoardRows';
+import { CarriedChip } from './CarriedChip';
+import { KeyHelp } from './KeyHelp';
+import { Notices } from './Notices';
+import { Panel } from './Panel';
+import type { PointedAt } from './Pointed';
+import { SlipDialog } from './SlipDialog';
+import { createStore } from './store';
+import { Strips } from './Strips';
+import { ticksOf } from './ticks';
+import { TimeHead } from './TimeHead';
+import { useBoard } from './useBoard';
+import { useBoardActions } from './useBoardActions';
+import { useBoardKeys } from './useBoardKeys';
+import { useHandDrag } from './useHandDrag';
+import { weekWords } from './weekWords';
+
+/** dnd-kit's own words are for its own keys; the board has others and says what happens itself. */
+const OWN_WORDS = {
+  screenReaderInstructions: { draggable: '' },
+  announcements: {
+    onDragStart: () => undefined,
+    onDragOver: () => undefined,
+    onDragEnd: () => undefined,
+    onDragCancel: () => undefined,
+  },
+};
+
+interface Props {
+  readonly me: MeDto;
+  readonly initial: WeekDto;
+}
+
+export function Board({ me, initial }: Props) {
+  const model = useBoard(me, initial);
+  const actions = useBoardActions(model);
+  const { view, week, clock, carry, dto } = model;
+  const rowsRef = useRef<HTMLDivElement>(null);
+  const [pointed] = useState(() => createStore<PointedAt | null>(null));
+  const [slipping, setSlipping] = useState<string | null>(null);
+  const ticks = useMemo(
+    () => ticksOf(clock, week.horizonMin, view.scale.pxPerMin),
+    [clock, week.horizonMin, view.scale.pxPerMin],
+  );
+  const hand = useHandDrag({
+    carry,
+    scale: view.scale,
+    activityOf: (id) => dto.week.activities.find((activity) => activity.id === id),
+    rowsRef,
+    scrollRef: view.scrollRef,
+    headRef: view.headRef,
+  });
+  const onKeyDown = useBoardKeys({
+    carryingByKeys: model.carryingBy === 'keys',
+    mayEdit: model.mayEdit,
+    snapMinutes: week.plant.rules.snapMinutes,
+    go: actions.go,
+    select: () => undefined,
+    lift: () => actions.lift(actions.selected),
+    stepMinutes: (minutes) => actions.sayCarry(carry.stepBy({ minutes })),
+    stepUnits: (units) => actions.sayCarry(carry.stepBy({ units })),
+    drop: actions.drop,
+    cancel: actions.cancel,
+    toggleFix: actions.toggleFix,
+    takeOff: actions.takeOff,
+    undo: actions.undo,
+    redo: actions.redo,
+    clear: () => actions.setSelectedId(null),
+  });
+
+  return (
+    <DndContext
+      sensors={hand.sensors}
+      accessibility={OWN_WORDS}
+      autoScroll={{ threshold: { x: 0.06, y: 0.08 } }}
+      onDragStart={hand.start}
+      onDragEnd={actions.drop}
+      onDragCancel={actions.cancel}
+    >
+      <div className="board flex flex-col" data-testid="board">
+        <svg className="absolute size-0" aria-hidden="true">
+          <defs>
+            <Hatch id="board-hatch-over" />
+          </defs>
+        </svg>
+        <BoardBar
+          week={weekWords(dto)}
+          clock={clock}
+          issue={dto.issue}
+          agreedBy={dto.agreement?.by ?? null}
+          changedSince={dto.issue !== null && dto.issue.revision !== dto.planRevision}
+          zoom={view.zoom}
+          onZoom={view.setZoom}
+          history={
+            model.mayPlan
+              ? {
+                  canUndo: model.saves.canUndo && model.mayEdit,
+                  canRedo: model.saves.canRedo && model.mayEdit,
+                  undo: actions.undo,
+                  redo: actions.redo,
+                }
+              : null
+          }
+        >
+          {model.mayPlan ? (
+            <Button size="small" onClick={() => setSlipping(week.plant.lines[0]?.id ?? null)} disabled={!model.mayEdit}>
+              Slip a line…
+            </Button>
+          ) : null}
+        </BoardBar>
+        <div className="board-body">
+          <div ref={view.scrollRef} className="board-scroll" tabIndex={-1}>
+            <div style={{ width: `calc(var(--label-w) + ${view.scale.widthPx}px)` }}>
+              <div ref={view.headRef} className="sticky top-0 z-20">
+                <TimeHead
+                  {...{ ticks, clock }}
+                  shifts={model.shifts}
+                  scale={view.scale}
+                  nowMin={model.nowMin}
+                  corner={<KeyHelp />}
+                />
+                <Strips {...{ model, pointed }} />
+              </div>
+              <BoardRows {...{ model, actions, ticks, pointed, rowsRef, onKeyDown }} onSlip={setSlipping} />
+            </div>
+          </div>
+          <aside className="board-panel min-h-0 overflow-y-auto border-l border-rule bg-surface" aria-label="Week">
+            <Panel {...{ model, actions }} />
+          </aside>
+        </div>
+        <p className="sr-only" aria-live="assertive" data-testid="said">
+          {actions.said}
+        </p>
+        <Notices notices={model.notices} onDismiss={model.dismiss} />
+        {slipping !== null ? (
+          <SlipDialog
+            lines={week.plant.lines}
+            lineId={slipping}
+            week={dto.week}
+            clock={clock}
+            nowMin={model.nowMin}
+            onClose={() => setSlipping(null)}
+            onSlip={actions.slip}
+          />
+        ) : null}
+      </div>
+      <DragOverlay dropAnimation={null}>
+        <CarriedChip carried={carry.store} />
+      </DragOverlay>
+    </DndContext>
+  );
+}

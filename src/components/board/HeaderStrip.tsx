@@ -1,0 +1,133 @@
+import { memo, useMemo } from 'react';
+import type { HeaderJudgement } from '../../core/header/judgement';
+import type { Header, HeaderCapacity } from '../../core/plant/plant';
+import { toMinutes } from '../../core/time/stepFunction';
+import { rateText, type Clock } from '../time';
+import { StripFace } from './StripFace';
+import { greatestOf, rateMarks, stripTop, yOfRate, type StripScale } from './strip';
+import { useStore, type Store } from './store';
+import type { TimeScale } from './timeScale';
+import type { Carrying } from './useCarry';
+import { markText, overWords } from './words';
+
+interface Props {
+  readonly header: Header;
+  readonly capacity: HeaderCapacity | undefined;
+  readonly judgement: HeaderJudgement;
+  /** The load that a proposal is compared with. */
+  readonly before: HeaderJudgement | null;
+  readonly carried: Store<Carrying | null>;
+  readonly scale: TimeScale;
+  readonly clock: Clock;
+  readonly open: boolean;
+  /** Only headers that may be folded away. */
+  readonly onToggle: (() => void) | null;
+  readonly main: boolean;
+  readonly onPoint: (headerId: string, minute: number | null) => void;
+  readonly pointedMin: number | null;
+}
+
+const FIGURE_LOOKS = { over: 'text-over', room: 'text-room', quiet: 'text-ink-muted' } as const;
+
+/** A header's load against its limit over the week, always in view above the rows. */
+export const HeaderStrip = memo(function HeaderStrip(props: Props) {
+  const { header, capacity, judgement, carried, scale, clock, open, onToggle, main, onPoint, pointedMin } = props;
+  const heightPx = open ? (main ? 128 : 76) : 0;
+  const live = useStore(carried, (c) => c?.preview?.evaluation.headers.find((h) => h.headerId === header.id)) ?? null;
+  const shown = live ?? judgement;
+  const base = useMemo(
+    () => (capacity ? toMinutes(capacity.baseLoadKgPerH, scale.horizonMin) : null),
+    [capacity, scale.horizonMin],
+  );
+  const limit = useMemo(() => limitOf(judgement, header), [judgement, header]);
+  const topKgPerH = useMemo(
+    () => stripTop(Math.max(judgement.peak.kgPerH, props.before?.peak.kgPerH ?? 0, limit ? greatestOf(limit) : 0)),
+    [judgement, props.before, limit],
+  );
+  const strip: StripScale = { pxPerMin: scale.pxPerMin, topKgPerH, heightPx };
+  const words = overWords(shown, clock);
+
+  return (
+    <section className="flex border-b border-rule bg-surface" aria-label={`${header.name}: steam load`}>
+      <div className="board-label !bg-surface px-4 py-2 max-sm:px-2" style={{ minHeight: open ? heightPx + 8 : 30 }}>
+        <StripTitle {...{ header, open, onToggle }} />
+        {open ? (
+          <>
+            {main ? <p className="text-2xs text-ink-muted max-sm:hidden">{stateText(header)}</p> : null}
+            <p
+              className={`mt-0.5 font-semibold ${main ? 'text-lg max-lg:text-md max-sm:text-sm' : 'text-sm'} ${FIGURE_LOOKS[words.look]} ${words.look === 'over' ? '' : '!text-sm'}`}
+              data-testid={`over-${header.id}`}
+            >
+              {words.figure}
+            </p>
+            <p className="text-2xs leading-4 text-ink-muted">{words.line}</p>
+            <Marks {...{ strip, topKgPerH }} />
+          </>
+        ) : (
+          <p className={`truncate text-2xs ${FIGURE_LOOKS[words.look]}`}>{words.figure}</p>
+        )}
+      </div>
+      <div className="board-track" style={{ width: scale.widthPx }}>
+        {open ? (
+          <StripFace
+            {...{ header, strip, scale, clock, base, limit, onPoint, pointedMin, carrying: live !== null }}
+            load={shown.loadKgPerH}
+            before={live ? judgement.loadKgPerH : (props.before?.loadKgPerH ?? null)}
+          />
+        ) : null}
+      </div>
+    </section>
+  );
+});
+
+function limitOf(judgement: HeaderJudgement, header: Header): Float64Array | null {
+  if (judgement.limitKgPerH) return judgement.limitKgPerH;
+  if (header.feed.kind !== 'letdown') return null;
+  return new Float64Array(judgement.loadKgPerH.length).fill(header.feed.greatestKgPerH);
+}
+
+function stateText(header: Header): string {
+  const pressure = `${header.pressureBarG.toFixed(1)} bar g`;
+  if (header.dryness !== null) return `${pressure} · x ${header.dryness}`;
+  return header.superheatK ? `${pressure} · ${header.superheatK} K superheat` : pressure;
+}
+
+function StripTitle({ header, open, onToggle }: Pick<Props, 'header' | 'open' | 'onToggle'>) {
+  if (!onToggle) return <h2 className="truncate text-sm font-semibold">{header.name}</h2>;
+  return (
+    <h2 className="text-xs font-semibold">
+      <button
+        type="button"
+        aria-expanded={open}
+        onClick={onToggle}
+        className="-ml-1 flex max-w-full items-center gap-1 rounded-sm px-1 hover:bg-sunken"
+      >
+        <svg
+          viewBox="0 0 10 10"
+          className={`size-2.5 shrink-0 fill-ink-muted ${open ? 'rotate-90' : ''}`}
+          aria-hidden="true"
+        >
+          <path d="M3 1 8 5 3 9z" />
+        </svg>
+        <span className="truncate">{header.name}</span>
+      </button>
+    </h2>
+  );
+}
+
+function Marks({ strip, topKgPerH }: { readonly strip: StripScale; readonly topKgPerH: number }) {
+  return (
+    <div className="pointer-events-none absolute top-1 right-1.5 max-md:hidden" aria-hidden="true">
+      {rateMarks(topKgPerH).map((mark) => (
+        <span
+          key={mark}
+          className="absolute right-0 -translate-y-1/2 text-2xs whitespace-nowrap text-ink-muted"
+          style={{ top: yOfRate(strip, mark) }}
+          title={rateText(mark)}
+        >
+          {markText(mark, topKgPerH)}
+        </span>
+      ))}
+    </div>
+  );
+}

@@ -1,0 +1,63 @@
+import { phasesKg, phasesPeakKgPerH } from '../../core/demand/activityLoad';
+import { drawnMode, type Activity } from '../../core/plant/activity';
+import type { Breach } from '../../core/schedule/breach';
+import { breachSentence, type Names } from '../../core/schedule/sentences';
+import type { Week } from '../../core/schedule/week';
+import { kgText, rateText, type Clock } from '../time';
+import { ROW_PX, type Rows } from './rows';
+import { useStore, type Store } from './store';
+import { xOf, type TimeScale } from './timeScale';
+import { FIXING_WORDS, placeText } from './words';
+
+interface Props {
+  readonly hovered: Store<string | null>;
+  readonly drawn: readonly Activity[];
+  readonly week: Week;
+  readonly rows: Rows;
+  readonly scale: TimeScale;
+  readonly clock: Clock;
+  readonly breaches: ReadonlyMap<string, readonly Breach[]>;
+  readonly names: Names;
+}
+
+/** All about a block that the pointer rests on or the keys have reached, where its own width leaves no room. */
+export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, names }: Props) {
+  const id = useStore(hovered, (h) => h);
+  const activity = id === null ? undefined : drawn.find((a) => a.id === id);
+  const mode = activity && drawnMode(activity);
+  const top = activity?.placement ? rows.topOfUnit.get(activity.placement.unitId) : undefined;
+  if (!activity?.placement || !mode || top === undefined) return null;
+  const left = xOf(scale, activity.placement.start);
+  const above = top > 150;
+  const peak = phasesPeakKgPerH(mode.phases);
+  const wrong = breaches.get(activity.id) ?? [];
+  return (
+    <div
+      className="float pointer-events-none absolute z-[9] w-64 px-2.5 py-1.5 text-xs"
+      aria-hidden="true"
+      style={{
+        left: `calc(var(--label-w) + ${Math.min(left, scale.widthPx - 262)}px)`,
+        top: above ? top : top + ROW_PX,
+        transform: above ? 'translateY(-100%)' : '',
+      }}
+    >
+      <p className="font-semibold">
+        {activity.title} <span className="font-normal text-ink-muted">{activity.code}</span>
+      </p>
+      <p>
+        {placeText(activity.placement, week.plant, clock)} to {clock.time(activity.placement.start + mode.minutes)}
+      </p>
+      <p className="text-ink-muted">
+        {peak > 0 ? `${kgText(phasesKg(mode.phases))} of steam, peak ${rateText(peak)}` : 'draws no steam'}
+        {activity.fixing === 'free' ? '' : `, ${FIXING_WORDS[activity.fixing]}`}
+      </p>
+      {wrong.slice(0, 2).map((breach) => (
+        <p key={breach.id} className="mt-0.5 flex gap-1.5 leading-4 text-over">
+          <span className="hatch-over w-1 shrink-0 rounded-sm" />
+          {breachSentence(breach, names, clock.time).title}
+        </p>
+      ))}
+      {wrong.length > 2 ? <p className="text-ink-muted">and {wrong.length - 2} more to put right</p> : null}
+    </div>
+  );
+}

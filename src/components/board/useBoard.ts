@@ -1,0 +1,136 @@
+import { useCallback, useMemo, useState } from 'react';
+import type { MeDto } from '../../contracts/account';
+import type { FloorEventDto, WeekDto } from '../../contracts/week';
+import { createEvaluator } from '../../core/pipeline';
+import type { Activity } from '../../core/plant/activity';
+import { mergeIntervals } from '../../core/time/interval';
+import { breachSentence, namesOf } from '../../core/schedule/sentences';
+import { makeClock } from '../time';
+import { breachesByActivity, drawnByUnit, notYetPlaced } from './drawn';
+import { addNotice, type BoardNotice } from './notices';
+import { boardPeakKgPerH } from './outline';
+import { layOutRows } from './rows';
+import { withEdits } from './saving';
+import { createStore, useStore } from './store';
+import { threadsOf } from './threads';
+import { closedSpans, shiftSpells } from './ticks';
+import { useCarry, type Carrying } from './useCarry';
+import { useFrozen } from './useFrozen';
+import { useLevelling } from './useLevelling';
+import { useSaves } from './useSaves';
+import { useWeek } from './useWeek';
+import { useBoardView } from './useBoardView';
+import { blockLabel } from './words';
+
+/** All that the board knows and can do, put together once. */
+export function useBoard(me: MeDto, initial: WeekDto) {
+  const [notices, setNotices] = useState<readonly BoardNotice[]>([]);
+  const tell = useCallback((notice: Omit<BoardNotice, 'id'>) => setNotices((now) => addNotice(now, notice)), []);
+  const dismiss = useCallback((id: number) => setNotices((now) => now.filter((n) => n.id !== id)), []);
+
+  const server = useWeek(initial);
+  const saves = useSaves(initial.weekStart, tell);
+  const store = useMemo(() => createStore<Carrying | null>(null), []);
+  const carryingBy = useStore(store, (c) => c?.carry.by ?? null);
+  const live = useMemo(() => withEdits(server.dto, saves.pending), [server.dto, saves.pending]);
+  const dto = useFrozen(live, carryingBy !== null);
+
+  const evaluator = useMemo(() => createEvaluator(dto.week), [dto.week]);
+  const levelling = useLevelling({ dto, tell, made: saves.made });
+  const shown = useShown(evaluator, dto, levelling.open ? levelling.chosen : []);
+  const ground = useGround(dto);
+  const firstMinute = ground.nowMin >= 0 && ground.nowMin < dto.week.horizonMin ? ground.nowMin : 720;
+  const view = useBoardView(dto.week.horizonMin, firstMinute);
+  const carry = useCarry(store, { week: dto.week, evaluator, rows: ground.rows, scale: view.scale });
+
+  return {
+    me,
+    server,
+    saves,
+    dto,
+    evaluator,
+    levelling,
+    carry,
+    carryingBy,
+    view,
+    notices,
+    tell,
+    dismiss,
+    ...ground,
+    ...shown,
+    mayPlan: me.roles.includes('planner'),
+    mayAgree: me.roles.includes('utilitiesLead'),
+    mayEdit: me.roles.includes('planner') && !shown.isProposal,
+  };
+}
+
+export type BoardModel = ReturnType<typeof useBoard>;
+
+type Chosen = ReturnType<typeof useLevelling>['chosen'];
+
+/** The week as drawn: the plan, or a proposal over it. */
+function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, chosen: Chosen) {
+  const preview = useMemo(
+    () =>
+      chosen.length === 0
+        ? null
+        : evaluator.preview(chosen.map((move) => ({ activityId: move.activityId, placement: move.to }))),
+    [evaluator, chosen],
+  );
+  const week = preview?.week ?? dto.week;
+  const evaluation = preview?.evaluation ?? evaluator.evaluation;
+  const clock = useMemo(() => makeClock(dto), [dto.firstInstant, dto.timeZone]); // eslint-disable-line react-hooks/exhaustive-deps
+  const names = useMemo(() => namesOf(week), [week]);
+  const drawn = useMemo(() => [...week.activities, ...evaluation.cleanings], [week, evaluation]);
+  const byUnit = useMemo(() => drawnByUnit(drawn), [drawn]);
+  const breaches = useMemo(() => breachesByActivity(evaluation.breaches), [evaluation]);
+  const labels = useMemo(() => {
+    const titles = (activity: Activity): string[] =>
+      (breaches.get(activity.id) ?? []).map((breach) => breachSentence(breach, names, clock.dayTime).title);
+    return new Map(drawn.map((a) => [a.id, blockLabel(a, week.plant, clock, titles(a))]));
+  }, [drawn, breaches, names, clock, week.plant]);
+  const over = useMemo(
+    () => mergeIntervals(evaluation.headers.flatMap((h) => [...(h.over?.spans ?? []), ...(h.letdown?.spans ?? [])])),
+    [evaluation],
+  );
+  const waiting = useMemo(() => notYetPlaced(week.activities), [week]);
+  const isProposal = preview !== null;
+  const before = isProposal ? evaluator.evaluation : null;
+  return { week, evaluation, before, isProposal, clock, names, drawn, byUnit, breaches, labels, over, waiting };
+}
+
+/** What the plant and the calendar give. */
+function useGround(dto: WeekDto) {
+  const { plant, calendars, horizonMin, activities } = dto.week;
+  const rows = useMemo(() => layOutRows(plant), [plant]);
+  const peak = useMemo(() => boardPeakKgPerH(activities), [activities]);
+  const closed = useMemo(
+    () => new Map(calendars.map((calendar) => [calendar.unitId, closedSpans(calendar.open, horizonMin)])),
+    [calendars, horizonMin],
+  );
+  const shifts = useMemo(() => shiftSpells(dto.shifts), [dto.shifts]);
+  const events = useMemo(() => {
+    const byActivity = new Map<string, FloorEventDto[]>();
+    for (const event of dto.floorEvents) {
+      byActivity.set(event.activityId, [...(byActivity.get(event.activityId) ?? []), event]);
+    }
+    return byActivity;
+  }, [dto.floorEvents]);
+  const nowMin = useMemo(() => makeClock(dto).minuteOf(dto.now), [dto]);
+  return { rows, peak, closed, shifts, events, nowMin };
+}
+
+/** The waits of the selected activity's batch. */
+export function useThreads(model: BoardModel, selectedId: string | null) {
+  const { week } = model;
+  const threads = useMemo(
+    () => (selectedId === null ? [] : threadsOf(week.links, week.activities, selectedId)),
+    [week, selectedId],
+  );
+  const kin = useMemo(() => {
+    const batchId = week.activities.find((a) => a.id === selectedId)?.batchId;
+    const ids = batchId ? week.activities.filter((a) => a.batchId === batchId && a.id !== selectedId) : [];
+    return new Set(ids.map((a) => a.id));
+  }, [week, selectedId]);
+  return { threads, kin };
+}

@@ -1,0 +1,127 @@
+import type { ActivityState, WeekDto } from '../../contracts/week';
+import type { ProposedMove } from '../../core/levelling/proposal';
+import { drawnMode, type Activity, type Fixing, type Placement, type Stage } from '../../core/plant/activity';
+import type { HeaderJudgement } from '../../core/header/judgement';
+import type { PlantModel, UnitKind } from '../../core/plant/plant';
+import { groupDigits, kgText, rateText, spanText, type Clock } from '../time';
+
+export const STAGE_WORDS: Readonly<Record<Stage, string>> = {
+  prepare: 'prepare',
+  blanch: 'blanch',
+  cook: 'cook',
+  fill: 'fill and close',
+  retort: 'retort',
+  pasteurise: 'pasteurise',
+  other: 'run',
+};
+
+export const FIXING_WORDS: Readonly<Record<Fixing, string>> = {
+  free: 'free to move',
+  fixed: 'fixed',
+  started: 'started on the floor',
+  done: 'done',
+};
+
+export const UNIT_KIND_WORDS: Readonly<Record<UnitKind, string>> = {
+  blancher: 'Blancher',
+  kettle: 'Kettle',
+  cooker: 'Cooker',
+  filler: 'Filler',
+  retort: 'Retort',
+  pasteuriser: 'Pasteuriser',
+  other: 'Unit',
+};
+
+export function unitName(plant: PlantModel, unitId: string): string {
+  return plant.units.find((unit) => unit.id === unitId)?.name ?? unitId;
+}
+
+/** 'A107 Carrot dice 2.5 kg' */
+export function activityName(activity: Pick<Activity, 'code' | 'title'>): string {
+  return activity.title.includes(activity.code) ? activity.title : `${activity.code} ${activity.title}`;
+}
+
+/** 'Retort 2, Tue 07:05', or 'not yet placed'. */
+export function placeText(placement: Placement | null, plant: PlantModel, clock: Clock): string {
+  if (!placement) return 'not yet placed';
+  return `${unitName(plant, placement.unitId)}, ${clock.dayTime(placement.start)}`;
+}
+
+/** All that a block says to those who can't see it. */
+export function blockLabel(
+  activity: Activity,
+  plant: PlantModel,
+  clock: Clock,
+  breachTitles: readonly string[],
+): string {
+  const mode = drawnMode(activity);
+  const { placement } = activity;
+  const peak = Math.max(0, ...(mode?.phases ?? []).map((phase) => phase.steamKgPerH));
+  const parts = [
+    activityName(activity),
+    placeText(placement, plant, clock),
+    placement && mode ? `to ${clock.time(placement.start + mode.minutes)}` : '',
+    peak > 0 ? `steam up to ${rateText(peak)}` : 'no steam',
+    activity.fixing === 'free' ? '' : FIXING_WORDS[activity.fixing],
+    ...breachTitles,
+  ];
+  return parts.filter((part) => part !== '').join(', ');
+}
+
+export interface OverWords {
+  readonly look: 'over' | 'room' | 'quiet';
+  readonly figure: string;
+  readonly line: string;
+}
+
+/** How a header stands, in a figure and a line below it. */
+export function overWords(judgement: HeaderJudgement | undefined, clock: Clock): OverWords {
+  if (!judgement) return { look: 'quiet', figure: 'not judged', line: 'no such header' };
+  const { over, letdown, leastSpare } = judgement;
+  const worst = over && over.kg > 0 ? over : letdown && letdown.kg > 0 ? letdown : null;
+  if (worst) {
+    const what = worst === over ? 'over the limit' : 'more than the letdown passes';
+    return { look: 'over', figure: kgText(worst.kg), line: `${what}, ${spanText(worst.minutes)}` };
+  }
+  if (!over)
+    return letdown ? letdownFits(judgement) : { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
+  if (!leastSpare) return { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
+  return {
+    look: 'room',
+    figure: 'under the limit',
+    line: `least to spare ${rateText(leastSpare.kgPerH)}, ${clock.dayTime(leastSpare.minute)}`,
+  };
+}
+
+function letdownFits(judgement: HeaderJudgement): OverWords {
+  return {
+    look: 'room',
+    figure: 'the letdown passes it',
+    line: `peak ${rateText(judgement.peak.kgPerH)}; no limit set`,
+  };
+}
+
+/** What became of an edit that another was faster than: who moved what, when, and where it is now. */
+export function staleSentences(stale: readonly ActivityState[], dto: WeekDto, clock: Clock): string[] {
+  const byId = new Map(dto.week.activities.map((activity) => [activity.id, activity]));
+  return stale.map((state) => {
+    const activity = byId.get(state.id);
+    const name = activity ? activityName(activity) : state.id;
+    const who = state.movedBy ?? 'Somebody else';
+    const when = state.movedAt ? `, ${clock.instantDayTime(state.movedAt)}` : '';
+    return `${who} changed ${name}${when}. It is now ${placeText(state.placement, dto.week.plant, clock)}.`;
+  });
+}
+
+/** '12 min later', '5 min earlier', 'to Retort 3, 12 min later'. */
+export function moveText(move: Pick<ProposedMove, 'from' | 'to'>, plant: PlantModel): string {
+  const by = move.to.start - move.from.start;
+  const along = by === 0 ? '' : `${spanText(by)} ${by > 0 ? 'later' : 'earlier'}`;
+  if (move.to.unitId === move.from.unitId) return along || 'stays';
+  return ['to ' + unitName(plant, move.to.unitId), along].filter((part) => part !== '').join(', ');
+}
+
+/** 't/h' marks along a strip. */
+export function markText(kgPerH: number, topKgPerH: number): string {
+  return topKgPerH >= 4000 ? `${kgPerH / 1000} t/h` : groupDigits(kgPerH);
+}
