@@ -1,6 +1,6 @@
 import { judgeHeader, type HeaderJudgement } from './header/judgement';
 import { overTogether } from './header/judge';
-import { loadOf, LoadCurve } from './header/loadCurve';
+import { loadOf, type LoadCurve } from './header/loadCurve';
 import { NOTHING_OVER, type OverMeasure } from './header/over';
 import { whoDraws as whoDrawsOf, type DrawShare } from './header/whoDraws';
 import type { Activity, Placement } from './plant/activity';

@@ -18,7 +18,7 @@ export function combineSteps(fns: readonly StepFunction[], op: (values: readonly
   const values = fns.map(() => 0);
   const steps = moments.map((from) => {
     fns.forEach((fn, k) => {
-      for (let step = fn[next[k] as number]; step && step.from <= from; step = fn[next[k] as number]) {
+      for (let step = fn[next[k] as number]; step && step.from <= from; step = fn[next[k]]) {
         values[k] = step.value;
         next[k] = (next[k] as number) + 1;
       }
