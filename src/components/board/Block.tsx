@@ -18,7 +18,7 @@ export const Outline = memo(function Outline({ mode, peak }: { readonly mode: Mo
   const path = useMemo(() => outlinePath(spellsOf(mode.phases, mode.minutes), peak, OUTLINE_PX), [mode, peak]);
   return (
     <svg
-      className="outline"
+      className="steam-outline"
       viewBox={`0 0 ${mode.minutes} ${OUTLINE_PX}`}
       preserveAspectRatio="none"
       aria-hidden="true"
@@ -40,7 +40,7 @@ function Words({ activity, mode, peak, pxPerMin }: InsideProps & { readonly mode
   }, [activity, mode, peak, pxPerMin]);
   if (!words) return null;
   return (
-    <span className="block-words" style={{ left: words.left, width: words.width }}>
+    <span className="batch-words" style={{ left: words.left, width: words.width }}>
       {words.text}
     </span>
   );
@@ -80,7 +80,7 @@ const Inside = memo(function Inside({ drawn, breaches, events, ...inside }: Omit
       {(events ?? []).map((event) => (
         <svg
           key={event.id}
-          className="block-event"
+          className="batch-event"
           viewBox="0 0 8 8"
           style={{ left: (event.minute - drawn.start) * pxPerMin }}
           aria-hidden="true"
@@ -99,7 +99,7 @@ function BreachMark({ breach, drawn, pxPerMin }: { breach: Breach; drawn: Drawn;
   const to = Math.max(from + 1, Math.min(breach.to, drawn.start + drawn.minutes));
   return (
     <span
-      className="block-breach"
+      className="batch-breach"
       style={{ left: (from - drawn.start) * pxPerMin, width: (to - from) * pxPerMin }}
       aria-hidden="true"
     />
@@ -119,7 +119,7 @@ export const Block = memo(function Block({ label, ...inside }: Props) {
       tabIndex={tabbable ? 0 : -1}
       aria-label={label}
       aria-pressed={selected}
-      className="block"
+      className="batch"
       data-activity={activity.id}
       data-kin={kin}
       data-still={still}

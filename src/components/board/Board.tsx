@@ -2,12 +2,14 @@ import { DndContext, DragOverlay } from '@dnd-kit/core';
 import { useMemo, useRef, useState } from 'react';
 import type { MeDto } from '../../contracts/account';
 import type { WeekDto } from '../../contracts/week';
-import { Button } from '../ui/Button';
 import { Hatch } from '../ui/Hatch';
+import { BarActions } from './BarActions';
 import { BoardBar } from './BoardBar';
 import { BoardRows } from './BoardRows';
 import { CarriedChip } from './CarriedChip';
+import { IssueDialog } from './IssueDialog';
 import { KeyHelp } from './KeyHelp';
+import { LevelPanel } from './LevelPanel';
 import { Notices } from './Notices';
 import { Panel } from './Panel';
 import type { PointedAt } from './Pointed';
@@ -44,6 +46,7 @@ export function Board({ me, initial }: Props) {
   const { view, week, clock, carry, dto } = model;
   const rowsRef = useRef<HTMLDivElement>(null);
   const [pointed] = useState(() => createStore<PointedAt | null>(null));
+  const [issuing, setIssuing] = useState(false);
   const [slipping, setSlipping] = useState<string | null>(null);
   const ticks = useMemo(
     () => ticksOf(clock, week.horizonMin, view.scale.pxPerMin),
@@ -109,11 +112,11 @@ export function Board({ me, initial }: Props) {
               : null
           }
         >
-          {model.mayPlan ? (
-            <Button size="small" onClick={() => setSlipping(week.plant.lines[0]?.id ?? null)} disabled={!model.mayEdit}>
-              Slip a line…
-            </Button>
-          ) : null}
+          <BarActions
+            model={model}
+            onSlip={() => setSlipping(week.plant.lines[0]?.id ?? null)}
+            onIssue={() => setIssuing(true)}
+          />
         </BoardBar>
         <div className="board-body">
           <div ref={view.scrollRef} className="board-scroll" tabIndex={-1}>
@@ -132,13 +135,14 @@ export function Board({ me, initial }: Props) {
             </div>
           </div>
           <aside className="board-panel min-h-0 overflow-y-auto border-l border-rule bg-surface" aria-label="Week">
-            <Panel {...{ model, actions }} />
+            {model.levelling.open ? <LevelPanel {...{ model, actions }} /> : <Panel {...{ model, actions }} />}
           </aside>
         </div>
         <p className="sr-only" aria-live="assertive" data-testid="said">
           {actions.said}
         </p>
         <Notices notices={model.notices} onDismiss={model.dismiss} />
+        {issuing ? <IssueDialog model={model} onClose={() => setIssuing(false)} onGo={actions.goTo} /> : null}
         {slipping !== null ? (
           <SlipDialog
             lines={week.plant.lines}

@@ -34,7 +34,7 @@ const NONE: readonly never[] = [];
 const HOVER_MS = 160;
 
 const activityIdOf = (target: EventTarget): string | null =>
-  target instanceof Element ? (target.closest<HTMLElement>('.block')?.dataset.activity ?? null) : null;
+  target instanceof Element ? (target.closest<HTMLElement>('.batch')?.dataset.activity ?? null) : null;
 
 /** The units and what they do, with all that lies behind and above the blocks. */
 export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, onSlip }: Props) {
@@ -155,14 +155,14 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
 
 function LineName({ name, onSlip }: { readonly name: string; readonly onSlip: (() => void) | null }) {
   return (
-    <div className="board-label group flex items-end justify-between border-b border-b-rule pb-1 pl-4 max-sm:pl-2">
+    <div className="board-label group flex items-end border-b border-b-rule pb-1 pl-4 max-sm:pl-2">
       <span className="truncate text-xs font-semibold text-ink-muted">{name}</span>
       {onSlip ? (
         <button
           type="button"
           onClick={onSlip}
           aria-label={`Slip ${name}`}
-          className="rounded-sm px-1.5 text-2xs text-ink-muted opacity-0 group-hover:opacity-100 hover:text-ink focus-visible:opacity-100 max-sm:hidden"
+          className="absolute right-1 bottom-0.5 rounded-sm bg-paper px-1.5 text-2xs text-ink-muted opacity-0 group-hover:opacity-100 hover:text-ink focus-visible:opacity-100 max-sm:hidden"
         >
           Slip…
         </button>

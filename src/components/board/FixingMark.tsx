@@ -12,7 +12,7 @@ const SHAPES: Readonly<Record<Exclude<Fixing, 'free'>, string>> = {
 /** Fixed, started and done told apart by shape. */
 export function FixingMark({
   fixing,
-  className = 'block-mark',
+  className = 'batch-mark',
 }: {
   readonly fixing: Fixing;
   readonly className?: string;

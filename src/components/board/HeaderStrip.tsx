@@ -49,7 +49,10 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
 
   return (
     <section className="flex border-b border-rule bg-surface" aria-label={`${header.name}: steam load`}>
-      <div className="board-label !bg-surface px-4 py-2 max-sm:px-2" style={{ minHeight: open ? heightPx + 8 : 30 }}>
+      <div
+        className={`board-label !bg-surface px-4 max-sm:px-2 ${open ? 'py-2' : 'py-1.5'}`}
+        style={{ minHeight: open ? heightPx + 8 : 30 }}
+      >
         <StripTitle {...{ header, open, onToggle }} />
         {open ? (
           <>
@@ -63,11 +66,15 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
             <p className="text-2xs leading-4 text-ink-muted">{words.line}</p>
             <Marks {...{ strip, topKgPerH }} />
           </>
-        ) : (
-          <p className={`truncate text-2xs ${FIGURE_LOOKS[words.look]}`}>{words.figure}</p>
-        )}
+        ) : null}
       </div>
       <div className="board-track" style={{ width: scale.widthPx }}>
+        {open ? null : (
+          <p className="sticky left-(--label-w) inline-block px-3 py-1.5 text-xs leading-4.5">
+            <span className={`font-medium ${FIGURE_LOOKS[words.look]}`}>{words.figure}</span>
+            <span className="text-ink-muted">, {words.line}</span>
+          </p>
+        )}
         {open ? (
           <StripFace
             {...{ header, strip, scale, clock, base, limit, onPoint, pointedMin, carrying: live !== null }}

@@ -127,11 +127,11 @@ function LimitNames({ limit, strip, scale }: Pick<Props, 'limit' | 'strip' | 'sc
     return (
       <div
         key={span.from}
-        className="pointer-events-none absolute"
+        className="pointer-events-none absolute text-2xs leading-[14px]"
         style={{ left: xOf(scale, span.from), width, top: y < 17 ? y + 2 : y - 16 }}
         aria-hidden="true"
       >
-        <span className="strip-limit sticky left-[calc(var(--label-w)+8px)] ml-2 text-2xs leading-[14px] font-semibold text-room">
+        <span className="strip-limit sticky left-[calc(var(--label-w)+8px)] ml-2 inline-block text-2xs leading-[14px] font-semibold text-room">
           {width > 150
             ? `limit ${groupDigits(Math.round(span.value / 5) * 5)} kg/h`
             : groupDigits(Math.round(span.value / 5) * 5)}

@@ -2,7 +2,7 @@
 export type Zoom = 'shift' | 'day' | 'threeDays' | 'week';
 
 /** Minutes that fill the view at each zoom; a shift is shown with some of its neighbours. */
-const VIEW_MINUTES: Readonly<Record<Zoom, number>> = { shift: 600, day: 1440, threeDays: 4320, week: 10080 };
+const VIEW_MINUTES: Readonly<Record<Zoom, number>> = { shift: 720, day: 1440, threeDays: 4320, week: 10080 };
 
 export const ZOOMS: readonly { readonly zoom: Zoom; readonly label: string }[] = [
   { zoom: 'shift', label: 'Shift' },

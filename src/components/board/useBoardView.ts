@@ -13,12 +13,14 @@ export interface BoardView {
 }
 
 const ROW_ROOM_PX = 60;
+/** Part of the view before the moment that is kept in place: more is to come than has been. */
+const KEPT_AT = 0.35;
 
-/** Zoom and scroll of the board. A change of zoom keeps the middle of the view where it was. */
+/** Zoom and scroll of the board. A change of zoom keeps a moment where it was in the view. */
 export function useBoardView(horizonMin: number, firstMinute: number): BoardView {
   const scrollRef = useRef<HTMLDivElement>(null);
   const headRef = useRef<HTMLDivElement>(null);
-  const [zoom, setZoomState] = useState<Zoom>('day');
+  const [zoom, setZoomState] = useState<Zoom>('shift');
   const [viewPx, setViewPx] = useState(900);
   const keepMinute = useRef<number | null>(firstMinute);
   const scale = useMemo(() => scaleFor(zoom, viewPx, horizonMin), [zoom, viewPx, horizonMin]);
@@ -37,7 +39,7 @@ export function useBoardView(horizonMin: number, firstMinute: number): BoardView
     const scroller = scrollRef.current;
     if (!scroller || keepMinute.current === null) return;
     const view = scroller.clientWidth - labelPx(headRef.current);
-    scroller.scrollLeft = xOf(scale, keepMinute.current) - view / 2;
+    scroller.scrollLeft = xOf(scale, keepMinute.current) - view * KEPT_AT;
   }, [scale]);
 
   useEffect(() => {
@@ -45,7 +47,7 @@ export function useBoardView(horizonMin: number, firstMinute: number): BoardView
     if (!scroller) return;
     const keep = (): void => {
       const view = scroller.clientWidth - labelPx(headRef.current);
-      keepMinute.current = (scroller.scrollLeft + view / 2) / scale.pxPerMin;
+      keepMinute.current = (scroller.scrollLeft + view * KEPT_AT) / scale.pxPerMin;
     };
     scroller.addEventListener('scroll', keep, { passive: true });
     return () => scroller.removeEventListener('scroll', keep);
