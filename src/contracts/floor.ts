@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import type { Activity } from '../core/plant/activity';
 import { FLOOR_EVENTS } from '../core/shift/floorEvent';
+import type { PlannedEvent } from '../core/shift/sequence';
+import type { SteamOnBy } from '../core/shift/steamOnBy';
 import type { FloorEventDto, IssueDto, ShiftSpan } from './week';
 
 /** POST /api/weeks/:weekStart/floor-events */
@@ -34,5 +36,8 @@ export interface ShiftRowDto {
   readonly unitName: string;
   readonly start: number;
   readonly end: number;
+  /** In order of time. */
+  readonly planned: readonly PlannedEvent[];
+  readonly steamOnBy: SteamOnBy | null;
   readonly events: readonly FloorEventDto[];
 }

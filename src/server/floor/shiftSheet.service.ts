@@ -4,6 +4,7 @@ import type { FloorEventDto, ShiftSpan } from '@/contracts/week';
 import type { Week } from '@/core/schedule/week';
 import { drawnActivities } from '@/core/schedule/changeovers';
 import { shiftSequence } from '@/core/shift/sequence';
+import { steamOnBy } from '@/core/shift/steamOnBy';
 import { fail, ok, type Result } from '@/core/result';
 import { db, type Db } from '@/db/client';
 import type { Authorized } from '../auth/permissions';
@@ -75,6 +76,8 @@ function rowsOf(week: Week, lineId: string, shift: ShiftSpan, events: readonly F
   return shiftSequence(week, lineId, shift).flatMap((row) => {
     const activity = drawn.get(row.activityId);
     const own = events.filter(({ activityId }) => activityId === row.activityId);
-    return activity ? [{ activity, unitName: row.unitName, start: row.from, end: row.to, events: own }] : [];
+    if (!activity) return [];
+    const { unitName, from: start, to: end, events: planned } = row;
+    return [{ activity, unitName, start, end, planned, steamOnBy: steamOnBy(week, activity.id), events: own }];
   });
 }
