@@ -32,12 +32,6 @@ function connect(): { readonly pool: pg.Pool; readonly orm: NodePgDatabase<Schem
   return { pool, orm: drizzle(pool, { schema }) };
 }
 
-/** The pool behind `db`, opened on first use. */
-export function pool(): pg.Pool {
-  open ??= connect();
-  return open.pool;
-}
-
 /** The database, connected on first use so that importing this file needs no environment. */
 export const db: NodePgDatabase<Schema> = new Proxy({} as NodePgDatabase<Schema>, {
   get(_target, key) {

@@ -2,9 +2,14 @@ const ALWAYS: Readonly<Record<string, string>> = {
   'x-content-type-options': 'nosniff',
   'x-frame-options': 'DENY',
   'referrer-policy': 'same-origin',
-  'cross-origin-opener-policy': 'same-origin',
   'cross-origin-resource-policy': 'same-origin',
   'permissions-policy': 'camera=(), geolocation=(), microphone=(), payment=(), usb=()',
+};
+
+/** Browsers heed these over https only, and complain of them elsewhere. */
+const OVER_HTTPS: Readonly<Record<string, string>> = {
+  'strict-transport-security': 'max-age=31536000',
+  'cross-origin-opener-policy': 'same-origin',
 };
 
 const DATA_POLICY = "default-src 'none'; frame-ancestors 'none'";
@@ -16,8 +21,8 @@ const isHtml = (headers: Headers): boolean => headers.get('content-type')?.start
  * attributes, which get leave of their own. What is not a page may load nothing.
  */
 export function setSecurityHeaders(headers: Headers, appUrl = process.env.APP_URL): void {
-  for (const [name, value] of Object.entries(ALWAYS)) headers.set(name, value);
-  if (appUrl?.startsWith('https:')) headers.set('strict-transport-security', 'max-age=31536000');
+  const carried = appUrl?.startsWith('https:') ? { ...ALWAYS, ...OVER_HTTPS } : ALWAYS;
+  for (const [name, value] of Object.entries(carried)) headers.set(name, value);
   const policy = headers.get('content-security-policy');
   if (policy) {
     const closed = policy.replace(/;\s*$/, '');
