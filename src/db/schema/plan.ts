@@ -102,6 +102,8 @@ export const agreements = pgTable(
     plantId: plantId(),
     planId: planId(),
     revision: integer('revision').notNull(),
+    /** The last word on the week's firings and limits that it was given to: it holds until there is a newer one. */
+    capacityMark: text('capacity_mark').notNull().default(''),
     comment: text('comment').notNull(),
     authorId: text('author_id').notNull(),
     createdAt: createdAt(),

@@ -8,22 +8,22 @@ import type { WeekTime } from '../weeks/weekTime';
 export type IssueRow = typeof issues.$inferSelect;
 export type AgreementRow = typeof agreements.$inferSelect;
 
-/** When the steam that the week can have was last changed; null where nothing was ever said of it. */
-export async function capacitySaidAt(tx: Db, plantId: string, time: WeekTime): Promise<Date | null> {
-  let latest: Date | null = null;
-  for (const table of [steamLimits, boilerFirings]) {
+/** Names the last word on the boilers in fire and the steam limits of the week; a newer word makes another mark. */
+export async function capacityMark(tx: Db, plantId: string, time: WeekTime): Promise<string> {
+  const marks: number[] = [];
+  for (const table of [boilerFirings, steamLimits]) {
     const inWeek = and(
       eq(table.plantId, plantId),
       lt(table.fromAt, time.endInstant),
       gt(table.toAt, time.firstInstant),
     );
     const [row] = await tx
-      .select({ at: max(table.createdAt) })
+      .select({ last: max(table.sequence) })
       .from(table)
       .where(inWeek);
-    if (row?.at && (latest === null || row.at > latest)) latest = row.at;
+    marks.push(row?.last ?? 0);
   }
-  return latest;
+  return marks.join('.');
 }
 
 /** Appends an agreement. */

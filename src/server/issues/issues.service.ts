@@ -15,7 +15,7 @@ import { findWeek, planOf, type FoundWeek } from '../weeks/findWeek';
 import { agreementDto, issueDto } from '../weeks/weekDtos';
 import { weekOfPlan } from '../weeks/weekOfPlan';
 import { agreementInForce } from './agreementInForce';
-import { insertAgreement, insertIssue } from './issues.repo';
+import { capacityMark, insertAgreement, insertIssue } from './issues.repo';
 import { judgeForFloor, type Verdict } from './judge';
 
 interface SeenPlan {
@@ -49,12 +49,14 @@ export async function agree(
     const seen = await lockSeenPlan(tx, actor, weekStart, planRevision);
     if (!seen.ok) return seen;
     const { found, plan } = seen.value;
+    // Read before judging: a word said in between leaves the agreement without effect, never the other way round.
+    const mark = { capacityMark: await capacityMark(tx, plan.plantId, found.time), createdAt: now() };
     const { week } = await weekOfPlan(tx, found, plan);
     const { steam } = judgeForFloor(week, found.time);
     if (steam.length === 0) {
       return fail(conflict('NOTHING-OVER', 'The plan stays within the steam limits: there is nothing to agree to.'));
     }
-    const row = { id: newId(), ...ownerOf(plan), comment, authorId: actor.personId, createdAt: now() };
+    const row = { id: newId(), ...ownerOf(plan), comment, authorId: actor.personId, ...mark };
     await insertAgreement(tx, row);
     // Without a revision: the plan is the same, but whoever shows it has something new to read.
     await notify(tx, plan.plantId, { kind: 'plan', planId: plan.id });

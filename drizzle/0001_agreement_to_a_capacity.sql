@@ -1,0 +1,1 @@
+ALTER TABLE "agreements" ADD COLUMN "capacity_mark" text DEFAULT '' NOT NULL;
