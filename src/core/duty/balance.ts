@@ -110,3 +110,104 @@ export function averageRate(sheet: WorkingSheet, kg: number, minutes: number): n
     value: ({ m, t }) => (60 * m) / t,
   });
 }
+
+/** Heat into what passes through [kW]: m c (T_out - T_in) / 3600. */
+export function throughPower(
+  sheet: WorkingSheet,
+  what: { readonly symbol: string; readonly name: string },
+  kgPerH: number,
+  kJPerKgK: number,
+  inC: number,
+  outC: number,
+): number {
+  return sheet.step({
+    ...what,
+    formula: 'ṁ_p · c_p · (T_out − T_in) / 3600',
+    unit: 'kW',
+    source: ENERGY_BALANCE,
+    inputs: { ṁ_p: [kgPerH, 'kg/h'], c_p: [kJPerKgK, 'kJ/kgK'], T_in: [inC, '°C'], T_out: [outC, '°C'] },
+    value: ({ ṁ_p, c_p, T_in, T_out }) => (ṁ_p * c_p * (T_out - T_in)) / 3600,
+  });
+}
+
+/** Heat into the product on its way through [kW]. */
+export const productPower = (sheet: WorkingSheet, kgPerH: number, cp: number, inC: number, outC: number): number =>
+  throughPower(sheet, { symbol: 'q_product', name: 'Heat into the product' }, kgPerH, cp, inC, outC);
+
+/** Heat to bring a stream from one enthalpy to another [kW]: m (h_2 - h_1) / 3600. */
+export function streamPower(
+  sheet: WorkingSheet,
+  what: { readonly symbol: string; readonly name: string },
+  kgPerH: number,
+  fromKJPerKg: number,
+  toKJPerKg: number,
+): number {
+  return sheet.step({
+    ...what,
+    formula: 'ṁ · (h_2 − h_1) / 3600',
+    unit: 'kW',
+    source: IF97,
+    inputs: { ṁ: [kgPerH, 'kg/h'], h_1: [fromKJPerKg, 'kJ/kg'], h_2: [toKJPerKg, 'kJ/kg'] },
+    value: ({ ṁ, h_1, h_2 }) => (ṁ * (h_2 - h_1)) / 3600,
+  });
+}
+
+/** Heat to bring a mass of water from one enthalpy to another [kJ]: m (h_2 - h_1). */
+export function waterHeat(
+  sheet: WorkingSheet,
+  what: { readonly symbol: string; readonly name: string },
+  kg: number,
+  fromKJPerKg: number,
+  toKJPerKg: number,
+): number {
+  return sheet.step({
+    ...what,
+    formula: 'm · (h_2 − h_1)',
+    unit: 'kJ',
+    source: IF97,
+    inputs: { m: [kg, 'kg'], h_1: [fromKJPerKg, 'kJ/kg'], h_2: [toKJPerKg, 'kJ/kg'] },
+    value: ({ m, h_1, h_2 }) => m * (h_2 - h_1),
+  });
+}
+
+/** Heat lost over a spell [kJ]: 60 q t. */
+export function lostHeat(sheet: WorkingSheet, name: string, kW: number, minutes: number): number {
+  return sheet.step({
+    symbol: 'Q_loss',
+    name,
+    formula: '60 · q_loss · t',
+    unit: 'kJ',
+    source: ENERGY_BALANCE,
+    inputs: { q_loss: [kW, 'kW'], t: [minutes, 'min'] },
+    value: ({ q_loss, t }) => 60 * q_loss * t,
+  });
+}
+
+/** Adds up parts that were worked out above, by their symbols. */
+export function sumOf(
+  sheet: WorkingSheet,
+  what: { readonly symbol: string; readonly name: string; readonly unit: string },
+  parts: Readonly<Record<string, number>>,
+): number {
+  const entries = Object.entries(parts);
+  return sheet.step({
+    ...what,
+    formula: entries.map(([symbol]) => symbol).join(' + '),
+    source: ENERGY_BALANCE,
+    inputs: Object.fromEntries(entries.map(([symbol, value]) => [symbol, [value, what.unit] as const])),
+    value: (values) => entries.reduce((sum, [symbol]) => sum + (values[symbol] ?? 0), 0),
+  });
+}
+
+/** Steam supplied when a share of it escapes uncondensed [kg/h]: m_c / (1 - e). */
+export function withEscape(sheet: WorkingSheet, name: string, condensingKgPerH: number, escapeFraction: number): number {
+  return sheet.step({
+    symbol: 'ṁ',
+    name,
+    formula: 'ṁ_c / (1 − e)',
+    unit: 'kg/h',
+    source: 'Mass balance; escape is a figure of the plant',
+    inputs: { ṁ_c: [condensingKgPerH, 'kg/h'], e: [escapeFraction, ''] },
+    value: ({ ṁ_c, e }) => ṁ_c / (1 - e),
+  });
+}

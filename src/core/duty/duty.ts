@@ -18,6 +18,8 @@ export interface Duty {
   readonly phases: readonly DutyPhase[];
   readonly steamKg: number;
   readonly working: Working;
+  /** The machine takes hours to heat up: once it runs it is neither moved nor stopped. */
+  readonly neverMoved?: boolean;
 }
 
 /** The steam a stage is fed with, and the air pressure around it. */
@@ -43,3 +45,7 @@ export function closeDuty(sheet: WorkingSheet, phases: readonly DutyPhase[]): Du
 /** On every page of working: a plan is not a gauge. */
 export const ESTIMATE_CAUTION =
   'An estimate to plan by, good to about a fifth: gauges, instruments and interlocks decide.';
+
+/** On every page about a thermal process. */
+export const PROCESS_CAUTION =
+  'Vent, come-up and process time stand as the process authority set them; this page works out their steam, no more.';

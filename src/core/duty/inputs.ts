@@ -1,6 +1,6 @@
 /** Checking what a duty is asked for, and gathering what it needs. */
 import { checkRange, type Range } from '../quantity/range';
-import { fail, ok, type Problem, type Result } from '../result';
+import { fail, ok, problem, type Problem, type Result } from '../result';
 
 /** Range of each numeric field of an input; forms read it too. */
 export type InputRanges<Input> = {
@@ -21,6 +21,48 @@ export function checkInputs<Input extends object>(input: Input, ranges: InputRan
   }
   return undefined;
 }
+
+/** Values that may only rise, each with its field. */
+export type Ladder = readonly (readonly [name: string, field: string, value: number])[];
+
+/** @returns the first value [degC] below the one before it as DUTY-ORDER, naming both; undefined when none falls. */
+export function checkRising(ladder: Ladder): Problem | undefined {
+  for (const [index, [name, field, value]] of ladder.entries()) {
+    const below = ladder[index - 1];
+    if (below && value < below[2]) {
+      const text = `${name} is ${value} °C; it must be at least ${below[2]} °C (${below[0].toLowerCase()}).`;
+      return problem('DUTY-ORDER', text, field);
+    }
+  }
+  return undefined;
+}
+
+/** @returns the first problem in a list, checked as {@link checkInputs}, under `list.index.field`. */
+export function checkEach<Item extends object>(
+  list: string,
+  items: readonly Item[],
+  ranges: InputRanges<Item>,
+): Problem | undefined {
+  for (const [index, item] of items.entries()) {
+    const bad = checkInputs(item, ranges);
+    if (bad) return problem(bad.code, bad.message, `${list}.${index}.${bad.field}`);
+  }
+  return undefined;
+}
+
+/** Figures a form starts from; each stands for a plant that nobody has measured, and is marked so. */
+export interface InputDefaults<Input> {
+  readonly mark: typeof PLANT_SPECIFIC;
+  readonly values: Partial<Input>;
+}
+
+export const PLANT_SPECIFIC = 'plant-specific default';
+
+/** Marks a table of defaults; a field that is left out must be entered. */
+export const plantDefaults = <Input>(values: Partial<Input>): InputDefaults<Input> => ({
+  mark: PLANT_SPECIFIC,
+  values,
+});
 
 /** All of several results, or the first problem among them. */
 export function allOf<Values extends object>(results: {

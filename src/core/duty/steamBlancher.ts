@@ -10,6 +10,7 @@ import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
 import { allOf, checkInputs, range, type InputRanges } from './inputs';
 import { specificHeat, type SpecificHeat, type SpecificHeatBasis } from './specificHeat';
+import { warnOfLittleSteam } from './steamPerKg';
 import { openWorking, type WorkingSheet } from './working';
 
 export interface SteamBlancherInput {
@@ -104,32 +105,13 @@ function run(sheet: WorkingSheet, input: SteamBlancherInput, h: number, at: Enth
   if (input.runMin === 0) return { kind: 'run', minutes: 0, steamKgPerH: 0 };
   sheet.section('Run');
   const cp = balance.writeSpecificHeat(sheet, at.cp);
-  const heatKW = sheet.step({
-    symbol: 'q_product',
-    name: 'Heat into the product',
-    formula: 'ṁ_p · c_p · (T_out − T_in) / 3600',
-    unit: 'kW',
-    source: balance.ENERGY_BALANCE,
-    inputs: {
-      ṁ_p: [input.productKgPerH, 'kg/h'],
-      c_p: [cp, 'kJ/kgK'],
-      T_in: [input.productInC, '°C'],
-      T_out: [input.productOutC, '°C'],
-    },
-    value: ({ ṁ_p, c_p, T_in, T_out }) => (ṁ_p * c_p * (T_out - T_in)) / 3600,
-  });
+  const { productKgPerH, productInC, productOutC } = input;
+  const heatKW = balance.productPower(sheet, productKgPerH, cp, productInC, productOutC);
   const dh = balance.heatGivenUp(sheet, h, at.productOut, input.productOutC);
   const condensing = balance.steamForPower(sheet, 'ṁ_c', 'Steam condensing', heatKW + lossKW, dh);
-  const supplied = sheet.step({
-    symbol: 'ṁ',
-    name: 'Steam supplied, with what escapes at the ends',
-    formula: 'ṁ_c / (1 − e)',
-    unit: 'kg/h',
-    source: 'Mass balance; escape is a figure of the plant',
-    inputs: { ṁ_c: [condensing, 'kg/h'], e: [input.escapeFraction, ''] },
-    value: ({ ṁ_c, e }) => ṁ_c / (1 - e),
-  });
-  if (input.productKgPerH > 0) sheet.total('Steam per kg of product', supplied / input.productKgPerH, 'kg/kg');
+  const name = 'Steam supplied, with what escapes at the ends';
+  const supplied = balance.withEscape(sheet, name, condensing, input.escapeFraction);
+  warnOfLittleSteam(sheet, supplied, productKgPerH, 'the share escaping at the ends');
   const useful = (heatKW * 3600) / (supplied * (h - at.productIn));
   if (supplied > 0) sheet.total('Heat in product / heat in steam while running', useful, '');
   return { kind: 'run', minutes: input.runMin, steamKgPerH: supplied };

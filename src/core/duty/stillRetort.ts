@@ -10,15 +10,13 @@ import { fail, ok, problem, type Result } from '../result';
 import { boreAreaMm2, openingAt, type Opening } from '../steam/opening';
 import { saturationAtTemperature, type Saturation } from '../steam/saturation';
 import * as balance from './balance';
-import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
+import { closeDuty, ESTIMATE_CAUTION, PROCESS_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
 import { allOf } from './inputs';
+import { ventInSteps } from './retortVenting';
 import { openingFlow, surfaceArea, voidVolume } from './retortVessel';
 import { specificHeat, type SpecificHeat } from './specificHeat';
 import { checkStillRetort, type StillRetortInput } from './stillRetortInput';
 import { openWorking, type WorkingSheet } from './working';
-
-const PROCESS_CAUTION =
-  'Vent, come-up and process time stand as the process authority set them; this page works out their steam, no more.';
 
 /** Looked up or worked out once for the cycle. */
 interface Cycle {
@@ -144,7 +142,7 @@ function fillKg(sheet: WorkingSheet, voidM3: number, beforeKgPerM3: number, afte
   });
 }
 
-function vent(sheet: WorkingSheet, cycle: Cycle): DutyPhase {
+function vent(sheet: WorkingSheet, cycle: Cycle): DutyPhase[] {
   const { input, headerH, voidM3, ventOpening } = cycle;
   const { ventEndC: endC, ventMin: minutes, containers } = input;
   sheet.section('Vent');
@@ -161,7 +159,12 @@ function vent(sheet: WorkingSheet, cycle: Cycle): DutyPhase {
   const condensedKg = balance.steamForHeat(sheet, 'm_c', 'Steam condensed', heatKJ, dh);
   const filled = fillKg(sheet, voidM3, 0, 1 / cycle.vent.vg);
   const outKgPerH = openingFlow(sheet, 'Leaving by the vents', ventOpening);
-  return spellPhase(sheet, 'vent', minutes, { condensedKg, fillKg: filled, outKgPerH });
+  const whole = spellPhase(sheet, 'vent', minutes, { condensedKg, fillKg: filled, outKgPerH });
+  const { ventSteps: steps = 1 } = input;
+  if (steps === 1) return [whole];
+  const metalKg = metalKJ / dh;
+  const evenKg = condensedKg - metalKg + filled;
+  return ventInSteps(sheet, { metalKg, evenKg, outKg: (outKgPerH * minutes) / 60 }, minutes, steps);
 }
 
 function comeUp(sheet: WorkingSheet, cycle: Cycle): DutyPhase {
@@ -203,7 +206,7 @@ export function stillRetort(input: StillRetortInput, supply: SteamSupply): Resul
   const cycle = cycleOf(sheet, input, supply);
   if (!cycle.ok) return cycle;
   const phases: DutyPhase[] = [
-    vent(sheet, cycle.value),
+    ...vent(sheet, cycle.value),
     comeUp(sheet, cycle.value),
     ...processTime(sheet, cycle.value),
   ];

@@ -26,6 +26,8 @@ export interface Working {
   readonly cautions: readonly string[];
   readonly steps: readonly WorkingStep[];
   readonly totals: readonly WorkingTotal[];
+  /** Figures that are possible but unlikely, each a sentence that says what to look at. */
+  readonly warnings: readonly string[];
 }
 
 /** One line of working, its value computed from the very inputs that are shown. */
@@ -47,6 +49,8 @@ export interface WorkingSheet {
   step<Symbols extends string>(derivation: Derivation<Symbols>): number;
   /** Writes a closing figure and returns it. */
   total(name: string, value: number, unit: string): number;
+  /** Writes a warning: what is unlikely, and what to look at. */
+  warn(sentence: string): void;
   /** The finished page. */
   finish(): Working;
 }
@@ -55,6 +59,7 @@ export interface WorkingSheet {
 export function openWorking(title: string, cautions: readonly string[]): WorkingSheet {
   const steps: WorkingStep[] = [];
   const totals: WorkingTotal[] = [];
+  const warnings: string[] = [];
   let section = title;
   return {
     section: (name) => {
@@ -72,6 +77,9 @@ export function openWorking(title: string, cautions: readonly string[]): Working
       totals.push({ name, value, unit });
       return value;
     },
-    finish: () => ({ title, cautions, steps: [...steps], totals: [...totals] }),
+    warn: (sentence) => {
+      warnings.push(sentence);
+    },
+    finish: () => ({ title, cautions, steps: [...steps], totals: [...totals], warnings: [...warnings] }),
   };
 }
