@@ -1,5 +1,4 @@
-import type { PhaseKind } from '../duty/duty';
-import { drawnMode, type Activity, type Phase } from '../plant/activity';
+import { drawnMode, type Activity, type Phase, type PhaseKind } from '../plant/activity';
 import type { Interval } from '../time/interval';
 
 /** A phase where it stands in the week. [min, kg/h] */

@@ -1,5 +1,5 @@
-import type { DutyPhase, PhaseKind } from '../duty/duty';
-import type { Phase } from '../plant/activity';
+import type { DutyPhase } from '../duty/duty';
+import type { Phase, PhaseKind } from '../plant/activity';
 
 /** Ends this near to a whole minute are that minute: sums of real lengths carry rounding errors. [min] */
 const WHOLE_MINUTE_TOLERANCE = 1e-9;

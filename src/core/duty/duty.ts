@@ -1,10 +1,8 @@
 /** What a stage asks of its header: phases of steam over time, with the working behind them. */
+import type { PhaseKind } from '../plant/activity';
 import type { BarAbsolute } from '../quantity/units';
 import type { SteamState } from '../steam/steamState';
 import type { Working, WorkingSheet } from './working';
-
-export type PhaseKind =
-  'warmUp' | 'run' | 'idle' | 'heatUp' | 'boilOff' | 'hold' | 'vent' | 'comeUp' | 'process' | 'cool' | 'rinse' | 'wash';
 
 /** A spell of constant draw; real minutes, not yet on a grid. */
 export interface DutyPhase {

@@ -1,5 +1,4 @@
-import type { PhaseKind } from '../duty/duty';
-import type { LinkEnd } from '../plant/activity';
+import type { LinkEnd, PhaseKind } from '../plant/activity';
 import type { Interval } from '../time/interval';
 import type { StepFunction } from '../time/stepFunction';
 

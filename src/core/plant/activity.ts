@@ -1,9 +1,22 @@
-import type { PhaseKind } from '../duty/duty';
-
 /** A stage run of a batch, a cleaning, a warm-up or an idle spell: whatever occupies a unit or draws steam. */
 export type ActivityKind = 'stage' | 'cleaning' | 'warmUp' | 'idle';
 
 export type Stage = 'prepare' | 'blanch' | 'cook' | 'fill' | 'retort' | 'pasteurise' | 'other';
+
+/** What goes on while steam is drawn; the rules look for vents among them. */
+export type PhaseKind =
+  | 'warmUp'
+  | 'run'
+  | 'idle'
+  | 'heatUp'
+  | 'boilOff'
+  | 'hold'
+  | 'vent'
+  | 'comeUp'
+  | 'process'
+  | 'cool'
+  | 'rinse'
+  | 'wash';
 
 /** A steady draw on the minute grid: whole minutes after the activity's start. */
 export interface Phase {
