@@ -21,11 +21,12 @@ const LOOKED_AT = 12;
 /** How far a draw is moved to wait for a limit that rises. [min] */
 const GREATEST_WAIT_FOR_RISE = 240;
 
+/** One way of resolving an overload: one of two draws moves until they no longer overlap, or one leaves a low level. */
 interface Way {
-  readonly first: ActiveDraw | null;
-  readonly second: ActiveDraw;
-  readonly moves: number;
-  readonly by: number;
+  first: ActiveDraw | null;
+  second: ActiveDraw;
+  moves: number;
+  by: number;
 }
 
 /**
@@ -128,10 +129,9 @@ function cheapestWay(
   resource: number,
   minute: number,
 ): Way | null {
-  const ways = waysAt(state, resource, minute).sort((a, b) => Math.abs(a.by) - Math.abs(b.by));
   let best: Way | null = null;
   let least = Infinity;
-  for (const way of ways.slice(0, LOOKED_AT)) {
+  for (const way of waysAt(state, resource, minute)) {
     const price = priceOf(state, ripple, way);
     if (price === null) continue;
     const blurred = price > 0 ? price * (1 + noise * random()) : price * (1 - noise * random());
@@ -143,26 +143,40 @@ function cheapestWay(
   return best;
 }
 
+/** The shortest ways, shortest first. */
 function waysAt(state: State, resource: number, minute: number): Way[] {
   const active = activeDraws(state, resource, minute);
   const { rise, drop } = levelAround(state, resource, minute);
-  const movable = (a: ActiveDraw): boolean => state.model.activities[a.activity]!.movable;
   const ways: Way[] = [];
   for (const second of active) {
+    const movable = state.model.activities[second.activity]!.movable;
     for (const first of active) {
       if (first.activity === second.activity) continue;
       const by = first.to - second.from;
-      if (movable(second)) ways.push({ first, second, moves: second.activity, by });
-      if (movable(first)) ways.push({ first, second, moves: first.activity, by: -by });
+      if (movable) keepShortest(ways, first, second, second.activity, by);
+      if (state.model.activities[first.activity]!.movable) keepShortest(ways, first, second, first.activity, -by);
     }
-    if (!movable(second)) continue;
+    if (!movable) continue;
     const wait = rise - second.from;
     const ahead = second.to - drop;
-    if (wait < GREATEST_WAIT_FOR_RISE) ways.push({ first: null, second, moves: second.activity, by: wait });
-    if (drop > 0 && ahead < GREATEST_WAIT_FOR_RISE)
-      ways.push({ first: null, second, moves: second.activity, by: -ahead });
+    if (wait < GREATEST_WAIT_FOR_RISE) keepShortest(ways, null, second, second.activity, wait);
+    if (drop > 0 && ahead < GREATEST_WAIT_FOR_RISE) keepShortest(ways, null, second, second.activity, -ahead);
   }
-  return ways.filter((w) => w.by !== 0);
+  return ways;
+}
+
+/** Keeps the list sorted by length and no longer than is looked at. */
+function keepShortest(ways: Way[], first: ActiveDraw | null, second: ActiveDraw, moves: number, by: number): void {
+  const length = Math.abs(by);
+  if (length === 0 || (ways.length === LOOKED_AT && length >= Math.abs(ways[LOOKED_AT - 1]!.by))) return;
+  let at = ways.length === LOOKED_AT ? LOOKED_AT - 1 : ways.length;
+  const way: Way = ways.length === LOOKED_AT ? ways[at]! : { first, second, moves, by };
+  way.first = first;
+  way.second = second;
+  way.moves = moves;
+  way.by = by;
+  for (; at > 0 && Math.abs(ways[at - 1]!.by) > length; at--) ways[at] = ways[at - 1]!;
+  ways[at] = way;
 }
 
 /** The span around a minute in which the capacity is no greater than there. */
@@ -177,26 +191,30 @@ function levelAround(state: State, resource: number, minute: number): { rise: nu
 
 /** Price of the minutes moved and late; null where the push fails or doesn't bring the two apart. */
 function priceOf(state: State, ripple: Ripple, way: Way): number | null {
-  const push = ripple.push(way.moves, way.by);
-  if (!push) return null;
+  if (!ripple.tryPush(way.moves, way.by)) return null;
   const { first, second } = way;
   if (first) {
     const ends = ripple.startAfter(first.activity) + first.offset + first.minutes;
     if (ends > ripple.startAfter(second.activity) + second.offset) return null;
   }
   let price = 0.05 * Math.abs(way.by);
-  push.list.forEach((a, i) => {
-    price +=
-      state.placeCost(a, push.starts[i]!, state.modes[a]!) - state.placeCost(a, state.starts[a]!, state.modes[a]!);
-  });
-  return price + newlyMoved(state, push.list);
+  for (const a of ripple.pushed) {
+    const mode = state.modes[a]!;
+    price += state.placeCost(a, ripple.startAfter(a), mode) - state.placeCost(a, state.starts[a]!, mode);
+  }
+  return price + newlyMoved(state, ripple.pushed);
 }
 
+/** Price of the batches that would be moved for the first time. */
 function newlyMoved(state: State, list: readonly number[]): number {
-  const batches = new Set(list.map((a) => state.model.activities[a]!.batch));
-  let count = 0;
-  for (const b of batches) if (!state.isBatchMoved(b)) count++;
-  return count * state.model.problem.prices.batchMoved;
+  const { batchMoved } = state.model.problem.prices;
+  if (batchMoved === 0) return 0;
+  const batches = new Set<number>();
+  for (const a of list) {
+    const { batch } = state.model.activities[a]!;
+    if (!state.isBatchMoved(batch)) batches.add(batch);
+  }
+  return batches.size * batchMoved;
 }
 
 function resolve(state: State, ripple: Ripple, way: Way, log: ShiftLog): number | null {

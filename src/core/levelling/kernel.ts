@@ -8,7 +8,7 @@ import {
   type LinkArc,
   type Mode,
 } from './model';
-import { LATE_PRICE, type State } from './state';
+import type { State } from './state';
 
 /** How far and where a group may be put back. */
 export interface Window {
@@ -255,7 +255,7 @@ export class Kernel {
     const chosen = slot.chosen[mode.length]!;
     const perMinute = weight * minuteMoved;
     const atHome = this.state.moveCost(a, home.start, m);
-    const latePrice = weight * LATE_PRICE;
+    const latePrice = weight * this.state.latePrice;
     const unpushed = gap ? gap.to - mode.minutes : FAR;
     let found = false;
     for (let t = first; t <= last; t++) {

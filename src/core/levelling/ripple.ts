@@ -27,8 +27,9 @@ export class Ripple {
   private readonly later: Order[][];
   private readonly earlier: Order[][];
   private ordered: number[] = [];
-  private list: number[] = [];
-  private stack: number[] = [];
+  /** Activities of the last push. */
+  readonly pushed: number[] = [];
+  private readonly stack: number[] = [];
 
   constructor(private readonly state: State) {
     const n = state.model.activities.length;
@@ -60,27 +61,33 @@ export class Ripple {
 
   /** Where everything would be if `a` moved by `minutes`; null if something can't give way. */
   push(a: number, minutes: number, pushLater = minutes > 0): Push | null {
+    if (!this.tryPush(a, minutes, pushLater)) return null;
+    return { list: this.pushed.slice(), starts: this.pushed.map((b) => this.next[b]!) };
+  }
+
+  /** The same without building the answer: `pushed` and `startAfter` hold until the next push. */
+  tryPush(a: number, minutes: number, pushLater = minutes > 0): boolean {
     this.run++;
-    this.list = [];
-    this.stack = [];
+    this.pushed.length = 0;
+    this.stack.length = 0;
     this.set(a, this.state.starts[a]! + minutes);
     let steps = 0;
     while (this.stack.length > 0) {
-      if (this.list.length > this.greatest || ++steps > 20 * this.greatest) return null;
+      this.state.work += 8;
+      if (this.pushed.length > this.greatest || ++steps > 20 * this.greatest) return false;
       const b = this.stack.pop()!;
-      if (!this.settle(b, pushLater)) return null;
+      if (!this.settle(b, pushLater)) return false;
       if (pushLater) this.pushLater(b);
       else this.pushEarlier(b);
     }
-    if (!this.list.every((b) => this.keepsShift(b))) return null;
-    this.state.work += 8 * this.list.length;
-    return { list: this.list, starts: this.list.map((b) => this.next[b]!) };
+    for (const b of this.pushed) if (!this.keepsShift(b)) return false;
+    return true;
   }
 
   private set(a: number, start: number): void {
     if (this.stamp[a] !== this.run) {
       this.stamp[a] = this.run;
-      this.list.push(a);
+      this.pushed.push(a);
     }
     this.next[a] = start;
     this.stack.push(a);
@@ -101,6 +108,7 @@ export class Ripple {
     const { state } = this;
     const activity = state.model.activities[a]!;
     if (activity.takenOffBy >= 0 && this.freeAfter(a) > state.shiftEnd(a, this.next[a]!)) return false;
+    if (activity.frees.length === 0) return true;
     return activity.frees.every(
       (freed) => !state.placed[freed] || this.freeAfter(freed) <= state.shiftEnd(freed, this.startAfter(freed)),
     );

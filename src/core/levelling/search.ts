@@ -41,6 +41,7 @@ const OVER = 1e-6;
 /** Iterations between two adjustments of the overload's price. */
 const OSCILLATION = 50;
 const DEAREST_OVER = 20_000;
+const DEAREST_LATE = 400;
 
 /**
  * Large-neighbourhood search with simulated annealing: take a few batches out and put each back at its best place,
@@ -55,6 +56,7 @@ export class Search {
   private readonly kernel: Kernel;
   private readonly ripple: Ripple;
   private readonly movable: number[];
+  private readonly lateBefore: number;
   private current: number;
   private temperature: number;
   private pullWork = 0;
@@ -74,6 +76,7 @@ export class Search {
     this.ripple = new Ripple(this.state);
     this.movable = model.activities.filter((a) => a.movable).map((a) => a.index);
     this.baseline = baselineOf(this.state);
+    this.lateBefore = this.state.late;
     for (let r = 0; r < model.scale.length; r++) this.state.prices[r] = settings.overPrice / model.scale[r]!;
     this.temperature = settings.hot;
     this.best = this.snapshot(keyOf(this.state, this.baseline));
@@ -164,6 +167,8 @@ export class Search {
         if (price < DEAREST_OVER) state.prices[r]! *= 1.1;
       } else if (price > least) state.prices[r]! *= 0.92;
     }
+    if (state.late > this.lateBefore + OVER) state.latePrice = Math.min(DEAREST_LATE, state.latePrice * 1.1);
+    else state.latePrice = Math.max(LATE_PRICE, state.latePrice * 0.95);
     this.current = this.state.cost();
   }
 
@@ -190,7 +195,8 @@ export class Search {
     if (Math.abs(steamKg - key.steamKg) > OVER) return steamKg < key.steamKg || key.sharedWorse > 0;
     if (Math.abs(shared - key.shared) > OVER) return shared < key.shared;
     if (key.lateWorse > 0) return true;
-    return this.state.change + LATE_PRICE * this.state.late < key.change + LATE_PRICE * key.late - OVER;
+    if (Math.abs(this.state.late - key.late) > OVER) return this.state.late < key.late;
+    return this.state.change < key.change - OVER;
   }
 
   private pullStep(): void {

@@ -1,6 +1,6 @@
 import { FAR, linkBase, type Cleaning, type Draw, type LinkArc, type Mode, type Model } from './model';
 
-/** Minutes late weigh this much against the price of a minute moved, so that lateness goes first. */
+/** Least price of a minute late, against 1 for a minute moved. */
 export const LATE_PRICE = 20;
 
 /**
@@ -21,6 +21,8 @@ export class State {
   readonly over: Float64Array;
   /** By resource: price of one unit of amount over for a minute. */
   readonly prices: Float64Array;
+  /** Price of a minute late. */
+  latePrice = LATE_PRICE;
   /** Minutes late times weight. */
   late = 0;
   /** What the changes of the plan cost, the price for each batch moved included. */
@@ -55,7 +57,7 @@ export class State {
 
   /** The price of the whole plan under the present prices. */
   cost(): number {
-    let sum = this.change + LATE_PRICE * this.late;
+    let sum = this.change + this.latePrice * this.late;
     for (let r = 0; r < this.over.length; r++) sum += this.prices[r]! * this.over[r]!;
     return sum;
   }
@@ -85,7 +87,7 @@ export class State {
   placeCost(a: number, start: number, mode: number): number {
     const { weight, due, modes } = this.model.activities[a]!;
     const late = Math.max(0, start + modes[mode]!.minutes - due);
-    return this.moveCost(a, start, mode) + weight * LATE_PRICE * late;
+    return this.moveCost(a, start, mode) + weight * this.latePrice * late;
   }
 
   /** Minutes moved and another unit alone. */
