@@ -42,6 +42,7 @@ export function PrintSheet({ sheet, clock }: Props) {
         <thead>
           <tr>
             <th>Unit, batch</th>
+            <th>Begin</th>
             <th>Steam on by</th>
             {COLUMNS.map(([kind, name]) => (
               <th key={kind}>{name}</th>
@@ -52,17 +53,21 @@ export function PrintSheet({ sheet, clock }: Props) {
         <tbody>
           {sheet.rows.map((row) => (
             <tr key={row.activity.id} className="h-[13mm]">
-              <td className="w-[42mm]">
+              <td className="w-[40mm]">
                 <strong className="font-semibold">{row.unitName}</strong> {row.activity.code}
                 <br />
                 {row.activity.title}
               </td>
-              <td>{row.steamOnBy ? clock.time(row.steamOnBy.minute) : ''}</td>
-              {COLUMNS.map(([kind]) => (
-                <td key={kind} className="w-[20mm] text-[8pt]">
-                  {plannedText(row.planned, kind, clock)}
-                </td>
-              ))}
+              <td className="w-[13mm] text-[8pt]">{clock.time(row.start)}</td>
+              <td className="w-[16mm] font-semibold">{row.steamOnBy ? clock.time(row.steamOnBy.minute) : ''}</td>
+              {COLUMNS.map(([kind]) => {
+                const planned = row.planned.find((event) => event.kind === kind);
+                return (
+                  <td key={kind} className={`w-[19mm] text-[8pt] ${planned ? '' : 'hatch-quiet'}`}>
+                    {planned ? clock.time(planned.minute) : ''}
+                  </td>
+                );
+              })}
               <td className="w-[17mm]" />
             </tr>
           ))}
@@ -74,9 +79,4 @@ export function PrintSheet({ sheet, clock }: Props) {
       </p>
     </div>
   );
-}
-
-function plannedText(planned: ShiftSheetDto['rows'][number]['planned'], kind: FloorEventKind, clock: Clock): string {
-  const found = planned.find((event) => event.kind === kind);
-  return found ? clock.time(found.minute) : 'none';
 }

@@ -49,12 +49,12 @@ export function Sheet({ sheet: first, canRecord, whoMay }: SheetProps) {
   return (
     <>
       <div className="space-y-6 print:hidden">
-        <p className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 text-md">
+        <p className="flex items-center justify-between gap-4 text-md">
           <span>
-            <strong className="font-semibold">Issue {issue.number}</strong>
-            <span className="text-ink-muted">, on the floor since {clock.instantDayTime(issue.at)}</span>
+            <strong className="font-semibold">Issue {issue.number}</strong>,{' '}
+            <span className="text-ink-muted">on the floor since {clock.instantDayTime(issue.at)}</span>
           </span>
-          <Button className="min-h-14 px-5" onClick={() => window.print()}>
+          <Button className="min-h-14 shrink-0 px-5" onClick={() => window.print()}>
             Print
           </Button>
         </p>

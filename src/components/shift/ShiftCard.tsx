@@ -1,4 +1,6 @@
 import type { ShiftRowDto } from '@/contracts/floor';
+import { phasesPeakKgPerH } from '@/core/demand/activityLoad';
+import { drawnMode } from '@/core/plant/activity';
 import type { FloorEventKind } from '@/core/shift/floorEvent';
 import { Button } from '../ui/Button';
 import type { Clock } from '../time';
@@ -40,7 +42,7 @@ export function ShiftCard(props: Props) {
       </p>
       <WaitLine {...{ row, clock, nowMin }} begun={state.begun} />
       <div className="mt-3 px-4">
-        <OutlineTime row={row} events={state.events} nowMin={nowMin} topKgPerH={topKgPerH} />
+        {drawsSteam(row) ? <OutlineTime row={row} events={state.events} nowMin={nowMin} topKgPerH={topKgPerH} /> : null}
       </div>
       <ol className="grid auto-cols-fr grid-flow-col px-2 pt-1 pb-3">
         {state.events.map((event) => (
@@ -60,6 +62,8 @@ export function ShiftCard(props: Props) {
     </li>
   );
 }
+
+const drawsSteam = ({ activity }: ShiftRowDto): boolean => phasesPeakKgPerH(drawnMode(activity)?.phases ?? []) > 0;
 
 /** 'Steam on by 07:00: 120 min since closing of the first can', until steam is on. */
 function WaitLine(props: { row: ShiftRowDto; clock: Clock; nowMin: number; begun: boolean }) {
