@@ -35,7 +35,8 @@ function Words({ activity, mode, peak, pxPerMin }: InsideProps & { readonly mode
     const slot = titleSlot(spells, (peak * (OUTLINE_PX - WORDS_PX)) / OUTLINE_PX, pxPerMin);
     if (!slot) return null;
     const room = slot.widthPx - 8 - (activity.fixing === 'free' ? 0 : 12);
-    const text = fittingWords(activity.title, activity.code, room);
+    const code = activity.kind === 'cleaning' ? activity.title : activity.code;
+    const text = fittingWords(activity.title, code, room);
     return text === '' ? null : { text, left: slot.leftPx + 4, width: room + 2 };
   }, [activity, mode, peak, pxPerMin]);
   if (!words) return null;

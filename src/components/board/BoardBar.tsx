@@ -31,7 +31,7 @@ export interface WeekWords {
 /** Which week, how much of it, and what can be done with it. */
 export function BoardBar({ week, clock, issue, agreedBy, changedSince, zoom, onZoom, history, children }: Props) {
   return (
-    <div className="flex min-h-13 flex-wrap items-center gap-x-4 gap-y-2 border-b border-rule bg-surface px-4 py-2 max-sm:px-2">
+    <div className="board-bar flex flex-wrap items-center gap-x-4 gap-y-2 border-b border-rule bg-surface px-4 py-2 max-sm:px-2">
       <nav aria-label="Week" className="flex items-center gap-1">
         <WeekLink to={week.previous} label="Previous week" d="M10 3 5 8l5 5" />
         <WeekLink to={week.next} label="Next week" d="m6 3 5 5-5 5" />

@@ -141,7 +141,13 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
         scale={scale}
       />
       <Threads {...{ threads, rows, scale }} />
-      <CarryLayer {...{ rows, scale, clock }} carried={model.carry.store} peak={model.peak} names={model.names} />
+      <CarryLayer
+        {...{ rows, scale, clock }}
+        scrollRef={view.scrollRef}
+        carried={model.carry.store}
+        peak={model.peak}
+        names={model.names}
+      />
       <Pointed {...{ pointed, week, evaluation, scale, clock }} />
       <HoverCard
         {...{ hovered, rows, scale, clock, week }}

@@ -2,26 +2,30 @@ import { useState } from 'react';
 import type { Breach } from '../../core/schedule/breach';
 import { breachSentence, type Names } from '../../core/schedule/sentences';
 import type { Clock } from '../time';
-import { breachGroups, type BreachClass } from './drawn';
+import { breachGroups, type BreachClass, type BreachGroup } from './drawn';
 
-interface Props {
-  readonly breaches: readonly Breach[];
+interface Share {
   readonly names: Names;
   readonly clock: Clock;
   readonly onGo: (breach: Breach) => void;
 }
 
-const CLASS_WORDS: Readonly<Record<BreachClass, { readonly name: string; readonly hint: string }>> = {
-  process: { name: 'Process limits', hint: 'can’t be agreed to' },
-  steam: { name: 'Steam', hint: '' },
-  shared: { name: 'Shared limits', hint: '' },
-  time: { name: 'Time and units', hint: '' },
+interface Props extends Share {
+  readonly breaches: readonly Breach[];
+  readonly nowMin: number;
+}
+
+const CLASS_WORDS: Readonly<Record<BreachClass, string>> = {
+  process: 'Process limits, never to be agreed to',
+  steam: 'Steam',
+  shared: 'Shared limits',
+  time: 'Time and units',
 };
 const FEW = 6;
 
 /** What is to put right, by class; each line leads to its place. */
-export function BreachList({ breaches, names, clock, onGo }: Props) {
-  const groups = breachGroups(breaches);
+export function BreachList({ breaches, nowMin, ...share }: Props) {
+  const groups = breachGroups(breaches, nowMin);
   return (
     <section aria-labelledby="to-put-right">
       <header className="flex items-baseline justify-between">
@@ -29,7 +33,7 @@ export function BreachList({ breaches, names, clock, onGo }: Props) {
           To put right
         </h2>
         <span className="text-sm text-ink-muted" data-testid="breach-count">
-          {breaches.length}
+          {groups.reduce((sum, group) => sum + group.breaches.length, 0)}
         </span>
       </header>
       {groups.length === 0 ? (
@@ -38,38 +42,55 @@ export function BreachList({ breaches, names, clock, onGo }: Props) {
           <span>Nothing. The plan keeps every limit that is judged.</span>
         </p>
       ) : (
-        groups.map((group) => (
-          <Group key={group.class} name={group.class} breaches={group.breaches} {...{ names, clock, onGo }} />
-        ))
+        groups.map((group) => <Group key={group.class} group={group} {...share} />)
       )}
     </section>
   );
 }
 
-function Group({ name, breaches, names, clock, onGo }: Props & { readonly name: BreachClass }) {
+function Group({ group, ...share }: Share & { readonly group: BreachGroup }) {
   const [all, setAll] = useState(false);
-  const words = CLASS_WORDS[name];
-  const shown = all ? breaches : breaches.slice(0, FEW);
+  const { breaches, past } = group;
+  const shown = all ? [...past, ...breaches] : breaches.slice(0, FEW);
+  const hidden = breaches.length + past.length - shown.length;
+  const name = CLASS_WORDS[group.class];
   return (
-    <section className="mt-3" aria-label={words.name}>
+    <section className="mt-3" aria-label={name}>
       <h3 className="label flex items-baseline justify-between">
-        <span>
-          {words.name}
-          {words.hint ? <span className="font-normal">, {words.hint}</span> : null}
-        </span>
+        <span>{name}</span>
         <span>{breaches.length}</span>
       </h3>
-      <ul className="mt-1">
-        {shown.map((breach) => (
-          <Line key={breach.id} {...{ breach, names, clock, onGo }} />
-        ))}
-      </ul>
-      {breaches.length > FEW ? (
-        <button type="button" className="link mt-0.5 text-xs" onClick={() => setAll(!all)}>
-          {all ? 'Show fewer' : `Show all ${breaches.length}`}
+      <Lines breaches={shown} {...share} />
+      {all || hidden > 0 ? (
+        <button type="button" className="link mt-1 text-xs" onClick={() => setAll(!all)}>
+          {all ? 'Show fewer' : moreWords(breaches.length - shown.length, past.length)}
         </button>
       ) : null}
     </section>
+  );
+}
+
+function moreWords(more: number, past: number): string {
+  const words = [more > 0 ? `${more} more` : '', past > 0 ? `${past} already past` : ''].filter((w) => w !== '');
+  return `Show ${words.join(' and ')}`;
+}
+
+/** Lines below the day that they are on. */
+function Lines({ breaches, ...share }: Share & { readonly breaches: readonly Breach[] }) {
+  const { clock } = share;
+  return (
+    <ul>
+      {breaches.map((breach, i) => {
+        const before = breaches[i - 1];
+        const newDay = !before || clock.day(before.from) !== clock.day(breach.from);
+        return (
+          <li key={breach.id}>
+            {newDay ? <p className="mt-1.5 text-2xs text-ink-muted">{clock.day(breach.from)}</p> : null}
+            <Line breach={breach} {...share} />
+          </li>
+        );
+      })}
+    </ul>
   );
 }
 
@@ -77,24 +98,23 @@ const BARS: Readonly<Record<BreachClass, string>> = {
   process: 'hatch-over outline outline-1 -outline-offset-1 outline-over',
   steam: 'hatch-over',
   shared: 'bg-ink-muted',
-  time: 'bg-rule',
+  time: 'bg-edge',
 };
 
-function Line({ breach, names, clock, onGo }: Omit<Props, 'breaches'> & { readonly breach: Breach }) {
-  const { title, detail } = breachSentence(breach, names, clock.dayTime);
+function Line({ breach, names, clock, onGo }: Share & { readonly breach: Breach }) {
+  const sameDay = clock.day(breach.from) === clock.day(Math.max(breach.from, breach.to - 1));
+  const { title, detail } = breachSentence(breach, names, sameDay ? clock.time : clock.dayTime);
   return (
-    <li>
-      <button
-        type="button"
-        onClick={() => onGo(breach)}
-        className="-mx-2 flex w-[calc(100%+1rem)] gap-2.5 rounded-sm px-2 py-1.5 text-left hover:bg-sunken"
-      >
-        <span className={`w-1 shrink-0 self-stretch rounded-sm ${BARS[breach.class]}`} aria-hidden="true" />
-        <span className="min-w-0">
-          <span className="block text-sm leading-[18px] font-medium">{title}</span>
-          <span className="line-clamp-2 text-xs leading-4 text-ink-muted">{detail}</span>
-        </span>
-      </button>
-    </li>
+    <button
+      type="button"
+      onClick={() => onGo(breach)}
+      className="-mx-2 flex w-[calc(100%+1rem)] gap-2.5 rounded-sm px-2 py-1 text-left hover:bg-sunken"
+    >
+      <span className={`w-1 shrink-0 self-stretch rounded-sm ${BARS[breach.class]}`} aria-hidden="true" />
+      <span className="min-w-0">
+        <span className="block text-sm leading-[18px] font-medium">{title}</span>
+        <span className="line-clamp-2 text-xs leading-4 text-ink-muted">{detail}</span>
+      </span>
+    </button>
   );
 }

@@ -1,3 +1,4 @@
+import type { RefObject } from 'react';
 import { drawnMode } from '../../core/plant/activity';
 import type { Names } from '../../core/schedule/sentences';
 import type { Clock } from '../time';
@@ -16,6 +17,7 @@ interface Props {
   readonly peak: number;
   readonly names: Names;
   readonly clock: Clock;
+  readonly scrollRef: RefObject<HTMLDivElement | null>;
 }
 
 /** What shows while an activity is carried: starts at which its steam fits, rows it can't run on, and where it lands. */
@@ -70,7 +72,9 @@ function RowLights({
   });
 }
 
-function Landing({ carried, rows, scale, peak, names, clock }: Props) {
+const TAG_PX = 300;
+
+function Landing({ carried, rows, scale, peak, names, clock, scrollRef }: Props) {
   const carrying = useStore(carried, (c) => c);
   const target = carrying?.carry.target;
   if (!carrying || !target) return null;
@@ -81,6 +85,8 @@ function Landing({ carried, rows, scale, peak, names, clock }: Props) {
   const verdict = verdictOf(activity.id, target, carrying.fits, carrying.preview, names, clock);
   const left = xOf(scale, target.start);
   const below = top < 60;
+  const scroller = scrollRef.current;
+  const leftmost = scroller ? scroller.scrollLeft + scroller.clientWidth - TAG_PX * 1.6 : left;
   return (
     <>
       <div
@@ -94,7 +100,7 @@ function Landing({ carried, rows, scale, peak, names, clock }: Props) {
       <div
         className="float absolute z-[8] max-w-72 px-2 py-1 text-xs"
         style={{
-          left: Math.max(0, left),
+          left: Math.max(0, Math.min(left, leftmost)),
           top: below ? top + ROW_PX + 2 : top - 4,
           transform: below ? '' : 'translateY(-100%)',
         }}

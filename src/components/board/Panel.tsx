@@ -28,18 +28,24 @@ export function Panel({ model, actions }: Props) {
         </div>
       ) : null}
       <div className="px-5 py-4">
-        <BreachList breaches={model.evaluation.breaches} names={model.names} clock={model.clock} onGo={actions.goTo} />
+        <BreachList
+          breaches={model.evaluation.breaches}
+          names={model.names}
+          clock={model.clock}
+          nowMin={model.nowMin}
+          onGo={actions.goTo}
+        />
       </div>
       <div className="px-5 py-4">
         <Unplaced
-          activities={model.waiting}
+          groups={model.waiting}
           peak={model.peak}
           clock={model.clock}
           mayEdit={model.mayEdit}
           selectedId={actions.selectedId}
           onSelect={actions.setSelectedId}
           onLift={actions.lift}
-          onPlaceBatch={actions.placeAll}
+          onPlaceAll={actions.placeAll}
         />
       </div>
     </div>

@@ -57,7 +57,7 @@ export function SelectedDetail(props: Props) {
         ) : null}
       </dl>
       {isRun ? (
-        <div className="mt-2.5 flex flex-wrap items-center gap-2">
+        <div className="mt-2.5 flex flex-wrap items-center gap-x-2 gap-y-2">
           {mayEdit && canCarry(activity) && activity.placement ? (
             <>
               <Button size="small" onClick={onFix}>
@@ -68,7 +68,7 @@ export function SelectedDetail(props: Props) {
               </Button>
             </>
           ) : null}
-          <a className="link ml-auto text-sm" href={`/working/${encodeURIComponent(activity.id)}`}>
+          <a className="link text-sm" href={`/working/${encodeURIComponent(activity.id)}`}>
             Show the working
           </a>
         </div>

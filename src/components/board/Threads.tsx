@@ -1,7 +1,9 @@
 import { memo } from 'react';
 import { ROW_PX, type Rows } from './rows';
 import { threadPath, type Thread } from './threads';
-import type { TimeScale } from './timeScale';
+import { xOf, type TimeScale } from './timeScale';
+
+const FOOT_PX = ROW_PX - 4;
 
 interface Props {
   readonly threads: readonly Thread[];
@@ -21,17 +23,23 @@ export const Threads = memo(function Threads({ threads, rows, scale }: Props) {
       focusable="false"
     >
       {threads.map((thread) => {
-        const d = threadPath(thread, rows, scale.pxPerMin, ROW_PX - 4);
+        const d = threadPath(thread, rows, scale.pxPerMin, FOOT_PX);
         if (!d) return null;
+        const [x0, x1] = [xOf(scale, thread.fromMinute), xOf(scale, thread.toMinute)];
+        const [y0, y1] = [rows.topOfUnit.get(thread.fromUnitId) ?? 0, rows.topOfUnit.get(thread.toUnitId) ?? 0];
+        const paint = thread.broken ? 'fill-over' : 'fill-focus';
         return (
-          <path
-            key={thread.linkId}
-            d={d}
-            className={`fill-none ${thread.broken ? 'stroke-over' : 'stroke-focus'}`}
-            strokeWidth={thread.broken ? 2 : 1.25}
-            strokeDasharray={thread.broken ? '5 3' : undefined}
-            strokeOpacity={thread.broken ? 1 : 0.75}
-          />
+          <g key={thread.linkId}>
+            <circle cx={x0} cy={y0 + FOOT_PX} r={2.5} className={paint} />
+            <circle cx={x1} cy={y1 + FOOT_PX} r={2.5} className={paint} />
+            <path
+              d={d}
+              className={`fill-none ${thread.broken ? 'stroke-over' : 'stroke-focus'}`}
+              strokeWidth={thread.broken ? 2 : 1.25}
+              strokeDasharray={thread.broken ? '5 3' : undefined}
+              strokeOpacity={thread.broken ? 1 : 0.75}
+            />
+          </g>
         );
       })}
     </svg>

@@ -1,4 +1,4 @@
-import { drawnMode, type Activity } from '../../core/plant/activity';
+import { drawnMode, type Activity, type Link } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
 
 /** A placed activity as the board draws it. */
@@ -58,12 +58,49 @@ export type BreachClass = (typeof CLASS_ORDER)[number];
 export interface BreachGroup {
   readonly class: BreachClass;
   readonly breaches: readonly Breach[];
+  /** Those that were over before now: nothing can be put right of them. */
+  readonly past: readonly Breach[];
 }
 
 /** Breaches by class, those that can't be agreed to first; within a class in order of time. */
-export function breachGroups(breaches: readonly Breach[]): BreachGroup[] {
-  return CLASS_ORDER.map((name) => ({
-    class: name,
-    breaches: breaches.filter((breach) => breach.class === name).sort((a, b) => a.from - b.from || a.to - b.to),
-  })).filter((group) => group.breaches.length > 0);
+export function breachGroups(breaches: readonly Breach[], nowMin: number): BreachGroup[] {
+  return CLASS_ORDER.map((name) => {
+    const all = breaches.filter((breach) => breach.class === name).sort((a, b) => a.from - b.from || a.to - b.to);
+    return {
+      class: name,
+      breaches: all.filter((breach) => breach.to > nowMin),
+      past: all.filter((breach) => breach.to <= nowMin),
+    };
+  }).filter((group) => group.breaches.length + group.past.length > 0);
+}
+
+/** Activities that wait for a place and hang together. */
+export interface WaitingGroup {
+  readonly key: string;
+  readonly title: string;
+  readonly due: number | null;
+  readonly activities: readonly Activity[];
+}
+
+/** Waiting activities, those that links join together in one group; groups and activities keep their order. */
+export function waitingGroups(waiting: readonly Activity[], links: readonly Link[]): WaitingGroup[] {
+  const root = new Map(waiting.map((activity) => [activity.id, activity.id]));
+  const rootOf = (id: string): string => {
+    const up = root.get(id) as string;
+    return up === id ? id : rootOf(up);
+  };
+  for (const { from, to } of links) {
+    if (root.has(from.activityId) && root.has(to.activityId)) root.set(rootOf(to.activityId), rootOf(from.activityId));
+  }
+  const groups = new Map<string, Activity[]>();
+  for (const activity of waiting) {
+    const key = rootOf(activity.id);
+    groups.set(key, [...(groups.get(key) ?? []), activity]);
+  }
+  return [...groups.entries()].map(([key, activities]) => ({
+    key,
+    title: activities[0]?.title ?? '',
+    due: activities.reduce<number | null>((due, a) => (a.due === null ? due : Math.max(due ?? a.due, a.due)), null),
+    activities: [...activities].sort((a, b) => (a.code < b.code ? -1 : a.code > b.code ? 1 : 0)),
+  }));
 }

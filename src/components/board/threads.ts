@@ -4,6 +4,8 @@ import type { Rows } from './rows';
 /** A wait between two linked activities, drawn from moment to moment. */
 export interface Thread {
   readonly linkId: string;
+  readonly fromId: string;
+  readonly toId: string;
   readonly fromMinute: number;
   readonly toMinute: number;
   readonly fromUnitId: string;
@@ -38,6 +40,8 @@ export function threadsOf(links: readonly Link[], activities: readonly Activity[
     return [
       {
         linkId: link.id,
+        fromId: from.id,
+        toId: to.id,
         fromMinute,
         toMinute,
         fromUnitId: from.placement.unitId,

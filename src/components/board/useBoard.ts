@@ -6,7 +6,7 @@ import type { Activity } from '../../core/plant/activity';
 import { mergeIntervals } from '../../core/time/interval';
 import { breachSentence, namesOf } from '../../core/schedule/sentences';
 import { makeClock } from '../time';
-import { breachesByActivity, drawnByUnit, notYetPlaced } from './drawn';
+import { breachesByActivity, drawnByUnit, notYetPlaced, waitingGroups } from './drawn';
 import { addNotice, type BoardNotice } from './notices';
 import { boardPeakKgPerH } from './outline';
 import { layOutRows } from './rows';
@@ -93,7 +93,7 @@ function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, c
     () => mergeIntervals(evaluation.headers.flatMap((h) => [...(h.over?.spans ?? []), ...(h.letdown?.spans ?? [])])),
     [evaluation],
   );
-  const waiting = useMemo(() => notYetPlaced(week.activities), [week]);
+  const waiting = useMemo(() => waitingGroups(notYetPlaced(week.activities), week.links), [week]);
   const isProposal = preview !== null;
   const before = isProposal ? evaluator.evaluation : null;
   return { week, evaluation, before, isProposal, clock, names, drawn, byUnit, breaches, labels, over, waiting };
@@ -130,7 +130,8 @@ export function useThreads(model: BoardModel, selectedId: string | null) {
   const kin = useMemo(() => {
     const batchId = week.activities.find((a) => a.id === selectedId)?.batchId;
     const ids = batchId ? week.activities.filter((a) => a.batchId === batchId && a.id !== selectedId) : [];
-    return new Set(ids.map((a) => a.id));
-  }, [week, selectedId]);
+    const joined = threads.flatMap((thread) => [thread.fromId, thread.toId]).filter((id) => id !== selectedId);
+    return new Set([...ids.map((a) => a.id), ...joined]);
+  }, [week, selectedId, threads]);
   return { threads, kin };
 }

@@ -5,7 +5,7 @@ import { placeBatch } from '../../core/schedule/placeBatch';
 import type { Breach } from '../../core/schedule/breach';
 import type { Edit } from '../../core/schedule/edit';
 import type { Result } from '../../core/result';
-import { drawnOf } from './drawn';
+import { drawnOf, type WaitingGroup } from './drawn';
 import { neighbourOf, type Direction } from './navigate';
 import type { BoardModel } from './useBoard';
 import { useLatest } from './useLatest';
@@ -137,16 +137,18 @@ export function useBoardActions(model: BoardModel) {
     return edit.changes.length;
   };
 
-  const placeAll = (batchId: string): void => {
-    const edit = placeBatch(model.dto.week, batchId, Math.max(0, model.nowMin));
+  const placeAll = (group: WaitingGroup): void => {
+    const ids = new Set(group.activities.map((activity) => activity.id));
+    const { week } = model.dto;
+    const asBatch = week.activities.map((a) => (ids.has(a.id) ? { ...a, batchId: group.key } : a));
+    const edit = placeBatch({ ...week, activities: asBatch }, group.key, Math.max(0, model.nowMin));
     if (!make(edit, 'Placed where there is room.') || !edit.ok) return;
-    const first = edit.value.changes[0];
-    if (first?.after.placement) {
-      setSelectedId(first.activityId);
-      const { unitId, start } = first.after.placement;
-      model.view.reveal({ from: start, to: start + 60 }, model.rows.topOfUnit.get(unitId) ?? null);
-      setSaid(`Placed from ${unitName(model.week.plant, unitId)} on, ${model.clock.dayTime(start)}.`);
-    }
+    const first = edit.value.changes.find((change) => change.after.placement !== null);
+    if (!first?.after.placement) return;
+    const { unitId, start } = first.after.placement;
+    setSelectedId(first.activityId);
+    model.view.reveal({ from: start, to: start + 60 }, model.rows.topOfUnit.get(unitId) ?? null);
+    setSaid(`Placed from ${unitName(model.week.plant, unitId)} on, ${model.clock.dayTime(start)}.`);
   };
 
   const stepHistory = (which: 'undo' | 'redo'): void => {
