@@ -200,7 +200,12 @@ export function sumOf(
 }
 
 /** Steam supplied when a share of it escapes uncondensed [kg/h]: m_c / (1 - e). */
-export function withEscape(sheet: WorkingSheet, name: string, condensingKgPerH: number, escapeFraction: number): number {
+export function withEscape(
+  sheet: WorkingSheet,
+  name: string,
+  condensingKgPerH: number,
+  escapeFraction: number,
+): number {
   return sheet.step({
     symbol: 'ṁ',
     name,

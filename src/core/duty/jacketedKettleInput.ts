@@ -1,6 +1,6 @@
 /** What a jacketed kettle's batch is described by, and the checks on it. */
 import { problem, type Problem } from '../result';
-import { checkInputs, range, type InputRanges } from './inputs';
+import { checkInputs, plantDefaults, range, type InputRanges } from './inputs';
 import type { SpecificHeatBasis } from './specificHeat';
 
 export interface JacketedKettleInput {
@@ -34,6 +34,19 @@ export const JACKETED_KETTLE_RANGES: InputRanges<JacketedKettleInput> = {
   holdMin: range('Hold', 'min', 0, 1440),
   holdLossKW: range('Loss while holding', 'kW', 0, 200),
 };
+
+export const JACKETED_KETTLE_DEFAULTS = plantDefaults<JacketedKettleInput>({
+  kettleSteelKg: 380,
+  startC: 20,
+  endC: 100,
+  jacketPressureBarG: 2.5,
+  heatTransferWPerM2K: 700,
+  jacketAreaM2: 2.4,
+  heatingLossKW: 3,
+  boilOffKg: 0,
+  holdMin: 0,
+  holdLossKW: 4.5,
+});
 
 /** @returns DUTY-RANGE or DUTY-ORDER naming field, value and range; undefined for a sound batch. */
 export function checkJacketedKettle(input: JacketedKettleInput): Problem | undefined {

@@ -76,13 +76,7 @@ function metalHeat(sheet: WorkingSheet, input: OverpressureRetortInput, fromC: n
   return balance.sumOf(sheet, metal, {
     Q_shell: warm('Q_shell', 'Heat in the shell', shellKg, steel, input.shellC),
     Q_baskets: warm('Q_baskets', 'Heat in the baskets', basketsKg, steel, input.basketsC),
-    Q_cans: warm(
-      'Q_cans',
-      'Heat in the containers',
-      containers * containerKgEach,
-      containerKJPerKgK,
-      input.initialC,
-    ),
+    Q_cans: warm('Q_cans', 'Heat in the containers', containers * containerKgEach, containerKJPerKgK, input.initialC),
   });
 }
 

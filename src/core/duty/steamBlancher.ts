@@ -8,7 +8,7 @@ import { fail, ok, problem, type Result } from '../result';
 import { liquidEnthalpy } from '../steam/fluid';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
-import { allOf, checkInputs, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, plantDefaults, range, type InputRanges } from './inputs';
 import { specificHeat, type SpecificHeat, type SpecificHeatBasis } from './specificHeat';
 import { warnOfLittleSteam } from './steamPerKg';
 import { openWorking, type WorkingSheet } from './working';
@@ -52,6 +52,22 @@ export const STEAM_BLANCHER_RANGES: InputRanges<SteamBlancherInput> = {
   escapeFraction: range('Share escaping at the ends', '', 0, 0.95),
   idleEscapeKgPerH: range('Escaping while idling', 'kg/h', 0, 5000),
 };
+
+/** The escape has no default: it is the figure that decides, and only the plant knows it. */
+export const STEAM_BLANCHER_DEFAULTS = plantDefaults<SteamBlancherInput>({
+  productInC: 15,
+  productOutC: 90,
+  warmUpMin: 15,
+  idleMin: 10,
+  steelKg: 850,
+  sumpWaterKg: 180,
+  coldC: 20,
+  chamberC: 95,
+  shellAreaM2: 9.5,
+  ambientC: 22,
+  surfaceLossWPerM2K: 14,
+  idleEscapeKgPerH: 60,
+});
 
 interface Enthalpies {
   readonly cp: SpecificHeat;

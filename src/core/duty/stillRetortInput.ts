@@ -1,7 +1,7 @@
 /** What a still retort's cycle is described by, and the checks on it. */
 import { checkRange } from '../quantity/range';
 import type { Problem } from '../result';
-import { checkEach, checkInputs, checkRising, DUTY_RANGE, range, type InputRanges } from './inputs';
+import { checkEach, checkInputs, checkRising, DUTY_RANGE, plantDefaults, range, type InputRanges } from './inputs';
 import type { SpecificHeatBasis } from './specificHeat';
 
 /** A piece of the process time, with the mean temperature of the contents at its end. */
@@ -80,6 +80,27 @@ export const STILL_RETORT_RANGES: InputRanges<StillRetortInput> = {
   bleeders: range('Bleeders', '', 0, 100),
   bleederBoreMm: range('Bleeder bore', 'mm', 0.5, 30),
 };
+
+/** The scheduled process has no default: its times and temperatures come from the process authority. */
+export const STILL_RETORT_DEFAULTS = plantDefaults<StillRetortInput>({
+  specificHeatAtC: 90,
+  basketsKg: 360,
+  shellKg: 3200,
+  shellDiameterM: 1.2,
+  shellLengthM: 5,
+  shellC: 25,
+  basketsC: 25,
+  ambientC: 25,
+  surfaceLossWPerM2K: 14,
+  ventSteps: 2,
+  coolMin: 20,
+  vents: 4,
+  ventBoreMm: 26.645,
+  ventDischarge: 0.6,
+  ventPressureBarG: 0.15,
+  bleeders: 5,
+  bleederBoreMm: 3.175,
+});
 
 const HOLD_RANGES: InputRanges<HoldPiece> = {
   minutes: range('Process time', 'min', 0.1, 600),

@@ -7,7 +7,7 @@ import { fail, ok, problem, type Result } from '../result';
 import { liquidEnthalpy } from '../steam/fluid';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type SteamSupply } from './duty';
-import { checkInputs, range, type InputRanges } from './inputs';
+import { checkInputs, plantDefaults, range, type InputRanges } from './inputs';
 import { openWorking } from './working';
 
 export interface WaterHeatingInput {
@@ -25,6 +25,13 @@ export const WATER_HEATING_RANGES: InputRanges<WaterHeatingInput> = {
   toC: range('Water temperature after', '°C', 1, 99),
   minutes: range('Heating time', 'min', 0.1, 1440),
 };
+
+export const WATER_HEATING_DEFAULTS = plantDefaults<WaterHeatingInput>({
+  kind: 'wash',
+  fromC: 15,
+  toC: 82,
+  minutes: 10,
+});
 
 /** Mean over 10 to 90 degC at atmospheric pressure, in round figures. */
 const WATER_KJ_PER_KG_K = 4.187;

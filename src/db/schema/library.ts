@@ -1,4 +1,5 @@
 import { doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
+import type { DutyModel } from '../../core/duty/model';
 import type { LimitUse, Phase, Stage } from '../../core/plant/activity';
 import type { UnitKind } from '../../core/plant/plant';
 import { createdAt, id, instant } from './columns';
@@ -89,9 +90,7 @@ export const duties = pgTable(
     id: id(),
     plantId: plantId(),
     name: text('name').notNull(),
-    model: text('model')
-      .$type<'steamBlancher' | 'jacketedKettle' | 'stillRetort' | 'waterHeating' | 'typed'>()
-      .notNull(),
+    model: text('model').$type<DutyModel['model']>().notNull(),
     inputs: jsonb('inputs').$type<Record<string, unknown>>().notNull(),
     createdAt: createdAt(),
   },
