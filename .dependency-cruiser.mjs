@@ -75,8 +75,15 @@ export default {
       name: 'islands-without-node',
       comment: 'Islands run in a browser.',
       severity: 'error',
-      from: { path: '^src/(components|contracts|solver)/.*\\.tsx?$' },
+      from: { path: '^src/(components|contracts)/.*\\.tsx?$' },
       to: { dependencyTypes: ['core'] },
+    },
+    {
+      name: 'islands-without-threads',
+      comment: 'The solver runs on a thread of the levelling worker, which Node has and a browser has not.',
+      severity: 'error',
+      from: { path: '^src/(components|contracts)/' },
+      to: { path: '^src/solver/(levellingClient|.*\\.thread)' },
     },
     {
       name: 'server-knows-no-screens',

@@ -9,11 +9,11 @@ interface Check {
 }
 
 const CHECKS: readonly Check[] = [
-  { what: 'format', tool: 'prettier', args: ['--check', '--log-level', 'warn', '.'] },
   { what: 'types of pages', tool: 'astro', args: ['check', '--minimumFailingSeverity', 'error'] },
+  { what: 'lint', tool: 'eslint', args: ['--config', 'scripts/eslint.config.mjs', '--max-warnings', '0', '.'] },
   { what: 'types', tool: 'tsc', args: ['--noEmit', '-p', 'tsconfig.json'] },
   { what: 'core needs neither browser nor Node', tool: 'tsc', args: ['--noEmit', '-p', 'src/core'] },
-  { what: 'lint', tool: 'eslint', args: ['--config', 'scripts/eslint.config.mjs', '--max-warnings', '0', '.'] },
+  { what: 'format', tool: 'prettier', args: ['--check', '--log-level', 'warn', '.'] },
   {
     what: 'dependency boundaries',
     tool: 'depcruise',
@@ -31,14 +31,23 @@ async function passes({ what, tool, args }: Check): Promise<boolean> {
   return code === 0;
 }
 
+/** Two at a time: most checks keep one core busy. */
+async function failedOf(checks: readonly Check[]): Promise<string[]> {
+  const waiting = [...checks];
+  const failed: string[] = [];
+  const lane = async (): Promise<void> => {
+    for (let check = waiting.shift(); check; check = waiting.shift()) {
+      if (!(await passes(check))) failed.push(check.what);
+    }
+  };
+  await Promise.all([lane(), lane()]);
+  return failed;
+}
+
 await runCommand(async () => {
   // Names given on the command line choose among the checks: npm run check -- lint types
   const chosen = process.argv.slice(2);
-  const failed: string[] = [];
-  for (const check of CHECKS) {
-    if (chosen.length > 0 && !chosen.includes(check.what)) continue;
-    if (!(await passes(check))) failed.push(check.what);
-  }
+  const failed = await failedOf(CHECKS.filter(({ what }) => chosen.length === 0 || chosen.includes(what)));
   if (failed.length > 0) say(`Failed: ${failed.join(', ')}`);
   return failed.length > 0 ? 1 : 0;
 });

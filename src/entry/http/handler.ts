@@ -8,8 +8,11 @@ import { type OpenAnswers, mayCompress } from './streams';
 
 type Next = (error?: unknown) => void;
 
-/** The pages' handler, as the Astro adapter builds it in middleware mode. */
-export type PagesHandler = (req: IncomingMessage, res: ServerResponse, next: Next) => Promise<void> | void;
+/**
+ * The pages' handler, as the Astro adapter builds it in middleware mode. It would call a third argument instead of
+ * showing the application's own page for an unknown address, so it gets none.
+ */
+export type PagesHandler = (req: IncomingMessage, res: ServerResponse) => Promise<void> | void;
 
 export interface HandlerOptions {
   readonly pages: PagesHandler;
@@ -48,7 +51,7 @@ async function renderPage(pages: PagesHandler, req: IncomingMessage, res: Server
       // The adapter takes a body that was read already from here.
       Object.assign(req, { body: singleChunk(body) });
     }
-    await pages(req, res, (error) => failed(res, error));
+    await pages(req, res);
   } catch (error) {
     failed(res, error);
   }
