@@ -59,7 +59,7 @@ const kettles: fc.Arbitrary<JacketedKettleInput> = fc.record({
   jacketAreaM2: between(0.3, 6),
   heatingLossKW: between(0, 10),
   boilOffKg: between(0, 19),
-  holdMin: between(0, 120),
+  holdMin: fc.oneof(fc.constant(0), between(0.01, 120)),
   holdLossKW: between(0, 10),
 });
 

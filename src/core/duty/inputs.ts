@@ -1,5 +1,5 @@
 /** Checking what a duty is asked for, and gathering what it needs. */
-import { checkRange, type Range } from '../quantity/range';
+import { checkRange, shortNumber, type Range } from '../quantity/range';
 import { fail, ok, problem, type Problem, type Result } from '../result';
 
 /** Range of each numeric field of an input; forms read it too. */
@@ -12,11 +12,24 @@ export const range = (name: string, unit: string, min: number, max: number): Ran
 
 export const DUTY_RANGE = 'DUTY-RANGE';
 
-/** @returns the first field out of range as DUTY-RANGE, naming field, value and range; undefined when all are inside. */
+/** A shorter spell is a slip; 0 leaves a phase out. */
+const LEAST_LENGTH_MIN = 0.01;
+
+function checkLength(itsRange: Range, value: number, field: string): Problem | undefined {
+  if (itsRange.unit !== 'min' || value === 0 || value >= LEAST_LENGTH_MIN) return undefined;
+  const span = `0 or ${LEAST_LENGTH_MIN} to ${shortNumber(itsRange.max)} min`;
+  return problem(DUTY_RANGE, `${itsRange.name} is ${shortNumber(value)} min; it must be ${span}.`, field);
+}
+
+/**
+ * A length of time [min] is 0, where its range holds 0, or at least 0.01.
+ * @returns the first field out of range as DUTY-RANGE, naming field, value and range; undefined when all are inside.
+ */
 export function checkInputs<Input extends object>(input: Input, ranges: InputRanges<Input>): Problem | undefined {
   const values = input as Readonly<Record<string, unknown>>;
   for (const [field, itsRange] of Object.entries<Range>(ranges)) {
-    const bad = checkRange(DUTY_RANGE, itsRange, Number(values[field] ?? Number.NaN), field);
+    const value = Number(values[field] ?? Number.NaN);
+    const bad = checkRange(DUTY_RANGE, itsRange, value, field) ?? checkLength(itsRange, value, field);
     if (bad) return bad;
   }
   return undefined;
