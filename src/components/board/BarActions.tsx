@@ -16,7 +16,7 @@ export function BarActions({ model, onSlip, onIssue }: Props) {
     <>
       {mayPlan ? (
         <>
-          <Button size="small" onClick={onSlip} disabled={!mayEdit}>
+          <Button size="small" className="max-sm:hidden" onClick={onSlip} disabled={!mayEdit}>
             Slip a line…
           </Button>
           <Button size="small" look="main" onClick={() => levelling.setOpen(true)} disabled={levelling.open}>

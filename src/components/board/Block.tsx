@@ -78,7 +78,7 @@ const Inside = memo(function Inside({ drawn, breaches, events, ...inside }: Omit
       ))}
       {width > NARROW_PX * 1.5 ? <Words {...{ activity, mode, peak, pxPerMin }} /> : null}
       {width > NARROW_PX ? <FixingMark fixing={activity.fixing} /> : null}
-      {(events ?? []).map((event) => (
+      {(width > NARROW_PX ? (events ?? []) : []).map((event) => (
         <svg
           key={event.id}
           className="batch-event"
@@ -101,6 +101,7 @@ function BreachMark({ breach, drawn, pxPerMin }: { breach: Breach; drawn: Drawn;
   return (
     <span
       className="batch-breach"
+      data-narrow={drawn.minutes * pxPerMin < NARROW_PX * 1.5}
       style={{ left: (from - drawn.start) * pxPerMin, width: (to - from) * pxPerMin }}
       aria-hidden="true"
     />

@@ -41,7 +41,7 @@ export function BoardBar({ week, clock, issue, agreedBy, changedSince, zoom, onZ
           </a>
         )}
       </nav>
-      <div className="min-w-0">
+      <div className="min-w-0 flex-1 basis-40">
         <h1 className="truncate text-base leading-5 font-semibold">
           {week.title} <span className="font-normal text-ink-muted max-md:hidden">{week.span}</span>
         </h1>
@@ -53,7 +53,6 @@ export function BoardBar({ week, clock, issue, agreedBy, changedSince, zoom, onZ
           {agreedBy ? ` · steam agreed to by ${agreedBy}` : ''}
         </p>
       </div>
-      <div className="flex-1" />
       <fieldset className="flex overflow-clip rounded-md border border-edge">
         <legend className="sr-only">Shown at once</legend>
         {ZOOMS.map(({ zoom: value, label }) => (

@@ -100,7 +100,7 @@ function stateText(header: Header): string {
 }
 
 function StripTitle({ header, open, onToggle }: Pick<Props, 'header' | 'open' | 'onToggle'>) {
-  if (!onToggle) return <h2 className="truncate text-sm font-semibold">{header.name}</h2>;
+  if (!onToggle) return <h2 className="line-clamp-2 text-sm leading-5 font-semibold max-sm:text-xs">{header.name}</h2>;
   return (
     <h2 className="text-xs font-semibold">
       <button

@@ -9,6 +9,7 @@ import { kgText, spanText } from '../time';
 import { standingOf, type Standing } from './standing';
 import type { BoardModel } from './useBoard';
 import { useIssue } from './useIssue';
+import { weekWords } from './weekWords';
 
 interface Props {
   readonly model: BoardModel;
@@ -25,6 +26,7 @@ export function IssueDialog({ model, onClose, onGo }: Props) {
     tell({ look: 'good', title: `Issue ${issue.number} is on the floor.`, lines: ['The shift sheets show it now.'] });
     onClose();
   });
+  const name = weekWords(dto).title.toLowerCase();
   const words = comment.trim();
   const waits = saves.pending.length > 0;
   const canAgree = mayAgree && standing.process.length === 0 && standing.steam.length > 0 && !standing.agreed;
@@ -37,7 +39,9 @@ export function IssueDialog({ model, onClose, onGo }: Props) {
     <Dialog
       open
       wide
-      title={`Put week ${dto.weekStart} on the floor as issue ${(dto.issue?.number ?? 0) + 1}`}
+      title={
+        mayPlan ? `Put ${name} on the floor as issue ${(dto.issue?.number ?? 0) + 1}` : `Agree to the steam of ${name}`
+      }
       onClose={onClose}
       actions={
         <>
@@ -134,7 +138,7 @@ function SteamPart({ standing, model, onGo }: PartProps) {
 function whoAgrees(model: BoardModel, standing: Standing): ReactNode {
   if (standing.process.length > 0) return 'A utilities lead can agree to steam once the process limits are kept.';
   if (model.mayAgree) return 'You can agree to this plan as it is. A later change of the plan needs a new agreement.';
-  return 'A utilities lead has to agree to this plan as it is, or level it under the limit.';
+  return 'Level it under the limit, or ask a utilities lead to agree to it as it is.';
 }
 
 const FEW = 5;

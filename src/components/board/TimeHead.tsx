@@ -41,7 +41,7 @@ export const TimeHead = memo(function TimeHead({ ticks, shifts, scale, clock, no
             className="absolute top-[22px] h-[18px] border-l border-rule pl-1.5 text-2xs leading-[18px] text-ink-muted"
             style={{ left: xOf(scale, hour.minute) }}
           >
-            {hour.label}
+            {Math.abs(xOf(scale, hour.minute - nowMin) + 16) < 40 ? '' : hour.label}
           </span>
         ))}
         {shifts.map((shift) => (
@@ -49,7 +49,7 @@ export const TimeHead = memo(function TimeHead({ ticks, shifts, scale, clock, no
         ))}
         {nowMin >= 0 && nowMin < scale.horizonMin ? (
           <span
-            className="absolute top-1 z-[1] -translate-x-1/2 rounded-sm bg-ink px-1.5 text-2xs leading-4 font-medium text-paper"
+            className="absolute top-[23px] z-[1] -translate-x-1/2 rounded-sm bg-ink px-1.5 text-2xs leading-4 font-medium text-paper"
             style={{ left: xOf(scale, nowMin) }}
           >
             {clock.time(nowMin)}
@@ -67,7 +67,7 @@ function ShiftName({ shift, scale }: { readonly shift: ShiftSpan; readonly scale
       className="absolute bottom-0 h-[17px] overflow-clip border-l border-edge bg-sunken"
       style={{ left: xOf(scale, shift.from), width: Math.max(1, width - 1) }}
     >
-      {width > 34 ? (
+      {width > 66 ? (
         <span className="sticky left-(--label-w) inline-block max-w-full truncate px-1.5 text-2xs leading-[17px] text-ink-muted">
           {shift.name}
         </span>

@@ -23,7 +23,7 @@ export function standingOf(
   const isPast = (breach: Breach): boolean =>
     breach.code === 'unreleasedData' && breach.activityIds.every((id) => done.has(id));
   const process = breaches.filter((breach) => breach.class === 'process' && !isPast(breach));
-  const steam = breaches.filter((breach) => breach.class === 'steam');
+  const steam = breaches.filter((breach) => breach.class === 'steam').sort((a, b) => b.kg - a.kg);
   const agreed = agreement !== null && agreement.revision === planRevision;
   return { process, steam, agreed, mayGo: process.length === 0 && (steam.length === 0 || agreed) };
 }
