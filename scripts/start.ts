@@ -67,8 +67,11 @@ await runCommand(async () => {
   if (process.env['DATABASE_URL'])
     say('DATABASE_URL is set, but npm start keeps a database of its own; leaving it alone');
   await takeTheOnlyStart();
+  // Neither needs the other, and the first start has to install and build much.
+  const building = buildInto(startDist);
+  building.catch(() => undefined);
   const databaseUrl = await openDatabase();
-  await buildInto(startDist);
+  await building;
   const address = await serve(databaseUrl);
   const people = await demoPeople(databaseUrl);
   say('Ready');
