@@ -90,14 +90,14 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
         <section aria-label="The week">
           <div className="mb-2 flex flex-wrap items-center justify-between gap-2">
             <Legend />
-            <div className="flex gap-0.5" role="group" aria-label="What is shown">
+            <div className="-ml-2 flex flex-wrap gap-0.5" role="group" aria-label="What is shown">
               {[{ date: null, text: 'Week' }, ...days.map((d) => ({ date: d.date, text: d.label.slice(0, 3) }))].map(
                 ({ date, text }) => (
                   <Button
                     key={text}
                     size="small"
                     look={date === dayDate ? 'plain' : 'quiet'}
-                    className="px-2"
+                    className="min-w-10 px-1.5"
                     aria-pressed={date === dayDate}
                     onClick={() => setDayDate(date)}
                   >

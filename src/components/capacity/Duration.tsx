@@ -1,6 +1,7 @@
 import { lazy, Suspense, useMemo, useState } from 'react';
 import { NOT_JUDGED_KG_PER_H } from '@/core/header/capacity';
 import { Button } from '../ui/Button';
+import { Fallible } from '../ui/Fallible';
 import { useWidth } from '../ui/useWidth';
 import { rateText } from '../time';
 import { durationCurve, hoursAbove } from './durationCurve';
@@ -45,9 +46,11 @@ export function Duration({ loadKgPerH, limitKgPerH }: Props) {
         style={{ height: HEIGHT }}
       >
         {asked ? (
-          <Suspense fallback={<p className="text-sm text-ink-muted">Drawing the curve…</p>}>
-            <DurationChart points={points} width={width} height={HEIGHT - 2} limitKgPerH={limit} />
-          </Suspense>
+          <Fallible instead={<p className="text-sm">The curve could not be loaded. Reload the page to try again.</p>}>
+            <Suspense fallback={<p className="text-sm text-ink-muted">Drawing the curve…</p>}>
+              <DurationChart points={points} width={width} height={HEIGHT - 2} limitKgPerH={limit} />
+            </Suspense>
+          </Fallible>
         ) : (
           <Button onClick={() => setAsked(true)}>Draw the load-duration curve</Button>
         )}

@@ -92,8 +92,8 @@ export function SpanForm(props: Props) {
       <Notice look={props.isWorse ? 'over' : 'good'} className="mb-4 min-h-11">
         {props.outcome}
       </Notice>
-      <div className="flex gap-2">
-        <Button type="submit" look="main" busy={props.busy} disabled={isBackwards} className="flex-1 whitespace-normal">
+      <div className="grid gap-2">
+        <Button type="submit" look="main" busy={props.busy} disabled={isBackwards}>
           {actionText(draft, name)}
         </Button>
         <Button onClick={props.onCancel}>Leave it</Button>

@@ -4,7 +4,7 @@ export type ButtonLook = 'main' | 'plain' | 'quiet' | 'over';
 export type ButtonSize = 'small' | 'usual' | 'floor';
 
 const BASE =
-  'inline-flex items-center justify-center gap-2 rounded-md border font-medium whitespace-nowrap select-none ' +
+  'inline-flex items-center justify-center gap-2 rounded-md border font-medium select-none ' +
   'transition-colors disabled:cursor-not-allowed disabled:opacity-55 aria-busy:cursor-progress';
 
 const LOOKS: Readonly<Record<ButtonLook, string>> = {
@@ -15,9 +15,9 @@ const LOOKS: Readonly<Record<ButtonLook, string>> = {
 };
 
 const SIZES: Readonly<Record<ButtonSize, string>> = {
-  small: 'min-h-7 px-2.5 text-sm',
-  usual: 'min-h-9 px-3.5 text-base',
-  floor: 'min-h-16 w-full px-5 text-xl font-semibold whitespace-normal',
+  small: 'min-h-7 px-2.5 text-sm whitespace-nowrap',
+  usual: 'min-h-9 px-3.5 text-base whitespace-nowrap',
+  floor: 'min-h-16 w-full px-5 text-xl font-semibold',
 };
 
 /** The classes of a button, for a link that looks like one. */
