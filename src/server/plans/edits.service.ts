@@ -42,6 +42,18 @@ export async function saveEdit(
   });
 }
 
+/** The rows of the activities to change, locked; or why the plan as it is can't take the changes. */
+export async function checkChanges(
+  tx: Db,
+  locked: LockedPlan,
+  kind: EditKind,
+  wanted: readonly Wanted[],
+): Promise<Result<ActivityRow[], HttpProblem>> {
+  const rows = await lockActivities(tx, locked.plan, idsOf(wanted));
+  const refused = await refusal(tx, locked, kind, wanted, rows);
+  return refused ? fail(refused) : ok(rows);
+}
+
 /** Checks changes against the locked plan as it is and writes them; the caller has checked the units. */
 export async function applyChanges(
   tx: Db,
@@ -50,11 +62,9 @@ export async function applyChanges(
   kind: EditKind,
   wanted: readonly Wanted[],
 ): Promise<Result<EditResponse, HttpProblem>> {
-  const ids = wanted.map(({ activityId }) => activityId);
-  const rows = await lockActivities(tx, plan, ids);
-  const refused = await refusal(tx, { plan, time }, kind, wanted, rows);
-  if (refused) return fail(refused);
-  const byId = new Map(rows.map((row) => [row.id, row]));
+  const checked = await checkChanges(tx, { plan, time }, kind, wanted);
+  if (!checked.ok) return checked;
+  const byId = new Map(checked.value.map((row) => [row.id, row]));
   const edit = editOf(
     kind,
     wanted.map((change) => changeOfRow(change, byId.get(change.activityId) as ActivityRow, time)),
@@ -68,11 +78,11 @@ export async function applyChanges(
     await notify(tx, plan.plantId, { kind: 'plan', planId: plan.id, revision });
     await record(tx, actor, `plan.${kind}`, plan.id, { revision, activities: edit.changes.length });
   }
-  return ok({
-    planRevision: revision,
-    activities: await activityStates(tx, await lockActivities(tx, plan, ids), time),
-  });
+  const rows = await lockActivities(tx, plan, idsOf(wanted));
+  return ok({ planRevision: revision, activities: await activityStates(tx, rows, time) });
 }
+
+const idsOf = (wanted: readonly Wanted[]): string[] => wanted.map(({ activityId }) => activityId);
 
 async function refusal(
   tx: Db,

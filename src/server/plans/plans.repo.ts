@@ -47,6 +47,7 @@ export async function activityRows(tx: Db, plan: PlanRow): Promise<ActivityRow[]
 
 /** Some activities of a plan, locked in the order of their ids so that two edits never wait for each other. */
 export async function lockActivities(tx: Db, plan: PlanRow, ids: readonly string[]): Promise<ActivityRow[]> {
+  if (ids.length === 0) return [];
   return tx
     .select()
     .from(activities)

@@ -6,6 +6,7 @@ import { now } from '../clock';
 import type { HttpProblem } from '../http/problem';
 import { agreementInForce } from '../issues/agreementInForce';
 import { agreementById } from '../issues/issues.repo';
+import { reapLostRuns } from '../levelling/reaper';
 import { runDto } from '../levelling/runDto';
 import { namesOf } from '../people/people.repo';
 import { floorEventRows, latestIssueRow, liveRunRow, type ActivityRow } from '../plans/plans.repo';
@@ -24,6 +25,7 @@ export async function loadWeek(
   const found = await findWeek(actor, weekStart);
   if (!found.ok) return found;
   await planOf(db, found.value);
+  await reapLostRuns();
   const read = (tx: Db): Promise<WeekDto> => readWeek(tx, found.value);
   return ok(await db.transaction(read, { isolationLevel: 'repeatable read', accessMode: 'read only' }));
 }

@@ -1,0 +1,7 @@
+import { startLevelling } from '@/solver/levellingClient';
+import { runLevellingWorker } from './levellingWorker';
+
+// The thread's entry is built apart from this file, to the folder that it lies in.
+const thread = new URL('./thread.js', import.meta.url);
+
+await runLevellingWorker((job) => startLevelling(thread, job));
