@@ -6,7 +6,7 @@ import type { JacketedKettleInput } from '@/core/duty/jacketedKettleInput';
 import type { SteamBlancherInput } from '@/core/duty/steamBlancher';
 import type { StillRetortInput } from '@/core/duty/stillRetortInput';
 import { steamState } from '@/core/steam/steamState';
-import { valueOf } from './steamSupport';
+import { valueOf } from './outcome';
 
 /** 7 bar g, dryness 0.98. */
 export const supply: SteamSupply = {

@@ -4,6 +4,7 @@
  * Source: heat balances of boiler and open heater (MIL-HDBK-1003/6 for blowdown); enthalpies IAPWS R7-97(2012).
  */
 import { STANDARD_ATMOSPHERE, toAbsolute } from '../quantity/pressure';
+import { checkRange } from '../quantity/range';
 import { barGauge, celsius, type BarAbsolute } from '../quantity/units';
 import { fail, ok, problem, type Problem, type Result } from '../result';
 import { liquidEnthalpy, waterAt } from '../steam/fluid';
@@ -11,7 +12,7 @@ import type { FluidProperties } from '../steam/gibbs';
 import { saturationAtPressure, type Saturation } from '../steam/saturation';
 import { ENERGY_BALANCE, IF97 } from './balance';
 import { ESTIMATE_CAUTION, type SteamSupply } from './duty';
-import { allOf, checkInputs, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, DUTY_RANGE, range, type InputRanges } from './inputs';
 import { openWorking, type Working, type WorkingSheet } from './working';
 
 export interface BoilerHouseInputs {
@@ -26,6 +27,8 @@ export interface BoilerHouseInputs {
   readonly condensateReturnFraction: number;
   readonly condensateC: number;
   readonly makeUpC: number;
+  /** Dry steam that the feed tank vents, as a share of the feed; none unless given. */
+  readonly feedTankVentFraction?: number;
 }
 
 export interface BoilerExport {
@@ -79,6 +82,13 @@ function enthalpiesOf(house: BoilerHouseInputs, ambient: BarAbsolute): Result<En
     condensate: liquidEnthalpy(celsius(house.condensateC)),
     makeUp: liquidEnthalpy(celsius(house.makeUpC)),
   });
+}
+
+const VENTED = range('Feed tank vent', '', 0, 0.05);
+
+function checkVent({ feedTankVentFraction }: BoilerHouseInputs): Problem | undefined {
+  if (feedTankVentFraction === undefined) return undefined;
+  return checkRange(DUTY_RANGE, VENTED, feedTankVentFraction, 'feedTankVentFraction');
 }
 
 function checkPressures({ boilerPressureBarG, feedTankPressureBarG }: BoilerHouseInputs): Problem | undefined {
@@ -143,8 +153,9 @@ function mixEnthalpy(sheet: WorkingSheet, house: BoilerHouseInputs, at: Enthalpi
   });
 }
 
-function feedTankSteam(sheet: WorkingSheet, feedKgPerH: number, mixH: number, tankH: number, steamH: number): number {
-  return sheet.step({
+function feedTankSteam(sheet: WorkingSheet, house: BoilerHouseInputs, feedKgPerH: number, mixH: number, at: Tank) {
+  const { feedTankVentFraction: vented = 0 } = house;
+  const heating = sheet.step({
     symbol: 'ṁ_ft',
     name: 'Steam for the feed tank (none when the mix is hot enough)',
     formula: 'ṁ_f · max(0, h_ft − h_mix) / (h − h_mix)',
@@ -152,12 +163,35 @@ function feedTankSteam(sheet: WorkingSheet, feedKgPerH: number, mixH: number, ta
     source: 'Balance of an open heater',
     inputs: {
       ṁ_f: [feedKgPerH, 'kg/h'],
-      h_ft: [tankH, 'kJ/kg'],
+      h_ft: [at.tank.hf, 'kJ/kg'],
       h_mix: [mixH, 'kJ/kg'],
-      h: [steamH, 'kJ/kg'],
+      h: [at.steamH, 'kJ/kg'],
     },
     value: ({ ṁ_f, h_ft, h_mix, h }) => (ṁ_f * Math.max(0, h_ft - h_mix)) / (h - h_mix),
   });
+  if (vented === 0) return heating;
+  return sheet.step({
+    symbol: 'ṁ_ft',
+    name: 'Steam for the feed tank, its vent included',
+    formula: 'ṁ_h + v · ṁ_f · (h_g − h_mix) / (h − h_mix)',
+    unit: 'kg/h',
+    source: 'Balance of an open heater that vents dry steam',
+    inputs: {
+      ṁ_h: [heating, 'kg/h'],
+      v: [vented, ''],
+      ṁ_f: [feedKgPerH, 'kg/h'],
+      h_g: [at.tank.hg, 'kJ/kg'],
+      h_mix: [mixH, 'kJ/kg'],
+      h: [at.steamH, 'kJ/kg'],
+    },
+    value: ({ ṁ_h, v, ṁ_f, h_g, h_mix, h }) => ṁ_h + (v * ṁ_f * (h_g - h_mix)) / (h - h_mix),
+  });
+}
+
+/** The feed tank's water and steam, and the enthalpy of the steam it is fed with [kJ/kg]. */
+interface Tank {
+  readonly tank: Saturation;
+  readonly steamH: number;
 }
 
 function heatToWater(sheet: WorkingSheet, grossKgPerH: number, feedKgPerH: number, at: Enthalpies): number {
@@ -184,7 +218,7 @@ function heatToWater(sheet: WorkingSheet, grossKgPerH: number, feedKgPerH: numbe
  * @returns DUTY-RANGE or DUTY-ORDER naming field, value and range; STEAM-RANGE.
  */
 export function boilerExport(house: BoilerHouseInputs, supply: SteamSupply): Result<BoilerExport> {
-  const bad = checkInputs(house, BOILER_HOUSE_RANGES) ?? checkPressures(house);
+  const bad = checkInputs(house, BOILER_HOUSE_RANGES) ?? checkVent(house) ?? checkPressures(house);
   if (bad) return fail(bad);
   const at = enthalpiesOf(house, supply.ambient);
   if (!at.ok) return at;
@@ -192,7 +226,8 @@ export function boilerExport(house: BoilerHouseInputs, supply: SteamSupply): Res
   const grossKgPerH = gross(sheet, house, at.value);
   const feedKgPerH = feed(sheet, house, grossKgPerH);
   const mixH = mixEnthalpy(sheet, house, at.value);
-  const feedTankSteamKgPerH = feedTankSteam(sheet, feedKgPerH, mixH, at.value.feedTank.hf, supply.header.h);
+  const tank = { tank: at.value.feedTank, steamH: supply.header.h };
+  const feedTankSteamKgPerH = feedTankSteam(sheet, house, feedKgPerH, mixH, tank);
   const heatToWaterKW = heatToWater(sheet, grossKgPerH, feedKgPerH, at.value);
   const netKgPerH = sheet.total('Net export', grossKgPerH - feedTankSteamKgPerH, 'kg/h');
   return ok({ grossKgPerH, feedKgPerH, feedTankSteamKgPerH, netKgPerH, heatToWaterKW, working: sheet.finish() });

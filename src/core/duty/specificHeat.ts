@@ -68,6 +68,12 @@ export function choiOkos(composition: FoodComposition, tC: number): number {
 /** cp [kJ/kgK] above freezing from the water fraction alone; low by up to 0.4 for dry foods. Unchecked. */
 export const siebel = (water: number): number => 0.837 + 3.349 * water;
 
+/** cp [kJ/kgK] above freezing from the solids, 1 - water: Chen (1985), from memory. A cross-check; unchecked. */
+export function chen(water: number): number {
+  const solids = 1 - water;
+  return 4.19 - 2.3 * solids - 0.628 * solids ** 3;
+}
+
 function fromComposition(composition: FoodComposition, tC: number): Result<SpecificHeat> {
   const sum = COMPONENTS.reduce((total, name) => total + composition[name], 0);
   const bad = checkInputs(composition, FRACTIONS) ?? checkRange(DUTY_RANGE, SUM, sum, 'composition');

@@ -1,12 +1,13 @@
 /** Water and steam with the region checked: the doors to IAPWS-IF97 regions 1 and 2. */
 import { toBar, toMegapascal, STANDARD_ATMOSPHERE } from '../quantity/pressure';
-import { checkRange, type Range } from '../quantity/range';
-import { barAbsolute, toKelvin, type BarAbsolute, type Celsius, type Kelvin } from '../quantity/units';
+import { checkRange, shortNumber, type Range } from '../quantity/range';
+import { barAbsolute, celsius, kelvin, toCelsius, toKelvin } from '../quantity/units';
+import type { BarAbsolute, Celsius, Kelvin } from '../quantity/units';
 import { fail, ok, type Result } from '../result';
 import type { FluidProperties } from './gibbs';
 import { region1 } from './region1';
 import { boundary23, region2 } from './region2';
-import { saturationPressure } from './region4';
+import { saturationPressure, saturationTemperature } from './region4';
 
 export const STEAM_RANGE = 'STEAM-RANGE';
 
@@ -55,4 +56,48 @@ export function liquidEnthalpy(t: Celsius): Result<number> {
   if (bad) return fail(bad);
   const p = barAbsolute(Math.max(STANDARD_ATMOSPHERE, toBar(saturationPressure(toKelvin(t)))));
   return ok(region1(toMegapascal(p), toKelvin(t)).h);
+}
+
+/**
+ * Temperature of liquid water from pressure and enthalpy [kJ/kg], to a nanokelvin: Newton on region 1, not the release's
+ * backward equation (off by up to 25 mK).
+ * @returns STEAM-RANGE when the pressure is out of range, or the enthalpy is not that of liquid water at it.
+ */
+export function waterTemperature(p: BarAbsolute, h: number): Result<Celsius> {
+  const pressure = { name: 'Water pressure', unit: 'bar a', min: 0.00611213, max: 1000 };
+  const badP = checkRange(STEAM_RANGE, pressure, p, 'pressure');
+  if (badP) return fail(badP);
+  const mpa = toMegapascal(p);
+  const hottestK = mpa < 16.529 ? saturationTemperature(mpa) : kelvin(623.15);
+  const coldestK = kelvin(273.15);
+  const min = region1(mpa, coldestK).h;
+  const max = region1(mpa, hottestK).h;
+  const range = { name: `Water enthalpy at ${shortNumber(p)} bar a`, unit: 'kJ/kg', min, max };
+  const badH = checkRange(STEAM_RANGE, range, h, 'h');
+  if (badH) return fail(badH);
+  let t = kelvin(coldestK + ((h - min) / (max - min)) * (hottestK - coldestK));
+  for (let step = 0; step < 50; step += 1) {
+    const at = region1(mpa, t);
+    const change = (h - at.h) / at.cp;
+    t = kelvin(Math.min(Math.max(t + change, coldestK), hottestK));
+    if (Math.abs(change) < 1e-9) return ok(toCelsius(t));
+  }
+  throw new Error(`no temperature found for ${p} bar a, ${h} kJ/kg`);
+}
+
+/**
+ * Temperature of dry or superheated steam from pressure and enthalpy [kJ/kg], to a nanokelvin: Newton on region 2.
+ * @returns STEAM-RANGE when there is no steam of that enthalpy at that pressure between saturation and 800 degC.
+ */
+export function steamTemperature(p: BarAbsolute, h: number): Result<Celsius> {
+  const mpa = toMegapascal(p);
+  let t = toKelvin(celsius(STEAM_TEMPERATURE.max));
+  for (let step = 0; step < 100; step += 1) {
+    const at = region2(mpa, t);
+    const change = (h - at.h) / at.cp;
+    if (Math.abs(change) < 1e-9) break;
+    t = kelvin(Math.max(t + change, 273.15));
+  }
+  const found = steamAt(p, toCelsius(t));
+  return found.ok ? ok(toCelsius(t)) : found;
 }
