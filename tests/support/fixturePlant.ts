@@ -3,9 +3,7 @@ import type { WeekDto } from '@/contracts/week';
 import type { Activity, Mode, Phase } from '@/core/plant/activity';
 import { closeDb, db } from '@/db/client';
 import * as t from '@/db/schema/index';
-import type { Actor } from '@/server/auth/actor';
 import { lucia } from '@/server/auth/lucia';
-import { authorize, type Authorized, type Permission } from '@/server/auth/permissions';
 import { instantOf, weekTimeOf } from '@/server/weeks/weekTime';
 import { createTestDatabase } from './database';
 
@@ -202,16 +200,6 @@ export async function openPlant(): Promise<() => Promise<void>> {
 export async function sessionOf(person: Person): Promise<string> {
   const plantId = Object.keys(PEOPLE[person]?.plants ?? {})[0] ?? null;
   return (await lucia.createSession(person, { plantId })).id;
-}
-
-/** A person as a service takes them; throws where the role lacks the permission. */
-export function actorFor<P extends Permission>(person: Person, permission: P): Authorized<P> {
-  const { name, plants } = PEOPLE[person] ?? { name: person, plants: {} };
-  const [plantId = '', roles = []] = Object.entries(plants)[0] ?? [];
-  const actor: Actor = { personId: person, name, plantId, plantName: `${plantId} works`, isDemo: false, roles };
-  const authorized = authorize(actor, permission);
-  if (!authorized.ok) throw new Error(authorized.error.message);
-  return authorized.value;
 }
 
 /** An activity of a loaded week. */

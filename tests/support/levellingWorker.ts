@@ -3,6 +3,7 @@ import { fileURLToPath } from 'node:url';
 import { createInterface } from 'node:readline';
 
 const root = fileURLToPath(new URL('../..', import.meta.url));
+const entry = fileURLToPath(new URL('./sourceWorker.ts', import.meta.url));
 
 /** A levelling worker in a process of its own, from the sources. */
 export interface WorkerProcess {
@@ -15,7 +16,7 @@ export interface WorkerProcess {
 
 /** Starts a worker on the database of DATABASE_URL and waits until it is ready. */
 export async function startWorker(env: Record<string, string> = {}): Promise<WorkerProcess> {
-  const child = spawn(process.execPath, ['--import', 'tsx', 'tests/support/sourceWorker.ts'], {
+  const child = spawn(process.execPath, ['--import', 'tsx', entry], {
     cwd: root,
     env: { ...process.env, ...env },
     stdio: ['ignore', 'pipe', 'pipe'],

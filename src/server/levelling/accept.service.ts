@@ -1,5 +1,4 @@
-import type { z } from 'zod';
-import type { acceptRequestSchema } from '@/contracts/levelling';
+import type { AcceptRequest } from '@/contracts/levelling';
 import type { EditResponse } from '@/contracts/week';
 import type { LevellingProposal, ProposedMove } from '@/core/levelling/proposal';
 import { fail, ok, type Result } from '@/core/result';
@@ -22,7 +21,6 @@ import { tryMoves } from './checkProposal';
 import { findRun, moveRun } from './runs.repo';
 import { unknownRun, wrongState } from './runs.service';
 
-type AcceptRequest = z.infer<typeof acceptRequestSchema>;
 type Planner = Authorized<'plan.level'>;
 
 /** Takes a proposal, whole or in part, if the plan as it is by now can still take it. */

@@ -4,7 +4,7 @@ import type { LevellingProgress, LevellingResult } from '@/core/levelling/levelW
 import type { LevellingOptions } from '@/core/levelling/options';
 import type { Week } from '@/core/schedule/week';
 import { db, type Db } from '@/db/client';
-import { startLevelling, type RunningLevelling } from '@/solver/levellingClient';
+import type { RunningLevelling, startLevelling } from '@/solver/levellingClient';
 import { now } from '../clock';
 import { notify } from '../events/notify';
 import { findWeek, planOf } from '../weeks/findWeek';
