@@ -73,9 +73,10 @@ const Inside = memo(function Inside({ drawn, breaches, events, ...inside }: Omit
   return (
     <>
       <Outline mode={mode} peak={peak} />
-      {(breaches ?? []).map((breach) => (
-        <BreachMark key={breach.id} breach={breach} drawn={drawn} pxPerMin={pxPerMin} />
-      ))}
+      {(breaches ?? []).map((breach) =>
+        breach.class === 'steam' ? <SteamBreachMark key={breach.id} {...{ breach, drawn, pxPerMin }} /> : null,
+      )}
+      <EdgeMark breaches={breaches ?? []} />
       {width > NARROW_PX * 1.5 ? <Words {...{ activity, mode, peak, pxPerMin }} /> : null}
       {width > NARROW_PX ? <FixingMark fixing={activity.fixing} /> : null}
       {(width > NARROW_PX ? (events ?? []) : []).map((event) => (
@@ -95,7 +96,16 @@ const Inside = memo(function Inside({ drawn, breaches, events, ...inside }: Omit
   );
 });
 
-function BreachMark({ breach, drawn, pxPerMin }: { breach: Breach; drawn: Drawn; pxPerMin: number }) {
+/** What is not a matter of a few minutes is marked at the block's edge; a process limit all around it. */
+function EdgeMark({ breaches }: { readonly breaches: readonly Breach[] }) {
+  const others = breaches.filter((breach) => breach.class !== 'steam');
+  if (others.length === 0) return null;
+  const process = others.some((breach) => breach.class === 'process');
+  return <span className="batch-edge" data-process={process} aria-hidden="true" />;
+}
+
+/** Minutes in which too much steam is asked for, hatched where they fall within the block. */
+function SteamBreachMark({ breach, drawn, pxPerMin }: { breach: Breach; drawn: Drawn; pxPerMin: number }) {
   const from = Math.max(drawn.start, Math.min(breach.from, drawn.start + drawn.minutes - 1));
   const to = Math.max(from + 1, Math.min(breach.to, drawn.start + drawn.minutes));
   return (

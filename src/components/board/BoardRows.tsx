@@ -1,5 +1,6 @@
 import {
   useCallback,
+  useEffect,
   useMemo,
   useRef,
   useState,
@@ -18,7 +19,7 @@ import { Threads } from './Threads';
 import type { Tick } from './ticks';
 import { UnitRow, type RowShare } from './UnitRow';
 import { useThreads, type BoardModel } from './useBoard';
-import type { BoardActions } from './useBoardActions';
+import { focusBlock, type BoardActions } from './useBoardActions';
 
 interface Props {
   readonly model: BoardModel;
@@ -79,10 +80,17 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
     ],
   );
 
+  const keepsFocus = useRef(false);
+  // A block that goes to another unit is drawn anew, and the browser drops the focus with the old one.
+  useEffect(() => {
+    if (keepsFocus.current && selectedId !== null && document.activeElement === document.body) focusBlock(selectedId);
+  }, [model.byUnit, selectedId]);
+
   const onFocus = useCallback(
     (event: FocusEvent) => {
       const id = activityIdOf(event.target);
       if (id === null) return;
+      keepsFocus.current = true;
       setSelectedId(id);
       if (event.target.matches(':focus-visible')) hovered.set(id);
     },
@@ -109,7 +117,10 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
       style={{ height: rows.heightPx }}
       onKeyDown={onKeyDown}
       onFocus={onFocus}
-      onBlur={hide}
+      onBlur={(event) => {
+        if (event.relatedTarget !== null) keepsFocus.current = false;
+        hide();
+      }}
       onPointerOver={onOver}
       onPointerLeave={hide}
       onPointerDown={hide}
@@ -149,12 +160,14 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
         names={model.names}
       />
       <Pointed {...{ pointed, week, evaluation, scale, clock }} />
-      <HoverCard
-        {...{ hovered, rows, scale, clock, week }}
-        drawn={model.drawn}
-        breaches={model.breaches}
-        names={model.names}
-      />
+      {carriedId === null ? (
+        <HoverCard
+          {...{ hovered, rows, scale, clock, week }}
+          drawn={model.drawn}
+          breaches={model.breaches}
+          names={model.names}
+        />
+      ) : null}
     </div>
   );
 }

@@ -62,6 +62,12 @@ export function useBoardActions(model: BoardModel) {
     [latest, show],
   );
 
+  /** Selects an activity that is about to be drawn elsewhere. */
+  const selectAfter = (id: string): void => {
+    setSelectedId(id);
+    requestAnimationFrame(() => selectAndShow(id));
+  };
+
   const go = (direction: Direction): void => {
     const next = neighbourOf(model.byUnit, model.rows.unitIds, selectedId ?? '', direction);
     if (next !== null) selectAndShow(next);
@@ -95,8 +101,11 @@ export function useBoardActions(model: BoardModel) {
     const held = model.carry.store.get();
     if (!carry?.target || !held) return;
     const { target } = carry;
-    const verdict = verdictOf(carry.activity.id, target, held.fits, null, model.names, model.clock);
-    setSaid(`${before}${placeText(target, model.week.plant, model.clock)}, ${verdict.steam}.`);
+    const { unitId, start } = target;
+    const preview = model.evaluator.preview([{ activityId: carry.activity.id, placement: { unitId, start } }]);
+    const verdict = verdictOf(carry.activity.id, target, held.fits, preview, model.names, model.clock);
+    const words = [placeText(target, model.week.plant, model.clock), verdict.steam, ...verdict.others];
+    setSaid(`${before}${words.join(', ')}.`);
     model.view.reveal({ from: target.start, to: target.start + 60 }, model.rows.topOfUnit.get(target.unitId) ?? null);
   };
 
@@ -154,6 +163,8 @@ export function useBoardActions(model: BoardModel) {
   const stepHistory = (which: 'undo' | 'redo'): void => {
     if (!model.mayEdit) return;
     const edit = model.saves[which]();
+    const first = edit?.changes.find((change) => change.after.placement !== null);
+    if (first) selectAfter(first.activityId);
     setSaid(
       edit ? `${which === 'undo' ? 'Undone' : 'Made again'}: ${edit.changes.length} changed.` : `Nothing to ${which}.`,
     );
