@@ -2,17 +2,21 @@
 import { boilerHouseChecks } from './boilerHouse';
 import type { Check } from './check';
 import { dutyChecks } from './duties';
-import { flowChecks } from './flows';
+import { openingChecks } from './openings';
+import { ratingChecks } from './rating';
 import { releaseChecks } from './release';
 import { specificHeatChecks } from './specificHeat';
+import { storageChecks } from './storage';
 import { steamTableChecks } from './steamTables';
 import { workedBatchChecks } from './workedBatches';
 
 export const ALL_CHECKS: readonly Check[] = [
   ...releaseChecks,
   ...steamTableChecks,
-  ...flowChecks,
+  ...storageChecks,
+  ...openingChecks,
   ...specificHeatChecks,
+  ...ratingChecks,
   ...boilerHouseChecks,
   ...dutyChecks,
   ...workedBatchChecks,
