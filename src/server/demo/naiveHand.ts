@@ -57,7 +57,8 @@ export class NaiveHand {
     const ready = Math.max(netStart, ...parts.links.map((link) => earliestBy(link, a, placed)));
     const taken = [...placed.values()].filter((p) => p.stage === a.stage);
     const options = a.modes.map((mode) => this.earliestOn(a, mode, ready, taken)).filter((o) => o !== null);
-    const best = options.sort((x, y) => x.start - y.start)[0];
+    const idleSince = (unitId: string) => this.busy.get(unitId)?.until ?? 0;
+    const best = options.sort((x, y) => x.start - y.start || idleSince(x.unitId) - idleSince(y.unitId))[0];
     return best ? { ...a, placement: best } : null;
   }
 

@@ -112,7 +112,7 @@ const boilerHouse = {
   condensateC: 90,
   makeUpC: 15,
   turndown: 4,
-  greatestRiseFractionPerMin: 0.25,
+  greatestRiseFractionPerMin: 0.3,
   waterTonnes: 8,
 };
 
