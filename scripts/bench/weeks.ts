@@ -1,9 +1,9 @@
 import type { Activity, Link, Mode, Phase } from '@/core/plant/activity';
-import type { CleaningRule, PlantModel, Unit, UnitKind } from '@/core/plant/plant';
+import type { Unit, UnitKind } from '@/core/plant/plant';
 import type { Interval } from '@/core/time/interval';
-import type { Step } from '@/core/time/stepFunction';
 import type { Week } from '@/core/schedule/week';
 import { seededRandom, type Random } from '@/core/levelling/random';
+import { CLEANING, DAY, FAMILIES, limitOf, operators, plantOf } from './weekPlant';
 
 /** What a generated week is like. */
 export interface WeekShape {
@@ -19,31 +19,7 @@ export const WEEKS: Readonly<Record<string, WeekShape>> = {
   w500: { batches: 500, days: 7, dayAndNight: true },
 };
 
-const DAY = 1440;
-const FAMILIES = ['A', 'B', 'C', 'D'];
 const UNIT_KINDS: readonly UnitKind[] = ['blancher', 'blancher', ...kinds('kettle', 4), ...kinds('retort', 6)];
-
-/** Minutes of cleaning from one family (row) to another (column). Invented. */
-const CLEANING: Readonly<Record<string, readonly (readonly number[])[]>> = {
-  blancher: [
-    [0, 10, 20, 30],
-    [10, 0, 20, 30],
-    [15, 15, 0, 30],
-    [40, 40, 40, 0],
-  ],
-  kettle: [
-    [0, 15, 20, 40],
-    [15, 0, 20, 40],
-    [20, 20, 0, 40],
-    [45, 45, 45, 0],
-  ],
-  retort: [
-    [5, 5, 5, 10],
-    [5, 5, 5, 10],
-    [5, 5, 5, 10],
-    [10, 10, 10, 5],
-  ],
-};
 
 /** A week planned by a naive hand that looks at units and waits but not at steam or operators; invented. */
 export function generateWeek(shape: WeekShape, seed: number): Week {
@@ -63,7 +39,7 @@ export function generateWeek(shape: WeekShape, seed: number): Week {
   const base = Math.ceil(naivePeak / (1.6 + 0.3 * random()) / 50) * 50;
   return {
     horizonMin,
-    plant: plantOf(units, operators(shape)),
+    plant: plantOf(units, operators(shape.days)),
     calendars: units.map((u, i) => ({ unitId: u.id, open: open[i] as Interval[] })),
     capacities: [
       {
@@ -288,59 +264,6 @@ function earliestPlace(
     if (start < best.start) best = { unit: i, start };
   });
   return best;
-}
-
-function limitOf(base: number, days: number): Step[] {
-  const steps: Step[] = [{ from: 0, value: base }];
-  for (let day = 0; day <= days; day++) {
-    const noon = day * DAY + 720;
-    steps.push({ from: noon, value: Math.round(base * 0.8) }, { from: noon + 90, value: base });
-    if (day % 2 === 0) continue;
-    steps.push({ from: day * DAY + 1080, value: Math.round(base * 0.85) }, { from: day * DAY + 1320, value: base });
-  }
-  return steps;
-}
-
-function operators(shape: WeekShape): Step[] {
-  const steps: Step[] = [{ from: 0, value: 4 }];
-  for (let day = 0; day <= shape.days; day++) {
-    steps.push({ from: day * DAY + 1080, value: 3 }, { from: (day + 1) * DAY + 300, value: 4 });
-  }
-  return steps;
-}
-
-function plantOf(units: Unit[], operatorSteps: Step[]): PlantModel {
-  return {
-    id: 'bench',
-    name: 'Generated plant',
-    isDemo: true,
-    ambientBarA: 1.01325,
-    rules: { snapMinutes: 5, reserveFraction: 0, sagToleranceBar: 1 },
-    lines: [{ id: 'line', name: 'Line' }],
-    units,
-    ventGroups: [],
-    headers: [
-      { id: 'main', name: 'Main', pressureBarG: 7, dryness: 0.98, superheatK: null, feed: { kind: 'boilers' } },
-    ],
-    sharedLimits: [{ id: 'operators', name: 'Operators', unit: 'people', capacity: operatorSteps }],
-    cleaning: cleaningRules(),
-  };
-}
-
-function cleaningRules(): CleaningRule[] {
-  return Object.entries(CLEANING).flatMap(([kind, rows]) =>
-    rows.flatMap((row, from) =>
-      row.map((minutes, to): CleaningRule => ({
-        unitKind: kind as UnitKind,
-        fromFamilyId: FAMILIES[from] as string,
-        toFamilyId: FAMILIES[to] as string,
-        minutes,
-        kind: 'wash',
-        phases: [],
-        uses: [],
-      })),
-    ),
-  );
 }
 
 function peakOf(activities: readonly Activity[], horizonMin: number): number {

@@ -1,5 +1,15 @@
 import { toMinutes } from '../time/stepFunction';
-import type { Plan, Problem, ProblemActivity, ProblemLink, ProblemMode, ProblemResource, Use } from './problem';
+import type {
+  Plan,
+  Problem,
+  ProblemActivity,
+  ProblemCleaning,
+  ProblemLink,
+  ProblemMode,
+  ProblemResource,
+  ProblemUnit,
+  Use,
+} from './problem';
 
 /** A plan judged from the plain problem, without anything that the search keeps. */
 export interface Judgement {
@@ -77,17 +87,13 @@ export interface Changeover {
 
 /** Cleanings that the plan's sequences call for, each as soon as its unit is free. */
 export function changeovers(problem: Problem, plan: Plan): Changeover[] {
-  const rules = new Map(
-    problem.cleaning.flatMap((c) =>
-      c.unitIds.map((u) => [JSON.stringify([u, c.fromFamilyId, c.toFamilyId]), c] as const),
-    ),
-  );
+  const { cleaning } = lookupIn(problem);
   return sequences(problem, plan).flatMap(({ unitId, order }) =>
     order.slice(1).flatMap((before, k) => {
       const after = order[k] as number;
       const first = problem.activities[after] as ProblemActivity;
       const second = problem.activities[before] as ProblemActivity;
-      const rule = rules.get(JSON.stringify([unitId, first.familyId, second.familyId]));
+      const rule = cleaning.get(cleaningKey(unitId, first.familyId, second.familyId));
       if (!rule) return [];
       const from = freeAt(problem, plan, after) + first.cleanAfterMin;
       return [{ unitId, after, before, from, minutes: rule.minutes, uses: rule.uses }];
@@ -107,7 +113,7 @@ export function sequences(problem: Problem, plan: Plan): { unitId: string; order
 export function freeAt(problem: Problem, plan: Plan, index: number): number {
   const activity = problem.activities[index] as ProblemActivity;
   const end = endOf(activity, plan, index);
-  const link = problem.links.find((l) => l.id === activity.takenOffBy);
+  const link = activity.takenOffBy === null ? undefined : lookupIn(problem).links.get(activity.takenOffBy);
   return link ? Math.max(end, momentOf(problem, plan, link.to)) : end;
 }
 
@@ -118,16 +124,39 @@ export function momentOf(problem: Problem, plan: Plan, end: ProblemLink['from'])
   return (end.anchor === 'end' ? endOf(activity, plan, index) : start) + end.offsetMin;
 }
 
-const indices = new WeakMap<Problem, Map<string, number>>();
+/** What is looked up again and again in one problem. */
+interface Lookup {
+  readonly index: ReadonlyMap<string, number>;
+  readonly links: ReadonlyMap<string, ProblemLink>;
+  readonly units: ReadonlyMap<string, ProblemUnit>;
+  readonly cleaning: ReadonlyMap<string, ProblemCleaning>;
+}
+
+const lookups = new WeakMap<Problem, Lookup>();
+
+function lookupIn(problem: Problem): Lookup {
+  let lookup = lookups.get(problem);
+  if (!lookup) {
+    lookup = {
+      index: new Map(problem.activities.map((a, i) => [a.id, i])),
+      links: new Map(problem.links.map((l) => [l.id, l])),
+      units: new Map(problem.units.map((u) => [u.id, u])),
+      cleaning: new Map(
+        problem.cleaning.flatMap((c) =>
+          c.unitIds.map((u) => [cleaningKey(u, c.fromFamilyId, c.toFamilyId), c] as const),
+        ),
+      ),
+    };
+    lookups.set(problem, lookup);
+  }
+  return lookup;
+}
+
+const cleaningKey = (unitId: string, from: string | null, to: string | null): string => `${unitId}\n${from}\n${to}`;
 
 /** Positions of the activities by id. */
 export function indexById(problem: Problem): ReadonlyMap<string, number> {
-  let index = indices.get(problem);
-  if (!index) {
-    index = new Map(problem.activities.map((a, i) => [a.id, i]));
-    indices.set(problem, index);
-  }
-  return index;
+  return lookupIn(problem).index;
 }
 
 function endOf(activity: ProblemActivity, plan: Plan, index: number): number {
@@ -191,7 +220,7 @@ function brokenMinutes(problem: Problem, plan: Plan): number {
 }
 
 function outsideShift(problem: Problem, plan: Plan, i: number): number {
-  const unit = problem.units.find((u) => u.id === plan.units[i]);
+  const unit = lookupIn(problem).units.get(plan.units[i] as string);
   const start = plan.starts[i] as number;
   const end = freeAt(problem, plan, i);
   if (!unit) return 0;

@@ -287,7 +287,7 @@ function toGroups(
       const member = members[at]!;
       for (const other of neighbours(member.activity, links)) {
         const mate = activities[other]!;
-        if (groupOf[other] !== -1 || !mate.movable || mate.batchId !== activities[root]!.batchId) continue;
+        if (groupOf[other] !== -1 || !mate.movable || mate.batchId !== activities[root].batchId) continue;
         const joining = linksBetween(
           links,
           other,
@@ -299,7 +299,7 @@ function toGroups(
         members.push({ activity: other, parent: at, links: joining, children: [] });
       }
     }
-    groups.push({ batch: batches.get(activities[root]!.batchId) ?? 0, members });
+    groups.push({ batch: batches.get(activities[root].batchId) ?? 0, members });
   }
   return { groups, groupOf };
 }

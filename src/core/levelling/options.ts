@@ -11,8 +11,6 @@ export interface LevellingOptions {
   /** False: a start may only move later. */
   readonly mayMoveEarlier?: boolean;
   readonly prices?: Partial<ChangePrices>;
-  /** `plan`: least change that fits the limits. `peak` is reserved for the lowest peak. */
-  readonly objective?: 'plan' | 'peak';
   readonly seed?: number;
   readonly budget?: Budget;
 }
@@ -43,7 +41,6 @@ export function fullOptions(options: LevellingOptions): FullOptions {
     greatestShiftMin: options.greatestShiftMin ?? DEFAULT_GREATEST_SHIFT_MIN,
     mayMoveEarlier: options.mayMoveEarlier ?? true,
     prices: { ...DEFAULT_PRICES, ...options.prices },
-    objective: options.objective ?? 'plan',
     seed: options.seed ?? 1,
     budget: options.budget ?? { iterations: 20_000 },
   };
