@@ -2,6 +2,7 @@ import { mkdirSync, rmSync } from 'node:fs';
 import { buildInto, testDist } from './support/build';
 import { findChromium } from './support/chromium';
 import { atEnd, runCommand, undoAll } from './support/finish';
+import { findIapwsPython } from './support/iapws';
 import { takeLock } from './support/lock';
 import { holdServer } from './support/postgres/hold';
 import { Sentence, statePath } from './support/project';
@@ -30,6 +31,16 @@ async function testRun(what: string, config: string, env: NodeJS.ProcessEnv = {}
   return countRun(report, code);
 }
 
+/** Tests that need neither database nor browser; without python3-iapws the comparison with it fails and says so. */
+async function testsOfTheParts(): Promise<Count> {
+  let IAPWS_PYTHON: string | undefined;
+  const found = await step(async () => {
+    IAPWS_PYTHON = await findIapwsPython();
+    return true;
+  });
+  return sumCounts([found, await testRun('unit, property and verification', 'vitest.config', { IAPWS_PYTHON })]);
+}
+
 /** Server and browser tests: both need a database, the second the built application and a browser. */
 async function testsOfTheWhole(counts: Count[]): Promise<void> {
   const server = await holdServer('test-postgres');
@@ -55,7 +66,7 @@ await runCommand(async () => {
   const counts: Count[] = [];
   say('Running the checks');
   counts.push(await step(async () => (await runTs('scripts/check.ts')).code === 0));
-  counts.push(await testRun('unit, property and verification', 'vitest.config'));
+  counts.push(await testsOfTheParts());
   counts.push(
     await step(async () => {
       await testsOfTheWhole(counts);
