@@ -17,7 +17,7 @@ interface Solution {
   readonly _tableau: Tableau;
 }
 
-/** What a row's value is divided by, none: the package scales nothing, so models should hold numbers of like size. */
+/** The package's words. It scales nothing, so models should hold numbers of like size. */
 const BOUND = { atLeast: 'min', atMost: 'max', equal: 'equal' } as const;
 
 /** Solves a linear program with javascript-lp-solver. Variables at zero are missing from its answer. */
