@@ -33,7 +33,8 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
   const [draft, setDraft] = useState<Draft | null>(null);
   const [saved, setSaved] = useState<string | null>(null);
 
-  const clock = useMemo(() => makeClock(dto), [dto.firstInstant, dto.timeZone]);
+  const { firstInstant, timeZone } = dto;
+  const clock = useMemo(() => makeClock({ firstInstant, timeZone }), [firstInstant, timeZone]);
   const days = useMemo(() => daysOf(clock, dto.horizonMin), [clock, dto.horizonMin]);
   const judged = useMemo(
     () => evaluateWeek({ ...week.week, capacities: dto.capacities }).headers,

@@ -35,7 +35,7 @@ export default function DurationChart({ points, width, height, limitKgPerH }: Pr
       width={width}
       height={height}
       data={[...points]}
-      margin={{ top: 8, right: 12, bottom: 18, left: 0 }}
+      margin={{ top: 26, right: 12, bottom: 18, left: 0 }}
       accessibilityLayer
     >
       <CartesianGrid stroke="var(--color-rule)" strokeDasharray="1 4" vertical={false} />
@@ -53,7 +53,7 @@ export default function DurationChart({ points, width, height, limitKgPerH }: Pr
         tick={TICK}
         stroke="var(--color-edge)"
         tickFormatter={(rate: number) => groupDigits(rate)}
-        label={{ value: 'kg/h', position: 'insideTopLeft', offset: 4, ...TICK }}
+        label={{ value: 'kg/h', position: 'insideTopLeft', dx: 22, dy: -24, ...TICK }}
       />
       <Tooltip content={<Reading />} isAnimationActive={false} cursor={{ stroke: 'var(--color-ink)' }} />
       <Area

@@ -1,4 +1,4 @@
-import { useState, type FormEvent } from 'react';
+import { useState, type SubmitEvent } from 'react';
 import { ApiProblem, messageOf } from '../query/api';
 import { Button } from '../ui/Button';
 import { Field } from '../ui/Field';
@@ -47,7 +47,7 @@ export function SpanForm(props: Props) {
   );
   const isBackwards = draft.toMin <= draft.fromMin;
 
-  const submit = (event: FormEvent): void => {
+  const submit = (event: SubmitEvent): void => {
     event.preventDefault();
     setMissing(reason.trim() === '');
     if (reason.trim() !== '' && !isBackwards) props.onSave(reason.trim());

@@ -78,8 +78,3 @@ export function firstDraft(subject: Subject, nowMin: number, horizonMin: number,
   const fromMin = clamp(Math.ceil((nowMin + 1) / 60) * 60, 0, horizonMin - 120);
   return { subject, fromMin, toMin: fromMin + 120, value };
 }
-
-export const isSameSubject = (a: Subject, b: Subject): boolean =>
-  a.kind === 'limit'
-    ? b.kind === 'limit' && a.headerId === b.headerId
-    : b.kind === 'firing' && a.boilerId === b.boilerId;

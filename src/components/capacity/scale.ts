@@ -21,11 +21,6 @@ export function minuteAtX(scale: DeskScale, x: number): number {
   return Math.max(scale.from, Math.min(scale.to, minute));
 }
 
-/** The rate under a place down, from 0 to the top. [kg/h] */
-export function rateAtY(scale: DeskScale, y: number): number {
-  return Math.max(0, Math.min(scale.topKgPerH, (1 - y / scale.height) * scale.topKgPerH));
-}
-
 /** A round number at or above a rate, so that a small change of the load does not move the whole drawing. [kg/h] */
 export function roundTop(kgPerH: number): number {
   const step = kgPerH > 20_000 ? 5_000 : kgPerH > 5_000 ? 1_000 : 500;

@@ -1,4 +1,4 @@
-import { useMemo, useRef } from 'react';
+import { useMemo, useState } from 'react';
 import type { ShiftRowDto, ShiftSheetDto } from '@/contracts/floor';
 import { phasesPeakKgPerH } from '@/core/demand/activityLoad';
 import { drawnMode } from '@/core/plant/activity';
@@ -24,7 +24,7 @@ const greatestPeak = (rows: readonly ShiftRowDto[]): number =>
 /** One line's shift from the issue on the floor: what is in hand, what comes, what is done. */
 export function Sheet({ sheet: first, canRecord, whoMay }: SheetProps) {
   const { sheet, connected, record } = useShiftSheet(first);
-  const firstIssue = useRef(first.issue?.id ?? null);
+  const [openedWith] = useState(first.issue?.id ?? null);
   const clock = useMemo(() => makeClock(first), [first]);
   const nowMin = useNowMinute(sheet, clock);
   const topKgPerH = useMemo(() => greatestPeak(sheet.rows), [sheet.rows]);
@@ -58,7 +58,7 @@ export function Sheet({ sheet: first, canRecord, whoMay }: SheetProps) {
             Print
           </Button>
         </p>
-        {issue.id !== firstIssue.current ? (
+        {openedWith !== null && issue.id !== openedWith ? (
           <Notice look="caution" live title={`Issue ${issue.number} is on the floor now.`}>
             Times may have changed since you opened this page.
           </Notice>

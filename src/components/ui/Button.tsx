@@ -1,4 +1,4 @@
-import type { AnchorHTMLAttributes, ButtonHTMLAttributes } from 'react';
+import type { ButtonHTMLAttributes } from 'react';
 
 export type ButtonLook = 'main' | 'plain' | 'quiet' | 'over';
 export type ButtonSize = 'small' | 'usual' | 'floor';
@@ -50,13 +50,4 @@ export function Button({
       {...rest}
     />
   );
-}
-
-export function ButtonLink({
-  look,
-  size,
-  className,
-  ...rest
-}: Omit<Props, 'busy'> & AnchorHTMLAttributes<HTMLAnchorElement>) {
-  return <a className={buttonClass(look, size, className)} {...rest} />;
 }
