@@ -98,7 +98,7 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
                     key={text}
                     size="small"
                     look={date === dayDate ? 'plain' : 'quiet'}
-                    className="min-w-10 px-1.5"
+                    className="px-1.5 max-sm:px-1"
                     aria-pressed={date === dayDate}
                     onClick={() => setDayDate(date)}
                   >
