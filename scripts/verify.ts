@@ -43,7 +43,7 @@ function countsOf(rows: readonly CheckRow[]) {
 const percent = (error: number | null): string => (error === null ? '-' : `${(100 * error).toPrecision(2)} %`);
 
 function describe({ group, what, unit, source, expected, computed, relativeError, tolerance }: CheckRow): string {
-  const within = tolerance.kind === 'relative' ? `${100 * tolerance.value} %` : `${tolerance.value} ${unit}`;
+  const within = tolerance.kind === 'relative' ? percent(tolerance.value) : `${tolerance.value} ${unit}`;
   const figures = `expected ${expected}, computed ${computed} ${unit}, off by ${percent(relativeError)} (within ${within})`;
   return `${group}: ${what}: ${figures}. ${source}`;
 }

@@ -2,6 +2,7 @@
 import { boilerHouseChecks } from './boilerHouse';
 import type { Check } from './check';
 import { dutyChecks } from './duties';
+import { furtherBatchChecks } from './furtherBatches';
 import { openingChecks } from './openings';
 import { ratingChecks } from './rating';
 import { releaseChecks } from './release';
@@ -20,6 +21,7 @@ export const ALL_CHECKS: readonly Check[] = [
   ...boilerHouseChecks,
   ...dutyChecks,
   ...workedBatchChecks,
+  ...furtherBatchChecks,
 ];
 
 /** What the same sources also give, and why no formula of the product answers it. */

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { betweenRatesOf, betweenRuns } from '@/core/duty/betweenRuns';
 import { steamOfPhases } from '@/core/duty/duty';
-import { shellAtSteamOn } from '@/core/duty/shellTemperature';
+import { SHELL_COOLING_DEFAULTS, shellAtSteamOn } from '@/core/duty/shellTemperature';
 import { steamBlancher } from '@/core/duty/steamBlancher';
 import { stillRetort } from '@/core/duty/stillRetort';
 import { shellN } from '../../../verification/dutyExamples';
@@ -83,6 +83,10 @@ describe('shell at steam on', () => {
     expect(shellC(0)).toBe(40);
     expect(shellC(3600)).toBeCloseTo(25, 9);
     expectRelative(shellC(60), 25 + 15 * Math.exp(-60 / 90.222), 1e-5);
+  });
+
+  it('starts a form from figures that work', () => {
+    expect(shellAtSteamOn({ ...shellN, ...SHELL_COOLING_DEFAULTS.values }).ok).toBe(true);
   });
 
   it('spares a second load steam', () => {
