@@ -5,18 +5,7 @@ export type Stage = 'prepare' | 'blanch' | 'cook' | 'fill' | 'retort' | 'pasteur
 
 /** What goes on while steam is drawn; the rules look for vents among them. */
 export type PhaseKind =
-  | 'warmUp'
-  | 'run'
-  | 'idle'
-  | 'heatUp'
-  | 'boilOff'
-  | 'hold'
-  | 'vent'
-  | 'comeUp'
-  | 'process'
-  | 'cool'
-  | 'rinse'
-  | 'wash';
+  'warmUp' | 'run' | 'idle' | 'heatUp' | 'boilOff' | 'hold' | 'vent' | 'comeUp' | 'process' | 'cool' | 'rinse' | 'wash';
 
 /** A steady draw on the minute grid: whole minutes after the activity's start. */
 export interface Phase {
