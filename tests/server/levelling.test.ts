@@ -1,7 +1,8 @@
 import { eq, sql } from 'drizzle-orm';
-import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { LevellingRunDto } from '@/contracts/levelling';
 import type { EditResponse, StaleResponse } from '@/contracts/week';
+import type { LevellingResult } from '@/core/levelling/levelWeek';
 import type { LevellingProposal } from '@/core/levelling/proposal';
 import { evaluateWeek } from '@/core/pipeline';
 import { db } from '@/db/client';
@@ -14,7 +15,7 @@ import { POST as EDIT } from '@/pages/api/weeks/[week]/edits';
 import { POST as START } from '@/pages/api/weeks/[week]/levelling';
 import { closeQueue, openQueue } from '@/server/jobs/queue';
 import { reapLostRuns } from '@/server/levelling/reaper';
-import { workOnRun } from '@/server/levelling/runner';
+import { workOnRun, type StartThread } from '@/server/levelling/runner';
 import { loadWeek } from '@/server/weeks/loadWeek';
 import { callApi, outcome } from '../support/api';
 import {
@@ -166,6 +167,49 @@ describe('levelling by a worker process', () => {
     await db.update(levellingRuns).set({ state: 'failed', failure: 'given up' }).where(eq(levellingRuns.id, id));
     await working;
     expect(await read(id)).toMatchObject({ state: 'failed', failure: 'given up', proposal: null });
+  });
+});
+
+/** A thread that answers with a proposal of the tests' making. */
+function answering(change: (honest: LevellingResult) => Partial<LevellingResult>): StartThread {
+  return (job) => {
+    const honest = startThread(job);
+    return { ...honest, result: honest.result.then((result) => ({ ...result, ...change(result) })) };
+  };
+}
+
+describe('a proposal that does not stand up to the check', () => {
+  const figures = { overKg: 12 };
+  const clash = { unitId: 'R2', start: 602 };
+  it.each<[string, (honest: LevellingResult) => Partial<LevellingResult>, string]>([
+    ['other steam', (r) => ({ proposal: { ...r.proposal, after: { ...r.proposal.after, ...figures } } }), 'kg said'],
+    [
+      'other lateness',
+      (r) => ({ proposal: { ...r.proposal, after: { ...r.proposal.after, lateMinutes: 3 } } }),
+      'min said',
+    ],
+    [
+      'a process limit newly broken',
+      ({ proposal }) => {
+        const [move] = proposal.moves;
+        const bad = move ? [{ ...move, activityId: 'A109', from: { unitId: 'R1', start: 1_320 }, to: clash }] : [];
+        return { proposal: { ...proposal, moves: bad, after: proposal.before } };
+      },
+      'breaks ventsAtOnce',
+    ],
+    ['a plan withheld by the solver itself', () => ({ withheld: true }), 'withheld'],
+  ])('is put away with a fault logged: %s', async (_name, change, logged) => {
+    const fault = vi.spyOn(console, 'error').mockImplementation(() => undefined);
+    const { id } = await started();
+    await workOnRun(id, { startThread: answering(change) });
+    const said = fault.mock.calls.flat().join(' ');
+    fault.mockRestore();
+    expect(said).toContain('put away');
+    expect(said).toContain(logged);
+    const run = await read(id);
+    expect(run).toMatchObject({ state: 'failed', proposal: null });
+    expect(run.failure).toContain('nothing was changed');
+    expect((await load()).planRevision).toBe(0);
   });
 });
 

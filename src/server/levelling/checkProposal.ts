@@ -30,6 +30,7 @@ export function tryMoves(week: Week, moves: readonly ProposedMove[]): CheckedMov
 /** What the solver says of its proposal and judging does not bear out; null where they agree. */
 export function disagreement(week: Week, proposal: LevellingProposal): string | null {
   const { evaluation, broken } = tryMoves(week, proposal.moves);
+  if (broken.length > 0) return `breaks ${broken.map(({ id }) => id).join(', ')}`;
   const kg = overKgOf(evaluation);
   const said = proposal.after.overKg;
   if (Math.abs(kg - said) > Math.max(KG_TOLERANCE, KG_FRACTION * Math.max(kg, said))) {
@@ -38,7 +39,7 @@ export function disagreement(week: Week, proposal: LevellingProposal): string | 
   if (evaluation.lateMinutes !== proposal.after.lateMinutes) {
     return `${evaluation.lateMinutes} min late, ${proposal.after.lateMinutes} min said`;
   }
-  return broken.length > 0 ? `breaks ${broken.map(({ id }) => id).join(', ')}` : null;
+  return null;
 }
 
 /** Steam over limits and letdowns, all headers. [kg] */
