@@ -12,6 +12,7 @@ import { KeyHelp } from './KeyHelp';
 import { LevelPanel } from './LevelPanel';
 import { Notices } from './Notices';
 import { Panel } from './Panel';
+import { ReadTrouble } from './ReadTrouble';
 import type { PointedAt } from './Pointed';
 import { SlipDialog } from './SlipDialog';
 import { createStore } from './store';
@@ -44,21 +45,22 @@ export function Board({ me, initial }: Props) {
   const model = useBoard(me, initial);
   const actions = useBoardActions(model);
   const { view, week, clock, carry, dto } = model;
+  const { scale, scrollRef, headRef } = view;
   const rowsRef = useRef<HTMLDivElement>(null);
   const [pointed] = useState(() => createStore<PointedAt | null>(null));
   const [issuing, setIssuing] = useState(false);
   const [slipping, setSlipping] = useState<string | null>(null);
   const ticks = useMemo(
-    () => ticksOf(clock, week.horizonMin, view.scale.pxPerMin),
-    [clock, week.horizonMin, view.scale.pxPerMin],
+    () => ticksOf(clock, week.horizonMin, scale.pxPerMin),
+    [clock, week.horizonMin, scale.pxPerMin],
   );
   const hand = useHandDrag({
     carry,
-    scale: view.scale,
+    scale,
     activityOf: (id) => dto.week.activities.find((activity) => activity.id === id),
     rowsRef,
-    scrollRef: view.scrollRef,
-    headRef: view.headRef,
+    scrollRef,
+    headRef,
   });
   const onKeyDown = useBoardKeys({
     carryingByKeys: model.carryingBy === 'keys',
@@ -118,14 +120,15 @@ export function Board({ me, initial }: Props) {
             onIssue={() => setIssuing(true)}
           />
         </BoardBar>
+        <ReadTrouble server={model.server} />
         <div className="board-body">
-          <div ref={view.scrollRef} className="board-scroll" tabIndex={-1}>
-            <div style={{ width: `calc(var(--label-w) + ${view.scale.widthPx}px)` }}>
-              <div ref={view.headRef} className="sticky top-0 z-20">
+          <div ref={scrollRef} className="board-scroll" tabIndex={-1}>
+            <div style={{ width: `calc(var(--label-w) + ${scale.widthPx}px)` }}>
+              <div ref={headRef} className="sticky top-0 z-20">
                 <TimeHead
                   {...{ ticks, clock }}
                   shifts={model.shifts}
-                  scale={view.scale}
+                  scale={scale}
                   nowMin={model.nowMin}
                   corner={<KeyHelp />}
                 />

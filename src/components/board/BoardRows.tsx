@@ -154,7 +154,7 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
       <Threads {...{ threads, rows, scale }} />
       <CarryLayer
         {...{ rows, scale, clock }}
-        scrollRef={view.scrollRef}
+
         carried={model.carry.store}
         peak={model.peak}
         names={model.names}

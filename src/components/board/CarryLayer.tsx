@@ -1,4 +1,3 @@
-import type { RefObject } from 'react';
 import { drawnMode } from '../../core/plant/activity';
 import type { Names } from '../../core/schedule/sentences';
 import type { Clock } from '../time';
@@ -17,7 +16,6 @@ interface Props {
   readonly peak: number;
   readonly names: Names;
   readonly clock: Clock;
-  readonly scrollRef: RefObject<HTMLDivElement | null>;
 }
 
 /** What shows while an activity is carried: starts at which its steam fits, rows it can't run on, and where it lands. */
@@ -72,9 +70,10 @@ function RowLights({
   });
 }
 
+/** Room to the left of the landing into which its words may move where the view ends. */
 const TAG_PX = 300;
 
-function Landing({ carried, rows, scale, peak, names, clock, scrollRef }: Props) {
+function Landing({ carried, rows, scale, peak, names, clock }: Props) {
   const carrying = useStore(carried, (c) => c);
   const target = carrying?.carry.target;
   if (!carrying || !target) return null;
@@ -85,8 +84,6 @@ function Landing({ carried, rows, scale, peak, names, clock, scrollRef }: Props)
   const verdict = verdictOf(activity.id, target, carrying.fits, carrying.preview, names, clock);
   const left = xOf(scale, target.start);
   const below = top < 60;
-  const scroller = scrollRef.current;
-  const leftmost = scroller ? scroller.scrollLeft + scroller.clientWidth - TAG_PX * 1.6 : left;
   return (
     <>
       <div
@@ -98,22 +95,25 @@ function Landing({ carried, rows, scale, peak, names, clock, scrollRef }: Props)
         <Outline mode={mode} peak={peak} />
       </div>
       <div
-        className="float absolute z-[8] max-w-72 px-2 py-1 text-xs"
+        className="absolute right-0 z-[8] flex"
         style={{
-          left: Math.max(0, Math.min(left, leftmost)),
+          left: left - TAG_PX,
           top: below ? top + ROW_PX + 2 : top - 4,
           transform: below ? '' : 'translateY(-100%)',
         }}
       >
-        <span className="font-semibold whitespace-nowrap">{clock.dayTime(target.start)}</span>{' '}
-        <span className={verdict.look === 'over' ? 'text-over' : verdict.look === 'room' ? 'text-room' : ''}>
-          {verdict.steam}
-        </span>
-        {verdict.others.slice(0, 2).map((words) => (
-          <span key={words} className="block text-2xs text-ink-muted">
-            {words}
+        <span className="shrink-0" style={{ width: TAG_PX }} />
+        <div className="float sticky right-3 left-(--label-w) max-w-72 self-start px-2 py-1 text-xs">
+          <span className="font-semibold whitespace-nowrap">{clock.dayTime(target.start)}</span>{' '}
+          <span className={verdict.look === 'over' ? 'text-over' : verdict.look === 'room' ? 'text-room' : ''}>
+            {verdict.steam}
           </span>
-        ))}
+          {verdict.others.slice(0, 2).map((words) => (
+            <span key={words} className="block text-2xs text-ink-muted">
+              {words}
+            </span>
+          ))}
+        </div>
       </div>
     </>
   );

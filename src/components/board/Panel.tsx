@@ -39,6 +39,7 @@ export function Panel({ model, actions }: Props) {
       <div className="px-5 py-4">
         <Unplaced
           groups={model.waiting}
+          nothingPlanned={model.week.activities.length === 0}
           peak={model.peak}
           clock={model.clock}
           mayEdit={model.mayEdit}

@@ -8,6 +8,8 @@ import { STAGE_WORDS } from './words';
 
 interface Props {
   readonly groups: readonly WaitingGroup[];
+  /** The week holds no batches at all. */
+  readonly nothingPlanned: boolean;
   readonly peak: number;
   readonly clock: Clock;
   readonly mayEdit: boolean;
@@ -19,7 +21,7 @@ interface Props {
 }
 
 /** What still waits for a place, by due time. Cards are dragged onto the board, or picked up with Enter. */
-export function Unplaced({ groups, onPlaceAll, mayEdit, ...card }: Props) {
+export function Unplaced({ groups, nothingPlanned, onPlaceAll, mayEdit, ...card }: Props) {
   const count = groups.reduce((sum, group) => sum + group.activities.length, 0);
   return (
     <section aria-labelledby="not-yet-placed">
@@ -31,7 +33,11 @@ export function Unplaced({ groups, onPlaceAll, mayEdit, ...card }: Props) {
           {count}
         </span>
       </header>
-      {count === 0 ? <p className="mt-1 text-sm text-ink-muted">Everything has a place.</p> : null}
+      {count === 0 ? (
+        <p className="mt-1 text-sm text-ink-muted">
+          {nothingPlanned ? 'No batches are in this week yet.' : 'Everything has a place.'}
+        </p>
+      ) : null}
       {groups.map((group) => (
         <section key={group.key} className="mt-3" aria-label={group.title}>
           <h3 className="flex items-baseline justify-between gap-2 text-sm">
@@ -65,7 +71,7 @@ const Card = memo(function Card({
   selectedId,
   onSelect,
   onLift,
-}: Omit<Props, 'groups' | 'onPlaceAll'> & { readonly activity: Activity }) {
+}: Omit<Props, 'groups' | 'nothingPlanned' | 'onPlaceAll'> & { readonly activity: Activity }) {
   const { setNodeRef, listeners } = useDraggable({ id: activity.id, disabled: !mayEdit });
   const mode = drawnMode(activity);
   const stage = activity.stage ? STAGE_WORDS[activity.stage] : '';

@@ -17,6 +17,7 @@ import { closedSpans, shiftSpells } from './ticks';
 import { useCarry, type Carrying } from './useCarry';
 import { useFrozen } from './useFrozen';
 import { useLevelling } from './useLevelling';
+import { useNowMin } from './useNowMin';
 import { useSaves } from './useSaves';
 import { useWeek } from './useWeek';
 import { useBoardView } from './useBoardView';
@@ -116,7 +117,7 @@ function useGround(dto: WeekDto) {
     }
     return byActivity;
   }, [dto.floorEvents]);
-  const nowMin = useMemo(() => makeClock(dto).minuteOf(dto.now), [dto]);
+  const nowMin = useNowMin(dto);
   return { rows, peak, closed, shifts, events, nowMin };
 }
 

@@ -116,8 +116,13 @@ export function useBoardActions(model: BoardModel) {
     setSelectedId(held.activity.id);
     const words = `${activityName(held.activity)} put down: ${placeText(dropped?.placement ?? held.activity.placement, model.week.plant, model.clock)}.`;
     if (dropped) make(moveActivity(model.dto.week, dropped.activity.id, dropped.placement), words);
-    else setSaid(`${activityName(held.activity)} stays where it was.`);
+    else setSaid(stayWords(held));
     focusBlock(held.activity.id);
+  };
+
+  const stayWords = ({ activity, target }: Carry): string => {
+    if (!target || target.eligible) return `${activityName(activity)} stays where it was.`;
+    return `${activityName(activity)} can’t run on ${unitName(model.week.plant, target.unitId)}.`;
   };
 
   const cancel = (): void => {

@@ -25,7 +25,7 @@ const UNPLACED_HOLD_MIN = 4;
 
 /** Leads the hand's movements to the carried activity. The row is found from the pointer, not from drop targets. */
 export function useHandDrag(ground: Ground) {
-  const latest = useLatest(ground);
+  const latestRef = useLatest(ground);
   const hand = useRef<Hand | null>(null);
   const sensors = useSensors(
     useSensor(MouseSensor, { activationConstraint: { distance: 4 } }),
@@ -33,9 +33,10 @@ export function useHandDrag(ground: Ground) {
   );
 
   const follow = useCallback(() => {
-    const { carry } = latest.current;
-    if (carry.store.get()?.carry.by === 'hand' && hand.current) carry.moveTo(pointerOf(latest.current, hand.current));
-  }, [latest]);
+    const { carry } = latestRef.current;
+    if (carry.store.get()?.carry.by === 'hand' && hand.current)
+      carry.moveTo(pointerOf(latestRef.current, hand.current));
+  }, [latestRef]);
 
   useEffect(() => {
     const onMove = (event: PointerEvent | TouchEvent): void => {
@@ -44,12 +45,12 @@ export function useHandDrag(ground: Ground) {
       follow();
     };
     const onKey = (event: KeyboardEvent): void => {
-      if (event.key !== 'Alt' || !hand.current || latest.current.carry.store.get() === null) return;
+      if (event.key !== 'Alt' || !hand.current || latestRef.current.carry.store.get() === null) return;
       event.preventDefault();
       hand.current = { ...hand.current, fine: event.type === 'keydown' };
       follow();
     };
-    const scroller = latest.current.scrollRef.current;
+    const scroller = latestRef.current.scrollRef.current;
     window.addEventListener('pointermove', onMove);
     window.addEventListener('touchmove', onMove, { passive: true });
     window.addEventListener('keydown', onKey);
@@ -62,19 +63,19 @@ export function useHandDrag(ground: Ground) {
       window.removeEventListener('keyup', onKey);
       scroller?.removeEventListener('scroll', follow);
     };
-  }, [follow, latest]);
+  }, [follow, latestRef]);
 
   const start = useCallback(
     (event: DragStartEvent) => {
-      const { carry, activityOf } = latest.current;
+      const { carry, activityOf } = latestRef.current;
       const activity = activityOf(String(event.active.id));
       if (!activity) return;
       const begun = handOf(event.activatorEvent);
       if (begun) hand.current = begun;
-      carry.lift(activity, 'hand', { heldAtMin: begun ? heldAt(latest.current, activity, begun) : 0 });
+      carry.lift(activity, 'hand', { heldAtMin: begun ? heldAt(latestRef.current, activity, begun) : 0 });
       follow();
     },
-    [latest, follow],
+    [latestRef, follow],
   );
   return { sensors, start };
 }

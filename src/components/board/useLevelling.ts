@@ -1,5 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import { useEffect, useMemo, useState } from 'react';
+import { useMemo, useState } from 'react';
 import type { LevellingRequest, LevellingRunDto } from '../../contracts/levelling';
 import type { EditResponse, WeekDto } from '../../contracts/week';
 import type { ProposedMove } from '../../core/levelling/proposal';
@@ -48,9 +48,11 @@ export function useLevelling({ dto, tell, made }: Deps): Levelling {
   const [runId, setRunId] = useState(dto.levelling?.id ?? null);
   const [left, setLeft] = useState<ReadonlySet<string>>(new Set());
   const newest = dto.levelling?.id ?? null;
-  useEffect(() => {
+  const [seen, setSeen] = useState(newest);
+  if (newest !== seen) {
+    setSeen(newest);
     if (newest !== null) setRunId(newest);
-  }, [newest]);
+  }
 
   const query = useQuery({
     queryKey: ['levelling', runId],

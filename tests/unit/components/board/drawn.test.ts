@@ -47,9 +47,9 @@ describe('what waits', () => {
 });
 
 describe('breaches', () => {
-  const process = breach('p', { class: 'process', from: 500, to: 510, activityIds: ['a', 'b'] } as Partial<Breach>);
-  const steam = breach('s', { class: 'steam', from: 100, to: 110, activityIds: ['a'] } as Partial<Breach>);
-  const early = breach('e', { class: 'steam', from: 20, to: 50 } as Partial<Breach>);
+  const process = breach('p', { class: 'process', from: 500, to: 510, activityIds: ['a', 'b'] });
+  const steam = breach('s', { class: 'steam', from: 100, to: 110, activityIds: ['a'] });
+  const early = breach('e', { class: 'steam', from: 20, to: 50 });
   it('should be found by every activity concerned', () => {
     const by = breachesByActivity([process, steam]);
     expect(by.get('a')).toEqual([process, steam]);
