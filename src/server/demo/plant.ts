@@ -113,7 +113,7 @@ const boilerHouse = {
   makeUpC: 15,
   turndown: 4,
   greatestRiseFractionPerMin: 0.3,
-  waterTonnes: 8,
+  waterTonnes: 10,
 };
 
 export const DEMO_BOILERS: readonly DemoBoiler[] = [
