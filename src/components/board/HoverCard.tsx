@@ -1,3 +1,4 @@
+import { useLayoutEffect, useRef } from 'react';
 import { phasesKg, phasesPeakKgPerH } from '../../core/demand/activityLoad';
 import { drawnMode, type Activity } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
@@ -23,6 +24,8 @@ interface Props {
 /** All about a block that the pointer rests on or the keys have reached, where its own width leaves no room. */
 export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, names }: Props) {
   const id = useStore(hovered, (h) => h);
+  const card = useRef<HTMLDivElement>(null);
+  useLayoutEffect(() => keepInSight(card.current), [id, scale]);
   const activity = id === null ? undefined : drawn.find((a) => a.id === id);
   const mode = activity && drawnMode(activity);
   const top = activity?.placement ? rows.topOfUnit.get(activity.placement.unitId) : undefined;
@@ -33,6 +36,7 @@ export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, 
   const wrong = breaches.get(activity.id) ?? [];
   return (
     <div
+      ref={card}
       className="float pointer-events-none absolute z-[9] w-64 px-2.5 py-1.5 text-xs"
       aria-hidden="true"
       style={{
@@ -60,4 +64,13 @@ export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, 
       {wrong.length > 2 ? <p className="text-ink-muted">and {wrong.length - 2} more to put right</p> : null}
     </div>
   );
+}
+
+/** Pulls the card left where the board's right edge would cut it off. */
+function keepInSight(card: HTMLElement | null): void {
+  const board = card?.closest('.board-scroll');
+  if (!card || !board) return;
+  card.style.marginLeft = '';
+  const beyond = card.getBoundingClientRect().right + 8 - board.getBoundingClientRect().right;
+  if (beyond > 0) card.style.marginLeft = `${-beyond}px`;
 }

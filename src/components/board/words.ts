@@ -85,6 +85,7 @@ export function overWords(judgement: HeaderJudgement | undefined, clock: Clock):
   }
   if (!over)
     return letdown ? letdownFits(judgement) : { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
+  if (judgement.peak.kgPerH === 0) return { look: 'room', figure: 'under the limit', line: 'nothing draws steam' };
   if (!leastSpare) return { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
   return {
     look: 'room',

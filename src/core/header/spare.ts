@@ -19,13 +19,14 @@ export function steamToSpare(load: ArrayLike<number>, limit: ArrayLike<number>):
   return Float64Array.from({ length: load.length }, (_, t) => (limit[t] as number) - (load[t] as number));
 }
 
-/** Where the least steam is to spare; null for an empty span or one that is not judged. [kg/h] */
+/** Where the least steam is to spare while any is drawn; null for a span without draw or one not judged. [kg/h] */
 export function leastSpare(load: ArrayLike<number>, limit: ArrayLike<number>): RateAt | null {
   let least: RateAt | null = null;
   for (let t = 0; t < load.length; t++) {
     const bound = limit[t] as number;
-    const kgPerH = bound - (load[t] as number);
-    if (bound < NOT_JUDGED_KG_PER_H && (!least || kgPerH < least.kgPerH)) least = { kgPerH, minute: t };
+    const drawn = load[t] as number;
+    const kgPerH = bound - drawn;
+    if (drawn > 0 && bound < NOT_JUDGED_KG_PER_H && (!least || kgPerH < least.kgPerH)) least = { kgPerH, minute: t };
   }
   return least;
 }

@@ -122,6 +122,8 @@ describe('steam to spare and load factor', () => {
     expect([...steamToSpare(load, flat(250, 3))]).toEqual([150, -50, 50]);
     expect(leastSpare(load, flat(250, 3))).toEqual({ kgPerH: -50, minute: 1 });
     expect(leastSpare(load, flat(NOT_JUDGED_KG_PER_H, 3))).toBeNull();
+    expect(leastSpare([0, 300], [0, 400])).toEqual({ kgPerH: 100, minute: 1 });
+    expect(leastSpare([0, 0], flat(400, 2))).toBeNull();
   });
 
   it('knows peak, kg and factors', () => {
