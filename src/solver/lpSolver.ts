@@ -31,7 +31,7 @@ export function solveLp(model: LpModel): LpOutcome {
       if (column) column[`r${i}`] = (column[`r${i}`] ?? 0) + coefficient;
     }
   });
-  const solution = solver.Solve(raw, undefined, true) as unknown as Solution;
+  const solution = solver.Solve(raw, undefined, true) as Solution;
   if (!solution.feasible) return { status: 'infeasible' };
   if (!solution.bounded) return { status: 'unbounded' };
   return {

@@ -11,6 +11,8 @@ import { solveLp } from '@/solver/lpSolver';
 import { smallProblem } from '../support/levellingProblems';
 
 const RUNS = 60;
+/** Where cases are counted the draws are the same each time. */
+const COUNTED = 20_260;
 const seeds = fc.integer({ min: 1, max: 100_000 });
 const options = fullOptions({ budget: { iterations: 200 } });
 const solve = (problem: Problem): Plan => solveProblem(problem, options, { solveLp }).plan;
@@ -22,7 +24,7 @@ describe('levelling, for any small problem', () => {
       fc.property(seeds, (seed) => {
         const problem = smallProblem(seed, { cleaningDraws: true });
         const search = new Search(toModel(problem), seededRandom(seed));
-        if (search.idle) return;
+        if (!problem.activities.some((a) => a.movable)) return;
         for (let i = 0; i < 300; i++) search.step(i / 300);
         steps += search.iterations;
         const { state } = search;
@@ -40,7 +42,7 @@ describe('levelling, for any small problem', () => {
         );
         expect(judged.broken).toBeLessThanOrEqual(judge(problem, planOf(problem)).broken);
       }),
-      { numRuns: RUNS },
+      { numRuns: RUNS, seed: COUNTED },
     );
     expect(steps).toBeGreaterThan(RUNS * 150);
   });
@@ -60,7 +62,7 @@ describe('levelling, for any small problem', () => {
         if (after.processOver === before.processOver) expect(after.steamKg).toBeLessThanOrEqual(before.steamKg + 1e-9);
         if (after.steamKg < before.steamKg) improved++;
       }),
-      { numRuns: RUNS },
+      { numRuns: RUNS, seed: COUNTED },
     );
     expect(improved).toBeGreaterThan(RUNS / 4);
   });

@@ -40,6 +40,7 @@ export const DEFAULT_SETTINGS: SearchSettings = {
 const OVER = 1e-6;
 /** Iterations between two adjustments of the overload's price. */
 const OSCILLATION = 50;
+/** All that is over on one resource costs at most about this. */
 const DEAREST_OVER = 20_000;
 const DEAREST_LATE = 400;
 
@@ -162,10 +163,11 @@ export class Search {
     const { state, model, settings } = this;
     const least = (settings.overPrice / 3) * (this.progress > 0.85 ? 10 : 1);
     for (let r = 0; r < state.prices.length; r++) {
-      const price = state.prices[r]! * model.scale[r]!;
+      const costs = state.prices[r]! * state.over[r]!;
       if (state.over[r]! > OVER) {
-        if (price < DEAREST_OVER) state.prices[r]! *= 1.1;
-      } else if (price > least) state.prices[r]! *= 0.92;
+        // A trace that costs less than what the temperature lets pass would stay for ever.
+        if (costs < DEAREST_OVER) state.prices[r]! *= costs < 10 * this.temperature ? 1.4 : 1.1;
+      } else if (state.prices[r]! * model.scale[r]! > least) state.prices[r]! *= 0.92;
     }
     if (state.late > this.lateBefore + OVER) state.latePrice = Math.min(DEAREST_LATE, state.latePrice * 1.1);
     else state.latePrice = Math.max(LATE_PRICE, state.latePrice * 0.95);
