@@ -137,7 +137,7 @@ export function Board({ me, initial }: Props) {
               <BoardRows {...{ model, actions, ticks, pointed, rowsRef, onKeyDown }} onSlip={setSlipping} />
             </div>
           </div>
-          <aside className="board-panel min-h-0 overflow-y-auto border-l border-rule bg-surface" aria-label="Week">
+          <aside className="board-panel flex min-h-0 flex-col border-l border-rule bg-surface" aria-label="Week">
             {model.levelling.open ? <LevelPanel {...{ model, actions }} /> : <Panel {...{ model, actions }} />}
           </aside>
         </div>

@@ -18,7 +18,7 @@ export function LevelPanel({ model, actions }: Props) {
   const { levelling, me } = model;
   const { run } = levelling;
   return (
-    <section aria-labelledby="levelling" className="flex min-h-full flex-col">
+    <section aria-labelledby="levelling" className="flex min-h-0 flex-1 flex-col overflow-y-auto">
       <header className="flex items-center justify-between px-5 pt-4">
         <h2 id="levelling" className="text-base font-semibold">
           Level this week

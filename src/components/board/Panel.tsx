@@ -9,13 +9,40 @@ interface Props {
   readonly actions: BoardActions;
 }
 
-/** What is to put right, what is selected, and what waits for a place. */
+/**
+ * What is to put right and what waits for a place; docked below them what is selected, so that a line that is clicked stays
+ * where it was.
+ */
 export function Panel({ model, actions }: Props) {
   const { selected } = actions;
   return (
-    <div className="flex flex-col divide-y divide-rule">
-      {selected ? (
+    <>
+      <div className="min-h-0 flex-1 divide-y divide-rule overflow-y-auto">
         <div className="px-5 py-4">
+          <BreachList
+            breaches={model.evaluation.breaches}
+            names={model.names}
+            clock={model.clock}
+            nowMin={model.nowMin}
+            onGo={actions.goTo}
+          />
+        </div>
+        <div className="px-5 py-4">
+          <Unplaced
+            groups={model.waiting}
+            nothingPlanned={model.week.activities.length === 0}
+            peak={model.peak}
+            clock={model.clock}
+            mayEdit={model.mayEdit}
+            selectedId={actions.selectedId}
+            onSelect={actions.setSelectedId}
+            onLift={actions.lift}
+            onPlaceAll={actions.placeAll}
+          />
+        </div>
+      </div>
+      {selected ? (
+        <div className="max-h-1/2 shrink-0 overflow-y-auto border-t border-edge px-5 py-4 max-md:sticky max-md:bottom-0 max-md:bg-surface">
           <SelectedDetail
             activity={selected}
             week={model.week}
@@ -27,28 +54,6 @@ export function Panel({ model, actions }: Props) {
           />
         </div>
       ) : null}
-      <div className="px-5 py-4">
-        <BreachList
-          breaches={model.evaluation.breaches}
-          names={model.names}
-          clock={model.clock}
-          nowMin={model.nowMin}
-          onGo={actions.goTo}
-        />
-      </div>
-      <div className="px-5 py-4">
-        <Unplaced
-          groups={model.waiting}
-          nothingPlanned={model.week.activities.length === 0}
-          peak={model.peak}
-          clock={model.clock}
-          mayEdit={model.mayEdit}
-          selectedId={actions.selectedId}
-          onSelect={actions.setSelectedId}
-          onLift={actions.lift}
-          onPlaceAll={actions.placeAll}
-        />
-      </div>
-    </div>
+    </>
   );
 }

@@ -67,6 +67,9 @@ export function useBoard(me: MeDto, initial: WeekDto) {
 
 export type BoardModel = ReturnType<typeof useBoard>;
 
+/** A longer time over the limit is no place to lead the eye to: boilers are shut, or no limit is met at all. */
+const LONGEST_BAND_MIN = 240;
+
 type Chosen = ReturnType<typeof useLevelling>['chosen'];
 
 /** The week as drawn: the plan, or a proposal over it. */
@@ -91,7 +94,10 @@ function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, c
     return new Map(drawn.map((a) => [a.id, blockLabel(a, week.plant, clock, titles(a))]));
   }, [drawn, breaches, names, clock, week.plant]);
   const over = useMemo(
-    () => mergeIntervals(evaluation.headers.flatMap((h) => [...(h.over?.spans ?? []), ...(h.letdown?.spans ?? [])])),
+    () =>
+      mergeIntervals(evaluation.headers.flatMap((h) => [...(h.over?.spans ?? []), ...(h.letdown?.spans ?? [])])).filter(
+        (span) => span.to - span.from <= LONGEST_BAND_MIN,
+      ),
     [evaluation],
   );
   const waiting = useMemo(() => waitingGroups(notYetPlaced(week.activities), week.links), [week]);

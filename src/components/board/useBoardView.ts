@@ -25,7 +25,8 @@ export function useBoardView(horizonMin: number, firstMinute: number): BoardView
   const keepMinute = useRef<number | null>(firstMinute);
   const scale = useMemo(() => scaleFor(zoom, viewPx, horizonMin), [zoom, viewPx, horizonMin]);
 
-  useEffect(() => {
+  // Before the first paint, so that nothing moves once it is seen.
+  useLayoutEffect(() => {
     const scroller = scrollRef.current;
     if (!scroller) return;
     const measure = (): void => setViewPx(Math.max(200, scroller.clientWidth - labelPx(headRef.current)));
