@@ -2,7 +2,7 @@ import type { ActivityState, WeekDto } from '../../contracts/week';
 import type { ProposedMove } from '../../core/levelling/proposal';
 import { drawnMode, type Activity, type Fixing, type Placement, type Stage } from '../../core/plant/activity';
 import type { HeaderJudgement } from '../../core/header/judgement';
-import type { PlantModel, UnitKind } from '../../core/plant/plant';
+import type { PlantModel } from '../../core/plant/plant';
 import { groupDigits, kgText, rateText, spanText, type Clock } from '../time';
 
 export const STAGE_WORDS: Readonly<Record<Stage, string>> = {
@@ -20,16 +20,6 @@ export const FIXING_WORDS: Readonly<Record<Fixing, string>> = {
   fixed: 'fixed',
   started: 'started on the floor',
   done: 'done',
-};
-
-export const UNIT_KIND_WORDS: Readonly<Record<UnitKind, string>> = {
-  blancher: 'Blancher',
-  kettle: 'Kettle',
-  cooker: 'Cooker',
-  filler: 'Filler',
-  retort: 'Retort',
-  pasteuriser: 'Pasteuriser',
-  other: 'Unit',
 };
 
 export function unitName(plant: PlantModel, unitId: string): string {
