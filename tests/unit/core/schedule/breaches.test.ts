@@ -71,7 +71,7 @@ describe('steam limits', () => {
     expect([breaches, cleanings, lateMinutes]).toEqual([[], [], 0]);
     expect(headers[0]).toMatchObject({
       peak: { kgPerH: 0, minute: 0 },
-      leastSpare: { kgPerH: 1000, minute: 0 },
+      leastSpare: null,
       steamKg: 0,
     });
   });
