@@ -42,10 +42,10 @@ const main = (dto: CapacityDto) => dto.capacities.find((capacity) => capacity.he
 const limitAt = (dto: CapacityDto, minute: number) => valueAt(main(dto)?.limitKgPerH ?? [], minute);
 
 describe('the boiler house over a week', () => {
-  it('sends nothing until a boiler is lit', async () => {
+  it('is not judged while nothing was said of its boilers', async () => {
     const dto = await read();
     expect(dto).toMatchObject({ weekStart: WEEK, horizonMin: 10_080, firstInstant: '2026-11-30T00:00:00.000Z' });
-    expect(main(dto)?.limitKgPerH).toEqual([{ from: 0, value: 0 }]);
+    expect(main(dto)).toMatchObject({ limitKgPerH: null, exportKgPerH: null });
     expect(dto.boilers.map((boiler) => boiler.share)).toEqual([[{ from: 0, value: 0 }], [{ from: 0, value: 0 }]]);
   });
 

@@ -1,4 +1,4 @@
-import { buildHeaderCapacity, NOT_JUDGED_KG_PER_H } from '@/core/header/capacity';
+import { buildHeaderCapacity, NOT_JUDGED_KG_PER_H, type BoilerInForce } from '@/core/header/capacity';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { stepsFromSpans, type ValuedSpan } from '@/core/time/stepMath';
 import type { Db } from '@/db/client';
@@ -14,14 +14,19 @@ function setLimits(rows: CapacityRows, headerId: string, time: WeekTime): Valued
   return spansOf(stepsFromSpans(said, NOT_JUDGED_KG_PER_H), NOT_JUDGED_KG_PER_H, time.horizonMin);
 }
 
+/** Boilers that feed a header; none where nothing was said of any of them for the week: then they are not known. */
+function boilersOf(rows: CapacityRows, headerId: string, time: WeekTime): BoilerInForce[] {
+  const own = rows.boilers.filter((boiler) => boiler.headerId === headerId);
+  const said = rows.firings.some((firing) => own.some((boiler) => boiler.id === firing.boilerId));
+  return said ? own.map((boiler) => boilerInForce(rows, boiler, time)) : [];
+}
+
 /** Every header's capacity over a week, from rows. */
 export function headerCapacities(rows: CapacityRows, time: WeekTime): HeaderCapacity[] {
   return rows.headers.map((header) =>
     buildHeaderCapacity({
       headerId: header.id,
-      boilers: rows.boilers
-        .filter((boiler) => boiler.headerId === header.id)
-        .map((boiler) => boilerInForce(rows, boiler, time)),
+      boilers: boilersOf(rows, header.id, time),
       reserveFraction: rows.plant.reserveFraction,
       setLimits: setLimits(rows, header.id, time),
       baseLoadKgPerH: sumByHour(
