@@ -1,4 +1,4 @@
-import { addDaysTo } from './weekDates';
+import { daysAfter } from '../../calendar/dates';
 import type { DayOfWeek } from './wallTime';
 
 interface Props {
@@ -16,7 +16,7 @@ export function WeekLinks({ path, weekStart, days }: Props) {
   const words = (label: string | undefined): string => (label ?? '').split(' ').slice(1).join(' ');
   return (
     <nav aria-label="Week" className="-ml-2 flex items-center gap-1">
-      <a className={ARROW} href={`${path}/${addDaysTo(weekStart, -7)}`} aria-label="The week before">
+      <a className={ARROW} href={`${path}/${daysAfter(weekStart, -7)}`} aria-label="The week before">
         <svg viewBox="0 0 16 16" aria-hidden="true">
           <path d="m10 3-5 5 5 5" strokeWidth="1.5" />
         </svg>
@@ -24,7 +24,7 @@ export function WeekLinks({ path, weekStart, days }: Props) {
       <h1 className="text-lg font-semibold">
         {words(days[0]?.label)} to {words(days.at(-1)?.label)}
       </h1>
-      <a className={ARROW} href={`${path}/${addDaysTo(weekStart, 7)}`} aria-label="The week after">
+      <a className={ARROW} href={`${path}/${daysAfter(weekStart, 7)}`} aria-label="The week after">
         <svg viewBox="0 0 16 16" aria-hidden="true">
           <path d="m6 3 5 5-5 5" strokeWidth="1.5" />
         </svg>

@@ -1,5 +1,4 @@
-import { TZDate } from '@date-fns/tz';
-import { format } from 'date-fns';
+import { zonedText } from '@/calendar/dates';
 import { evaluateWeek } from '@/core/pipeline';
 import type { Breach, ProcessBreach, SteamBreach } from '@/core/schedule/breach';
 import { breachSentence, namesOf, type BreachSentence, type Clock } from '@/core/schedule/sentences';
@@ -35,4 +34,4 @@ export function judgeForFloor(week: Week, time: WeekTime): Verdict {
 export const weekClock =
   (time: WeekTime): Clock =>
   (minute) =>
-    format(new TZDate(instantOf(time, minute).getTime(), time.timeZone), 'EEE HH:mm');
+    zonedText(instantOf(time, minute), time.timeZone, 'EEE HH:mm');

@@ -1,5 +1,5 @@
-import { TZDate } from '@date-fns/tz';
-import { format } from 'date-fns';
+import { differenceInHours } from 'date-fns';
+import { zonedText } from '@/calendar/dates';
 import type { ActivityKind, Stage } from '@/core/plant/activity';
 
 const STAGE_WORDS: Readonly<Record<Stage, string>> = {
@@ -31,8 +31,8 @@ export function activityName(activity: {
 
 /** An instant by the plant's clock, "Tue 06:40"; with the date where it is six days or more from `near`. */
 export function dayTime(instant: Date, timeZone: string, near: Date): string {
-  const far = Math.abs(instant.getTime() - near.getTime()) >= 6 * 86_400_000;
-  return format(new TZDate(instant.getTime(), timeZone), far ? 'd MMM yyyy HH:mm' : 'EEE HH:mm');
+  const far = Math.abs(differenceInHours(instant, near)) >= 6 * 24;
+  return zonedText(instant, timeZone, far ? 'd MMM yyyy HH:mm' : 'EEE HH:mm');
 }
 
 /** "A", "A and B", "A, B and 3 more": at most `most` are named. */

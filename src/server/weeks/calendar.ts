@@ -1,7 +1,8 @@
 import type { UnitCalendar } from '@/core/plant/plant';
 import { mergeIntervals, type Interval } from '@/core/time/interval';
 import type { ShiftSpan } from '@/contracts/week';
-import { addDays, ceilMinuteOf, minuteOf, wallMinute, weekdayOf, type WeekTime } from './weekTime';
+import { daysAfter, weekdayOf } from '@/calendar/dates';
+import { ceilMinuteOf, minuteOf, wallMinute, type WeekTime } from './weekTime';
 
 /** A shift as the plant sets it; one that ends at or before its start runs past midnight. */
 export interface ShiftRow {
@@ -28,7 +29,7 @@ export interface ExceptionRow {
  * one may end after the week: a shift is never cut.
  */
 export function expandShifts(time: WeekTime, shifts: readonly ShiftRow[]): ShiftSpan[] {
-  const dates = Array.from({ length: 8 }, (_, day) => addDays(time.weekStart, day - 1));
+  const dates = Array.from({ length: 8 }, (_, day) => daysAfter(time.weekStart, day - 1));
   return dates
     .flatMap((date) => shifts.filter((shift) => runsOn(shift, date)).map((shift) => spanOf(time, shift, date)))
     .filter((span) => span.to > 0 && span.from < time.horizonMin && span.to > span.from)
@@ -92,7 +93,7 @@ const runsOn = (shift: ShiftRow, date: string): boolean => shift.days.some((day)
 function spanOf(time: WeekTime, shift: ShiftRow, date: string): ShiftSpan {
   const startsAt = minutesOfClock(shift.startsAt);
   const endsAt = minutesOfClock(shift.endsAt);
-  const lastDate = endsAt <= startsAt ? addDays(date, 1) : date;
+  const lastDate = endsAt <= startsAt ? daysAfter(date, 1) : date;
   return {
     shiftId: shift.id,
     name: shift.name,

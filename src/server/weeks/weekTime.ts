@@ -1,7 +1,6 @@
 import { TZDate } from '@date-fns/tz';
-
-const MINUTE_MS = 60_000;
-const DAY_MS = 86_400_000;
+import { addMinutes, differenceInMinutes, subMinutes } from 'date-fns';
+import { daysAfter, firstDayOfWeek, isDate, weekdayOf, zonedText } from '@/calendar/dates';
 
 /** A planning week on the clock: minutes are elapsed minutes since its first instant. */
 export interface WeekTime {
@@ -25,24 +24,23 @@ export interface WeekRule {
 /** The week that begins on a date, in a zone. */
 export function weekTimeOf(weekStart: string, timeZone: string): WeekTime {
   const firstInstant = wallInstant(weekStart, 0, timeZone);
-  const endInstant = wallInstant(addDays(weekStart, 7), 0, timeZone);
-  const horizonMin = Math.round((endInstant.getTime() - firstInstant.getTime()) / MINUTE_MS);
-  return { weekStart, timeZone, firstInstant, endInstant, horizonMin };
+  const endInstant = wallInstant(daysAfter(weekStart, 7), 0, timeZone);
+  return { weekStart, timeZone, firstInstant, endInstant, horizonMin: differenceInMinutes(endInstant, firstInstant) };
 }
 
 /** The elapsed minute of the week that an instant lies in; negative before the week. */
 export function minuteOf(time: WeekTime, instant: Date): number {
-  return Math.floor((instant.getTime() - time.firstInstant.getTime()) / MINUTE_MS);
+  return differenceInMinutes(instant, time.firstInstant, { roundingMethod: 'floor' });
 }
 
 /** The first elapsed minute of the week that begins at or after an instant. */
 export function ceilMinuteOf(time: WeekTime, instant: Date): number {
-  return Math.ceil((instant.getTime() - time.firstInstant.getTime()) / MINUTE_MS);
+  return differenceInMinutes(instant, time.firstInstant, { roundingMethod: 'ceil' });
 }
 
 /** The instant at which an elapsed minute of the week begins. */
 export function instantOf(time: WeekTime, minute: number): Date {
-  return new Date(time.firstInstant.getTime() + minute * MINUTE_MS);
+  return addMinutes(time.firstInstant, minute);
 }
 
 /** The elapsed minute at a wall-clock time of a date in the plant's zone. [min after midnight] */
@@ -52,31 +50,17 @@ export function wallMinute(time: WeekTime, date: string, minutesAfterMidnight: n
 
 /** The first day of the week that an instant lies in, in the plant's zone. */
 export function weekStartOf(instant: Date, rule: WeekRule): string {
-  const day = localDate(instant, rule.timeZone);
-  return addDays(day, -((weekdayOf(day) - (rule.weekStartsOn % 7) + 7) % 7));
+  return firstDayOfWeek(localDate(instant, rule.timeZone), rule.weekStartsOn);
 }
 
 /** True where the plant's weeks begin on that date; false for what is not a date. */
 export function isWeekStart(date: string, weekStartsOn: number): boolean {
-  if (!/^\d{4}-\d{2}-\d{2}$/.test(date)) return false;
-  const parsed = Date.parse(`${date}T00:00:00Z`);
-  return !Number.isNaN(parsed) && toDate(parsed) === date && weekdayOf(date) === weekStartsOn % 7;
+  return isDate(date) && weekdayOf(date) === weekStartsOn % 7;
 }
 
 /** The date in the plant's zone at an instant, such as 2026-12-01. */
 export function localDate(instant: Date, timeZone: string): string {
-  const local = new TZDate(instant.getTime(), timeZone);
-  return toDate(Date.UTC(local.getFullYear(), local.getMonth(), local.getDate()));
-}
-
-/** The date so many days later. */
-export function addDays(date: string, days: number): string {
-  return toDate(Date.parse(`${date}T00:00:00Z`) + days * DAY_MS);
-}
-
-/** The day of the week of a date: 0 is Sunday. */
-export function weekdayOf(date: string): number {
-  return new Date(`${date}T00:00:00Z`).getUTCDay();
+  return zonedText(instant, timeZone, 'yyyy-MM-dd');
 }
 
 /**
@@ -88,7 +72,7 @@ function wallInstant(date: string, minutesAfterMidnight: number, timeZone: strin
   const hours = Math.floor(minutesAfterMidnight / 60);
   const shown = new TZDate(year, month - 1, day, hours, minutesAfterMidnight % 60, timeZone);
   for (const earlierMin of [60, 30]) {
-    const earlier = new TZDate(shown.getTime() - earlierMin * MINUTE_MS, timeZone);
+    const earlier = subMinutes(shown, earlierMin);
     if (sameWall(earlier, shown)) return new Date(earlier.getTime());
   }
   return new Date(shown.getTime());
@@ -96,5 +80,3 @@ function wallInstant(date: string, minutesAfterMidnight: number, timeZone: strin
 
 const sameWall = (a: TZDate, b: TZDate): boolean =>
   a.getDate() === b.getDate() && a.getHours() === b.getHours() && a.getMinutes() === b.getMinutes();
-
-const toDate = (utcMs: number): string => new Date(utcMs).toISOString().slice(0, 10);

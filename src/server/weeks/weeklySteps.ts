@@ -1,5 +1,6 @@
 import type { Step, StepFunction } from '@/core/time/stepFunction';
-import { addDays, wallMinute, type WeekTime } from './weekTime';
+import { daysAfter } from '@/calendar/dates';
+import { wallMinute, type WeekTime } from './weekTime';
 
 /** A value from an hour of the week on; 0 is the first hour of the week, by the clocks of the plant's zone. */
 export interface HourStep {
@@ -16,7 +17,7 @@ export interface HourSpan {
 
 /** The elapsed minute at which an hour of the week begins by the clock, clock changes counted in. */
 export function minuteOfHour(time: WeekTime, hour: number): number {
-  return wallMinute(time, addDays(time.weekStart, Math.floor(hour / 24)), (hour % 24) * 60);
+  return wallMinute(time, daysAfter(time.weekStart, Math.floor(hour / 24)), (hour % 24) * 60);
 }
 
 /** A value by hour of the week over one week; before the first hour named it is 0. */

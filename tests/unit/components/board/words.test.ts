@@ -5,7 +5,7 @@ import { asDataBlock } from '@/components/board/dataBlock';
 import { minuteOfClock } from '@/components/board/SlipDialog';
 import { standingOf } from '@/components/board/standing';
 import { closedSpans, shiftSpells, ticksOf } from '@/components/board/ticks';
-import { isoWeek, weekWords } from '@/components/board/weekWords';
+import { weekWords } from '@/components/board/weekWords';
 import { blockLabel, markText, moveText, overWords } from '@/components/board/words';
 import { makeClock } from '@/components/time';
 import type { Breach } from '@/core/schedule/breach';
@@ -72,12 +72,6 @@ describe('shifts and closed time', () => {
 });
 
 describe('weekWords', () => {
-  it.each([
-    ['2026-11-30', 49],
-    ['2026-12-28', 53],
-    ['2027-01-04', 1],
-    ['2024-12-30', 1],
-  ])('should number the week of %s %d', (date, week) => expect(isoWeek(date)).toBe(week));
   it('should name the week, its span and its neighbours', () => {
     const dto = {
       weekStart: '2026-11-30',
