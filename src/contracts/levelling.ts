@@ -29,10 +29,12 @@ export interface LevellingProgressDto {
   readonly movedMin: number;
 }
 
+export type LevellingState = 'queued' | 'running' | 'proposed' | 'accepted' | 'discarded' | 'cancelled' | 'failed';
+
 export interface LevellingRunDto {
   readonly id: string;
   readonly planRevision: number;
-  readonly state: 'queued' | 'running' | 'proposed' | 'accepted' | 'discarded' | 'cancelled' | 'failed';
+  readonly state: LevellingState;
   readonly by: string;
   readonly seconds: number;
   readonly progress: readonly LevellingProgressDto[];

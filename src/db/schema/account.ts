@@ -1,8 +1,7 @@
 import { boolean, index, integer, jsonb, pgTable, primaryKey, text } from 'drizzle-orm/pg-core';
+import type { Role } from '../../contracts/account';
 import { createdAt, id, instant } from './columns';
 import { plants } from './plant';
-
-export type Role = 'planner' | 'utilitiesLead' | 'lineSupervisor' | 'qualityLead' | 'administrator';
 
 export const people = pgTable('people', {
   id: id(),

@@ -1,4 +1,5 @@
 import { doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
+import type { ProcessValuesDto } from '../../contracts/processData';
 import type { DutyModel } from '../../core/duty/model';
 import type { LimitUse, Phase, Stage } from '../../core/plant/activity';
 import type { UnitKind } from '../../core/plant/plant';
@@ -62,7 +63,7 @@ export const processData = pgTable(
     document: text('document').notNull(),
     issue: text('issue').notNull(),
     /** Process temperature [degC], process time [min], vent schedule, longest waits [min], initial temperature [degC]. */
-    values: jsonb('values').$type<ProcessValues>().notNull(),
+    values: jsonb('values').$type<ProcessValuesDto>().notNull(),
     enteredBy: text('entered_by').notNull(),
     createdAt: createdAt(),
     releasedBy: text('released_by'),
@@ -71,17 +72,6 @@ export const processData = pgTable(
   },
   (t) => [index('process_data_product').on(t.plantId, t.productId)],
 );
-
-export interface ProcessValues {
-  readonly processC: number;
-  readonly processMinutes: number;
-  readonly ventMinutes: number;
-  readonly ventToC: number;
-  readonly comeUpMinutes: number;
-  readonly leastInitialC: number;
-  readonly longestWaitSinceClosingMinutes: number;
-  readonly longestWaitForInitialTemperatureMinutes: number | null;
-}
 
 /** Inputs of a duty model (core/duty), by its name; `typed` holds a measured profile instead. */
 export const duties = pgTable(

@@ -1,4 +1,5 @@
 import { boolean, date, doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
+import type { LevellingProgressDto, LevellingState } from '../../contracts/levelling';
 import type { ActivityKind, Fixing, LinkEnd, LinkRule, Mode, Stage } from '../../core/plant/activity';
 import type { Change, EditKind } from '../../core/schedule/edit';
 import type { Week } from '../../core/schedule/week';
@@ -129,8 +130,6 @@ export const issues = pgTable(
   (t) => [unique('issues_number').on(t.planId, t.number)],
 );
 
-export type LevellingState = 'queued' | 'running' | 'proposed' | 'accepted' | 'discarded' | 'cancelled' | 'failed';
-
 /** A levelling run: its own row, heartbeat and cancel flag beside the queue's job. */
 export const levellingRuns = pgTable(
   'levelling_runs',
@@ -142,10 +141,7 @@ export const levellingRuns = pgTable(
     revision: integer('revision').notNull(),
     state: text('state').$type<LevellingState>().notNull(),
     options: jsonb('options').$type<Record<string, unknown>>().notNull(),
-    progress: jsonb('progress')
-      .$type<{ ms: number; overKg: number; lateMin: number; movedMin: number }[]>()
-      .notNull()
-      .default([]),
+    progress: jsonb('progress').$type<LevellingProgressDto[]>().notNull().default([]),
     proposal: jsonb('proposal').$type<unknown>(),
     failure: text('failure'),
     cancelAsked: boolean('cancel_asked').notNull().default(false),

@@ -1,7 +1,7 @@
 import { and, eq, inArray, sql } from 'drizzle-orm';
-import type { LevellingProgressDto } from '@/contracts/levelling';
+import type { LevellingProgressDto, LevellingState } from '@/contracts/levelling';
 import type { Db } from '@/db/client';
-import { levellingRuns, plans, type LevellingState } from '@/db/schema/index';
+import { levellingRuns, plans } from '@/db/schema/index';
 import type { RunRow } from './runDto';
 
 /** Heartbeats are told and judged by the database's clock: processes need not agree on the time to notice a dead one. */

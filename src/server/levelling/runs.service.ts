@@ -1,7 +1,6 @@
-import type { LevellingRunDto } from '@/contracts/levelling';
+import type { LevellingRunDto, LevellingState } from '@/contracts/levelling';
 import { fail, ok, type Result } from '@/core/result';
 import { db, type Db } from '@/db/client';
-import type { LevellingState } from '@/db/schema/index';
 import type { Authorized } from '../auth/permissions';
 import { now } from '../clock';
 import { notify } from '../events/notify';
