@@ -83,7 +83,8 @@ function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, c
   );
   const week = preview?.week ?? dto.week;
   const evaluation = preview?.evaluation ?? evaluator.evaluation;
-  const clock = useMemo(() => makeClock(dto), [dto.firstInstant, dto.timeZone]); // eslint-disable-line react-hooks/exhaustive-deps
+  const { firstInstant, timeZone } = dto;
+  const clock = useMemo(() => makeClock({ firstInstant, timeZone }), [firstInstant, timeZone]);
   const names = useMemo(() => namesOf(week), [week]);
   const drawn = useMemo(() => [...week.activities, ...evaluation.cleanings], [week, evaluation]);
   const byUnit = useMemo(() => drawnByUnit(drawn), [drawn]);
