@@ -37,8 +37,8 @@ export function LevelForm({ model }: { readonly model: BoardModel }) {
       }}
     >
       <p className="mb-3 text-sm text-ink-muted">
-        Looks for the smallest moves that bring the load under the limit. Fixed and running batches stay; process limits
-        are kept.
+        Looks for the smallest moves that bring the steam load under its limit. Fixed and running batches stay; process
+        limits are kept.
       </p>
       <SelectField label="Which starts may move" value={span} onChange={(e) => setSpan(e.target.value)}>
         {inWeek ? <option value="now">From now on</option> : null}

@@ -77,7 +77,7 @@ function Summary({ proposal, model }: Omit<Props, 'actions'>) {
       </table>
       <p className="mt-2 text-xs text-ink-muted">
         {movedBatches} batches moved by {groupDigits(meanMoveMin)} min on average. The thin line above the rows is the
-        load before.
+        steam load before.
       </p>
     </div>
   );

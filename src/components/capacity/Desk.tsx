@@ -141,8 +141,8 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
             </Notice>
           )}
           <p className="border-t border-rule pt-4 text-xs text-ink-muted">
-            The load is an estimate to plan by: gauges, instruments and interlocks decide. Work on boilers and steam is
-            for licensed people under local codes.
+            The steam load is an estimate to plan by: gauges, instruments and interlocks decide. Work on boilers and
+            steam is for licensed people under local codes.
           </p>
         </div>
       </aside>

@@ -23,7 +23,7 @@ function usualLimit(limit: Float64Array | null): number | null {
   return most?.[0] ?? null;
 }
 
-/** For how long the load stands how high: asked for, then loaded and drawn. */
+/** For how long the steam load stands how high: asked for, then loaded and drawn. */
 export function Duration({ loadKgPerH, limitKgPerH }: Props) {
   const [asked, setAsked] = useState(false);
   const [ref, width] = useWidth<HTMLDivElement>(600);
@@ -33,7 +33,7 @@ export function Duration({ loadKgPerH, limitKgPerH }: Props) {
   return (
     <section aria-labelledby="duration-heading">
       <h2 id="duration-heading" className="mb-1 text-md font-semibold">
-        For how long the load stands how high
+        For how long the steam load stands how high
       </h2>
       <p className="mb-3 min-h-5 text-sm text-ink-muted">
         {limit === null || above === null

@@ -10,7 +10,7 @@ export function Legend() {
       <Entry text="net export">
         <path d="M0 6H20" className="stroke-room" strokeWidth="1.25" strokeDasharray="5 4" />
       </Entry>
-      <Entry text="the plan’s load">
+      <Entry text="the plan’s steam load">
         <rect width="20" height="12" className="fill-steam opacity-45" />
       </Entry>
       <Entry text="users outside the plan">

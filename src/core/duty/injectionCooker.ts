@@ -37,7 +37,7 @@ export const INJECTION_COOKER_RANGES: InputRanges<InjectionCookerInput> = {
   endC: range('Temperature at the end', '°C', 1, 140),
   heatUpMin: range('Heat-up', 'min', 0.1, 480),
   heatingLossKW: range('Loss while heating', 'kW', 0, 200),
-  holdMin: range('Hold', 'min', 0, 1440),
+  holdMin: range('Holding at temperature', 'min', 0, 1440),
   holdLossKW: range('Loss while holding', 'kW', 0, 200),
   escapeFraction: range('Share escaping uncondensed', '', 0, 0.9),
   recipeRoomKg: range('Water left out of the recipe', 'kg', 0, 20_000),

@@ -31,7 +31,7 @@ export const JACKETED_KETTLE_RANGES: InputRanges<JacketedKettleInput> = {
   jacketAreaM2: range('Jacket surface', 'm²', 0.05, 50),
   heatingLossKW: range('Loss while heating', 'kW', 0, 200),
   boilOffKg: range('Water boiled off', 'kg', 0, 10_000),
-  holdMin: range('Hold', 'min', 0, 1440),
+  holdMin: range('Holding at temperature', 'min', 0, 1440),
   holdLossKW: range('Loss while holding', 'kW', 0, 200),
 };
 

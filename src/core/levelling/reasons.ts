@@ -82,7 +82,7 @@ export function reasonSentence(reason: MoveReason, words: ReasonWords): string {
     case 'cleaning':
       return `leaves the time to clean between it and ${other ?? 'its neighbour'}`;
     case 'wait':
-      return `keeps its wait to ${other ?? 'the stage it is linked to'}`;
+      return `keeps its wait to ${other ?? 'what it is linked to'}`;
     case 'shift':
       return `keeps within the shift${at}`;
     case 'boiler':
