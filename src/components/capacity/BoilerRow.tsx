@@ -1,26 +1,13 @@
-import type { KeyboardEvent, PointerEvent } from 'react';
+import type { PointerEvent } from 'react';
 import type { BoilerDto } from '@/contracts/capacity';
 import { valueAt } from '@/core/time/stepFunction';
-import type { Clock } from '../time';
-import type { Draft, Grip } from './draft';
+import type { DeskPart } from './deskPart';
 import { Grips } from './Grips';
-import { minuteAtX, segments, xOf, type DeskScale } from './scale';
-import type { DayOfWeek } from './wallTime';
+import { minuteAtX, segments, xOf } from './scale';
 
-interface Props {
+/** The scale runs across as that of the strip above; its height is this row's. */
+interface Props extends DeskPart {
   readonly boiler: BoilerDto;
-  /** Across as the strip above; its height is this row's. */
-  readonly scale: DeskScale;
-  readonly days: readonly DayOfWeek[];
-  readonly clock: Clock;
-  readonly nowMin: number;
-  readonly horizonMin: number;
-  readonly draft: Draft | null;
-  readonly canSet: boolean;
-  readonly onHold: (event: PointerEvent<Element>, start: Draft, grip: Grip) => void;
-  readonly onMove: (event: PointerEvent<Element>) => void;
-  readonly onRelease: (event: PointerEvent<Element>) => void;
-  readonly onKey: (event: KeyboardEvent, draft: Draft, grip: Grip) => void;
 }
 
 const PAD = 7;

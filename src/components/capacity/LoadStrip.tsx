@@ -1,27 +1,16 @@
-import { useMemo, type KeyboardEvent, type PointerEvent } from 'react';
+import { useMemo, type PointerEvent } from 'react';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { fromMinutes, valueAt, type StepFunction } from '@/core/time/stepFunction';
 import { Hatch } from '../ui/Hatch';
-import { groupDigits, rateText, type Clock } from '../time';
-import type { Draft, Grip } from './draft';
+import { groupDigits, rateText } from '../time';
+import type { Draft } from './draft';
+import type { DeskPart } from './deskPart';
 import { Grips } from './Grips';
 import { areaPath, linePath, minuteAtX, rateTicks, xOf, yOf, type DeskScale } from './scale';
-import type { DayOfWeek } from './wallTime';
 
-interface Props {
-  readonly scale: DeskScale;
-  readonly days: readonly DayOfWeek[];
-  readonly clock: Clock;
+interface Props extends DeskPart {
   readonly capacity: HeaderCapacity | undefined;
   readonly loadKgPerH: Float64Array;
-  readonly nowMin: number;
-  readonly horizonMin: number;
-  readonly draft: Draft | null;
-  readonly canSet: boolean;
-  readonly onHold: (event: PointerEvent<Element>, start: Draft, grip: Grip) => void;
-  readonly onMove: (event: PointerEvent<Element>) => void;
-  readonly onRelease: (event: PointerEvent<Element>) => void;
-  readonly onKey: (event: KeyboardEvent, draft: Draft, grip: Grip) => void;
 }
 
 const NONE: StepFunction = [];
