@@ -72,6 +72,24 @@ export function writeSpecificHeat(sheet: WorkingSheet, cp: SpecificHeat): number
   });
 }
 
+/** Writes down the specific heat of containers' contents, and their heat capacity [kJ/K]: n m c. */
+export function contentsCapacity(
+  sheet: WorkingSheet,
+  { containers, contentsKgEach }: { readonly containers: number; readonly contentsKgEach: number },
+  specific: SpecificHeat,
+): number {
+  const cp = writeSpecificHeat(sheet, specific);
+  return sheet.step({
+    symbol: 'C_p',
+    name: 'Heat capacity of the contents',
+    formula: 'n · m_c · c_p',
+    unit: 'kJ/K',
+    source: ENERGY_BALANCE,
+    inputs: { n: [containers, ''], m_c: [contentsKgEach, 'kg'], c_p: [cp, 'kJ/kgK'] },
+    value: ({ n, m_c, c_p }) => n * m_c * c_p,
+  });
+}
+
 /** Steam for an amount of heat [kg]: Q / dh. */
 export function steamForHeat(sheet: WorkingSheet, symbol: string, name: string, heatKJ: number, dh: number): number {
   return sheet.step({

@@ -17,7 +17,7 @@ import {
 } from './containerFlow';
 import { closeDuty, ESTIMATE_CAUTION, PROCESS_CAUTION, type Duty, type DutyPhase, type SteamSupply } from './duty';
 import { spell } from './heating';
-import { allOf, checkInputs, checkRising, plantDefaults, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, checkCold, checkRising, plantDefaults, range, type InputRanges } from './inputs';
 import { specificHeat, type SpecificHeat } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
 
@@ -168,10 +168,7 @@ function runRate(sheet: WorkingSheet, input: ContinuousCookerInput, at: Conditio
 const check = (input: ContinuousCookerInput) =>
   checkInputs(input, CONTINUOUS_COOKER_RANGES) ??
   checkContainerFlow(input, 'Process temperature', 'processC', input.processC) ??
-  checkRising([
-    ['Temperature when cold', 'coldC', input.coldC],
-    ['Process temperature', 'processC', input.processC],
-  ]) ??
+  checkCold(input.coldC, 'Process temperature', 'processC', input.processC) ??
   checkRising([
     ['Leg water before', 'legWaterInC', input.legWaterInC],
     ['Leg water when heated', 'legWaterOutC', input.legWaterOutC],

@@ -11,7 +11,16 @@ import { saturationAtTemperature, type Saturation } from '../steam/saturation';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type SteamSupply } from './duty';
 import { EXCHANGER_PRESSURE, exchangerCondensate, spell, type Condensate } from './heating';
-import { allOf, checkInputs, checkRising, DUTY_RANGE, plantDefaults, range, type InputRanges } from './inputs';
+import {
+  allOf,
+  checkInputs,
+  checkCold,
+  checkRising,
+  DUTY_RANGE,
+  plantDefaults,
+  range,
+  type InputRanges,
+} from './inputs';
 import { warmUpRate } from './machine';
 import { specificHeat, type SpecificHeat, type SpecificHeatBasis } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
@@ -141,10 +150,7 @@ const check = (input: EvaporatorInput) =>
     ['Feed temperature', 'feedC', input.feedC],
     ['Boiling temperature of the first effect', 'boilingC', input.boilingC],
   ]) ??
-  checkRising([
-    ['Temperature when cold', 'coldC', input.coldC],
-    ['Boiling temperature of the first effect', 'boilingC', input.boilingC],
-  ]);
+  checkCold(input.coldC, 'Boiling temperature of the first effect', 'boilingC', input.boilingC);
 
 /**
  * Steam of an evaporator's warm-up, run, and going round on water without boiling (losses only).

@@ -16,7 +16,7 @@ import {
 } from './containerFlow';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type SteamSupply } from './duty';
 import { checkOpenVessel, spell } from './heating';
-import { allOf, checkInputs, checkRising, plantDefaults, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, checkCold, checkRising, plantDefaults, range, type InputRanges } from './inputs';
 import { warmUpRate } from './machine';
 import { specificHeat, type SpecificHeat } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
@@ -97,10 +97,7 @@ function idleRate(sheet: WorkingSheet, input: ExhaustBoxInput, lossKW: number, d
 const check = (input: ExhaustBoxInput, { ambient }: SteamSupply) =>
   checkInputs(input, EXHAUST_BOX_RANGES) ??
   checkContainerFlow(input, 'Chamber temperature', 'chamberC', input.chamberC) ??
-  checkRising([
-    ['Temperature when cold', 'coldC', input.coldC],
-    ['Chamber temperature', 'chamberC', input.chamberC],
-  ]) ??
+  checkCold(input.coldC, 'Chamber temperature', 'chamberC', input.chamberC) ??
   checkRising([
     ['Room temperature', 'ambientC', input.ambientC],
     ['Chamber temperature', 'chamberC', input.chamberC],

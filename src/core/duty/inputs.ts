@@ -50,6 +50,13 @@ export function checkRising(ladder: Ladder): Problem | undefined {
   return undefined;
 }
 
+/** @returns DUTY-ORDER where what warms up from cold is cold above the temperature it comes to. [degC] */
+export const checkCold = (coldC: number, name: string, field: string, hotC: number): Problem | undefined =>
+  checkRising([
+    ['Temperature when cold', 'coldC', coldC],
+    [name, field, hotC],
+  ]);
+
 /** @returns the first problem in a list, checked as {@link checkInputs}, under `list.index.field`. */
 export function checkEach<Item extends object>(
   list: string,

@@ -13,7 +13,7 @@ import { closeDuty, ESTIMATE_CAUTION, PROCESS_CAUTION, type Duty, type DutyPhase
 import { condensateOf } from './heating';
 import { allOf } from './inputs';
 import { checkOverpressureRetort, type OverpressureRetortInput, type ProgrammeStep } from './overpressureRetortInput';
-import { specificHeat, type SpecificHeat } from './specificHeat';
+import { specificHeat } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
 
 const TITLES: Readonly<Record<OverpressureRetortInput['medium'], string>> = {
@@ -174,7 +174,7 @@ export function overpressureRetort(input: OverpressureRetortInput, supply: Steam
   if (!cp.ok) return cp;
   const sheet = openWorking(TITLES[input.medium], [PROCESS_CAUTION, ESTIMATE_CAUTION]);
   sheet.section('Retort and load');
-  const contentsKJPerK = contentsCapacity(sheet, input, cp.value);
+  const contentsKJPerK = balance.contentsCapacity(sheet, input, cp.value);
   const waterH = waterAtStart(sheet, input);
   if (!waterH.ok) return waterH;
   let standing: Standing = {
@@ -193,17 +193,4 @@ export function overpressureRetort(input: OverpressureRetortInput, supply: Steam
   }
   phases.push({ kind: 'cool', minutes: input.coolMin, steamKgPerH: 0 });
   return ok(closeDuty(sheet, phases));
-}
-
-function contentsCapacity(sheet: WorkingSheet, input: OverpressureRetortInput, specific: SpecificHeat): number {
-  const cp = balance.writeSpecificHeat(sheet, specific);
-  return sheet.step({
-    symbol: 'C_p',
-    name: 'Heat capacity of the contents',
-    formula: 'n · m_c · c_p',
-    unit: 'kJ/K',
-    source: balance.ENERGY_BALANCE,
-    inputs: { n: [input.containers, ''], m_c: [input.contentsKgEach, 'kg'], c_p: [cp, 'kJ/kgK'] },
-    value: ({ n, m_c, c_p }) => n * m_c * c_p,
-  });
 }

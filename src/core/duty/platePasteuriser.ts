@@ -8,7 +8,7 @@ import { liquidEnthalpy } from '../steam/fluid';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, PROCESS_CAUTION, type Duty, type SteamSupply } from './duty';
 import { EXCHANGER_PRESSURE, exchangerCondensate, spell, type Condensate } from './heating';
-import { allOf, checkInputs, checkRising, plantDefaults, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, checkCold, checkRising, plantDefaults, range, type InputRanges } from './inputs';
 import { warmUpRate } from './machine';
 import { specificHeat, type SpecificHeat, type SpecificHeatBasis } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
@@ -99,10 +99,7 @@ const check = (input: PlatePasteuriserInput) =>
     ['Product temperature in', 'inC', input.inC],
     ['Pasteurising temperature', 'pasteuriseC', input.pasteuriseC],
   ]) ??
-  checkRising([
-    ['Temperature when cold', 'coldC', input.coldC],
-    ['Pasteurising temperature', 'pasteuriseC', input.pasteuriseC],
-  ]);
+  checkCold(input.coldC, 'Pasteurising temperature', 'pasteuriseC', input.pasteuriseC);
 
 /**
  * Steam of a plate pasteuriser's start on water, run, and going round on water (losses only: the water keeps its heat

@@ -37,19 +37,6 @@ interface Lookups {
   readonly process: Saturation;
   readonly ventOpening: Opening;
 }
-
-function contentsCapacity(sheet: WorkingSheet, input: StillRetortInput, cp: number): number {
-  return sheet.step({
-    symbol: 'C_p',
-    name: 'Heat capacity of the contents',
-    formula: 'n · m_c · c_p',
-    unit: 'kJ/K',
-    source: balance.ENERGY_BALANCE,
-    inputs: { n: [input.containers, ''], m_c: [input.contentsKgEach, 'kg'], c_p: [cp, 'kJ/kgK'] },
-    value: ({ n, m_c, c_p }) => n * m_c * c_p,
-  });
-}
-
 function lookUp(input: StillRetortInput, { ambient }: SteamSupply): Result<Lookups> {
   const venting = toAbsolute(barGauge(input.ventPressureBarG), ambient);
   const ventArea = input.vents * boreAreaMm2(input.ventBoreMm);
@@ -69,7 +56,7 @@ function cycleOf(sheet: WorkingSheet, input: StillRetortInput, supply: SteamSupp
   const bleeding = openingAt(process.pressure, supply.ambient, bleederArea, 1);
   if (!bleeding.ok) return bleeding;
   sheet.section('Retort and load');
-  const contentsKJPerK = contentsCapacity(sheet, input, balance.writeSpecificHeat(sheet, cp));
+  const contentsKJPerK = balance.contentsCapacity(sheet, input, cp);
   const areaM2 = surfaceArea(sheet, input);
   const voidM3 = voidVolume(sheet, input);
   if (voidM3 < 0) {

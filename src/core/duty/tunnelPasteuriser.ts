@@ -10,7 +10,7 @@ import * as balance from './balance';
 import { checkContainerFlow, CONTAINER_FLOW_RANGES, containerHeat, type ContainerFlow } from './containerFlow';
 import { closeDuty, ESTIMATE_CAUTION, PROCESS_CAUTION, type Duty, type SteamSupply } from './duty';
 import { checkOpenVessel, condensateOf, EXCHANGER_PRESSURE, spell, type Condensate, type Heating } from './heating';
-import { allOf, checkInputs, checkRising, plantDefaults, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, checkCold, checkRising, plantDefaults, range, type InputRanges } from './inputs';
 import { warmUpRate } from './machine';
 import { specificHeat, type SpecificHeat } from './specificHeat';
 import { openWorking, type WorkingSheet } from './working';
@@ -101,10 +101,7 @@ function runRate(sheet: WorkingSheet, input: TunnelPasteuriserInput, at: Conditi
 const check = (input: TunnelPasteuriserInput, { ambient }: SteamSupply) =>
   checkInputs(input, TUNNEL_PASTEURISER_RANGES) ??
   checkContainerFlow(input, 'Spray temperature', 'sprayC', input.sprayC) ??
-  checkRising([
-    ['Temperature when cold', 'coldC', input.coldC],
-    ['Spray temperature', 'sprayC', input.sprayC],
-  ]) ??
+  checkCold(input.coldC, 'Spray temperature', 'sprayC', input.sprayC) ??
   checkRising([
     ['Fresh water temperature', 'makeUpC', input.makeUpC],
     ['Spray temperature', 'sprayC', input.sprayC],

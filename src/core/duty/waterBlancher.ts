@@ -10,7 +10,7 @@ import { saturationAtTemperature, type Saturation } from '../steam/saturation';
 import * as balance from './balance';
 import { closeDuty, ESTIMATE_CAUTION, type Duty, type SteamSupply } from './duty';
 import { checkOpenVessel, condensateOf, EXCHANGER_PRESSURE, spell, type Condensate, type Heating } from './heating';
-import { allOf, checkInputs, checkRising, plantDefaults, range, type InputRanges } from './inputs';
+import { allOf, checkInputs, checkCold, checkRising, plantDefaults, range, type InputRanges } from './inputs';
 import { warmUpRate } from './machine';
 import { specificHeat, type SpecificHeat, type SpecificHeatBasis } from './specificHeat';
 import { warnOfLittleSteam } from './steamPerKg';
@@ -162,10 +162,7 @@ const check = (input: WaterBlancherInput, { ambient }: SteamSupply) =>
     ['Product temperature out', 'productOutC', input.productOutC],
     ['Bath temperature', 'bathC', input.bathC],
   ]) ??
-  checkRising([
-    ['Temperature when cold', 'coldC', input.coldC],
-    ['Bath temperature', 'bathC', input.bathC],
-  ]) ??
+  checkCold(input.coldC, 'Bath temperature', 'bathC', input.bathC) ??
   checkRising([
     ['Fresh water temperature', 'makeUpC', input.makeUpC],
     ['Bath temperature', 'bathC', input.bathC],
