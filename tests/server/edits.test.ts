@@ -8,20 +8,20 @@ import { loadWeek } from '@/server/weeks/loadWeek';
 import { callApi, outcome } from '../support/api';
 import {
   activityIn,
+  everySession,
   openPlant,
   planContents,
   resetPlan,
-  sessionOf,
   setClock,
   WEEK,
   type Person,
 } from '../support/fixturePlant';
 
 let close: () => Promise<void>;
-const sessions = {} as Record<Person, string>;
+let sessions: Readonly<Record<Person, string>>;
 beforeAll(async () => {
   close = await openPlant();
-  for (const person of ['kim', 'ola', 'uli', 'sam', 'hal'] as const) sessions[person] = await sessionOf(person);
+  sessions = await everySession();
 });
 afterAll(() => close());
 beforeEach(async () => {

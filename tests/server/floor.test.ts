@@ -13,10 +13,10 @@ import { instantOf } from '@/server/weeks/weekTime';
 import { callApi, outcome } from '../support/api';
 import {
   activityIn,
+  everySession,
   openPlant,
   planContents,
   resetPlan,
-  sessionOf,
   setClock,
   time,
   WEEK,
@@ -25,10 +25,10 @@ import {
 
 let close: () => Promise<void>;
 let issueId: string;
-const sessions = {} as Record<Person, string>;
+let sessions: Readonly<Record<Person, string>>;
 beforeAll(async () => {
   close = await openPlant();
-  for (const person of ['kim', 'uli', 'sam', 'hal'] as const) sessions[person] = await sessionOf(person);
+  sessions = await everySession();
 });
 afterAll(() => close());
 beforeEach(async () => {

@@ -9,10 +9,10 @@ import { POST as ISSUE } from '@/pages/api/weeks/[week]/issues';
 import { loadWeek } from '@/server/weeks/loadWeek';
 import { callApi, outcome } from '../support/api';
 import {
+  everySession,
   openPlant,
   planContents,
   resetPlan,
-  sessionOf,
   setClock,
   setLimit,
   WEEK,
@@ -20,10 +20,10 @@ import {
 } from '../support/fixturePlant';
 
 let close: () => Promise<void>;
-const sessions = {} as Record<Person, string>;
+let sessions: Readonly<Record<Person, string>>;
 beforeAll(async () => {
   close = await openPlant();
-  for (const person of ['kim', 'ola', 'uli', 'sam', 'hal'] as const) sessions[person] = await sessionOf(person);
+  sessions = await everySession();
 });
 afterAll(() => close());
 beforeEach(async () => {

@@ -20,10 +20,10 @@ import { loadWeek } from '@/server/weeks/loadWeek';
 import { callApi, outcome } from '../support/api';
 import {
   activityIn,
+  everySession,
   openPlant,
   planContents,
   resetPlan,
-  sessionOf,
   setClock,
   WEEK,
   type Person,
@@ -33,10 +33,10 @@ import { startWorker, type WorkerProcess } from '../support/levellingWorker';
 
 let close: () => Promise<void>;
 let worker: WorkerProcess | undefined;
-const sessions = {} as Record<Person, string>;
+let sessions: Readonly<Record<Person, string>>;
 beforeAll(async () => {
   close = await openPlant();
-  for (const person of ['kim', 'ola', 'uli', 'sam', 'hal'] as const) sessions[person] = await sessionOf(person);
+  sessions = await everySession();
 });
 afterAll(async () => {
   await closeQueue();

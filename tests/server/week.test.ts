@@ -6,13 +6,13 @@ import { db } from '@/db/client';
 import { calendarExceptions, plans } from '@/db/schema/index';
 import { GET } from '@/pages/api/weeks/[week]/index';
 import { callApi, outcome } from '../support/api';
-import { activityIn, openPlant, resetPlan, sessionOf, setClock, WEEK, type Person } from '../support/fixturePlant';
+import { activityIn, everySession, openPlant, resetPlan, setClock, WEEK, type Person } from '../support/fixturePlant';
 
 let close: () => Promise<void>;
-const sessions = {} as Record<Person, string>;
+let sessions: Readonly<Record<Person, string>>;
 beforeAll(async () => {
   close = await openPlant();
-  for (const person of ['kim', 'sam', 'hal'] as const) sessions[person] = await sessionOf(person);
+  sessions = await everySession();
 });
 afterAll(() => close());
 beforeEach(async () => {

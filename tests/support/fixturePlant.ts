@@ -202,6 +202,13 @@ export async function sessionOf(person: Person): Promise<string> {
   return (await lucia.createSession(person, { plantId })).id;
 }
 
+/** A session of each person of the plant. */
+export async function everySession(): Promise<Readonly<Record<Person, string>>> {
+  const people = Object.keys(PEOPLE) as Person[];
+  const sessions = await Promise.all(people.map(async (person) => [person, await sessionOf(person)] as const));
+  return Object.fromEntries(sessions) as Record<Person, string>;
+}
+
 /** An activity of a loaded week. */
 export function activityIn(dto: WeekDto, id: string): Activity {
   const found = dto.week.activities.find((activity) => activity.id === id);

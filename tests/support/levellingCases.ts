@@ -1,6 +1,7 @@
 import type { Activity, Link, Mode, Phase } from '@/core/plant/activity';
 import type { Header, PlantModel, Unit, VentGroup } from '@/core/plant/plant';
 import type { Week } from '@/core/schedule/week';
+import { activity as plainActivity } from './builders';
 
 /** A phase: kind, minutes after the start, minutes, kg/h. */
 export const phase = (kind: Phase['kind'], offsetMin: number, minutes: number, steamKgPerH: number): Phase => ({
@@ -12,26 +13,7 @@ export const phase = (kind: Phase['kind'], offsetMin: number, minutes: number, s
 
 /** An activity with the parts that a case leaves open filled in. */
 export function activity(id: string, parts: Partial<Activity> & { readonly modes: readonly Mode[] }): Activity {
-  return {
-    id,
-    kind: 'stage',
-    stage: 'retort',
-    batchId: null,
-    code: id,
-    title: id,
-    productId: null,
-    familyId: null,
-    placement: null,
-    fixing: 'free',
-    occupiesUntil: 'end',
-    earliestStart: 0,
-    latestStart: null,
-    due: null,
-    weight: 1,
-    processData: null,
-    revision: 3,
-    ...parts,
-  };
+  return plainActivity(id, { stage: 'retort', code: id, title: id, placement: null, revision: 3, ...parts });
 }
 
 export const mode = (unitId: string, minutes: number, phases: readonly Phase[] = []): Mode => ({

@@ -1,5 +1,6 @@
 import type { Activity, Mode, Phase } from '@/core/plant/activity';
 import type { PlantModel, Unit } from '@/core/plant/plant';
+import { activity as plainActivity } from '../../../support/builders';
 
 /** An invented plant: two lines, three units. */
 export function unit(id: string, lineId: string, name = id): Unit {
@@ -33,25 +34,6 @@ export function mode(unitId: string, minutes: number, phases: readonly Phase[] =
 }
 
 export function activity(id: string, over: Partial<Activity> = {}): Activity {
-  return {
-    id,
-    kind: 'stage',
-    stage: 'retort',
-    batchId: null,
-    code: id.toUpperCase(),
-    title: `Batch ${id}`,
-    productId: null,
-    familyId: null,
-    modes: [mode('r1', 60), mode('r2', 60)],
-    placement: null,
-    fixing: 'free',
-    occupiesUntil: 'end',
-    earliestStart: 0,
-    latestStart: null,
-    due: null,
-    weight: 1,
-    processData: null,
-    revision: 1,
-    ...over,
-  };
+  const modes = [mode('r1', 60), mode('r2', 60)];
+  return plainActivity(id, { stage: 'retort', title: `Batch ${id}`, modes, placement: null, ...over });
 }
