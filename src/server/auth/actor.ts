@@ -1,14 +1,7 @@
-import type { MeDto, Role } from '@/contracts/account';
+import type { MeDto } from '@/contracts/account';
 
 /** The person signed in, at the plant of the session. */
-export interface Actor {
-  readonly personId: string;
-  readonly name: string;
-  readonly plantId: string;
-  readonly plantName: string;
-  readonly isDemo: boolean;
-  readonly roles: readonly Role[];
-}
+export type Actor = MeDto;
 
 /** What pages and islands may know of an actor. */
 export function meDto(actor: Actor): MeDto {
