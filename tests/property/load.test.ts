@@ -29,6 +29,7 @@ it('puts duty phases on whole minutes without losing or making steam', () => {
 
 it('a load changed step by step is the load built anew, to the bit', () => {
   const moves = fc.array(fc.tuple(fc.nat(), fc.option(placement)), { maxLength: 20 });
+  let moved = 0;
   fc.assert(
     fc.property(weeks, moves, (week, changes) => {
       const activities = [...week.activities];
@@ -36,11 +37,13 @@ it('a load changed step by step is the load built anew, to the bit', () => {
       for (const [pick, to] of activities.length > 0 ? changes : []) {
         const i = pick % activities.length;
         activities[i] = curve.move(activities[i] as (typeof activities)[number], to);
+        moved += 1;
       }
       expect(minutesOf(curve)).toEqual(minutesOf(loadOf({ ...week, activities })));
     }),
     { numRuns: 150 },
   );
+  expect(moved).toBeGreaterThan(150);
 });
 
 it('the load of the whole is the load of its parts, in any order', () => {
@@ -60,6 +63,7 @@ it('the load of the whole is the load of its parts, in any order', () => {
 });
 
 it('all steam drawn below a letdown is drawn above it', () => {
+  let drawing = 0;
   fc.assert(
     fc.property(weeks, (week) => {
       const curve = loadOf(week);
@@ -67,9 +71,11 @@ it('all steam drawn below a letdown is drawn above it', () => {
       expect(main?.every((value, t) => value >= (low?.[t] ?? NaN))).toBe(true);
       const onlyLow = loadOf({ ...week, activities: week.activities.filter((a) => a.placement?.unitId === 'low1') });
       expect(loadKg(curve.kgPerH('low'))).toBe(loadKg(onlyLow.kgPerH('low')));
+      if (onlyLow.activities.length > 0) drawing += 1;
     }),
     { numRuns: 100 },
   );
+  expect(drawing).toBeGreaterThan(10);
 });
 
 it('a step function holds what the minutes hold', () => {
@@ -83,6 +89,7 @@ it('a step function holds what the minutes hold', () => {
 });
 
 it('kg over, minutes over and steam to spare agree minute by minute', () => {
+  let minutesOver = 0;
   const values = fc.array(fc.integer({ min: 0, max: 3000 }), { maxLength: 80 });
   fc.assert(
     fc.property(values, fc.integer({ min: 0, max: 3000 }), (load, limitKgPerH) => {
@@ -90,6 +97,7 @@ it('kg over, minutes over and steam to spare agree minute by minute', () => {
       const over = overLimit(load, limit, null);
       const missing = [...steamToSpare(load, limit)].filter((spare) => spare < 0);
       expect(over.minutes).toBe(missing.length);
+      minutesOver += over.minutes;
       expect(over.kg).toBeCloseTo(
         missing.reduce((sum, spare) => sum - spare / 60, 0),
         6,
@@ -105,4 +113,5 @@ it('kg over, minutes over and steam to spare agree minute by minute', () => {
     }),
     { numRuns: 150 },
   );
+  expect(minutesOver).toBeGreaterThan(50);
 });

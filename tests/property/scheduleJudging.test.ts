@@ -27,6 +27,7 @@ const changesOf = (
       });
 
 it('trying placements out judges as judging the changed week, and leaves the week as it was', () => {
+  let changed = 0;
   fc.assert(
     fc.property(weeks, fc.array(tried, { minLength: 1, maxLength: 3 }), (week, rounds) => {
       const before = structuredClone(week);
@@ -34,6 +35,7 @@ it('trying placements out judges as judging the changed week, and leaves the wee
       const base = evaluateWeek(week);
       for (const picks of rounds) {
         const changes = changesOf(week, picks);
+        changed += changes.length;
         const preview = evaluator.preview(changes);
         const scratch = evaluateWeek(withPlacements(week, changes));
         expect(preview.evaluation.breaches).toEqual(scratch.breaches);
@@ -50,6 +52,7 @@ it('trying placements out judges as judging the changed week, and leaves the wee
     }),
     { numRuns: 80 },
   );
+  expect(changed).toBeGreaterThan(60);
 });
 
 it('the order in which activities, links and capacities are listed does not matter', () => {
@@ -99,16 +102,20 @@ it('moving the whole week moves its breaches', () => {
 });
 
 it('breach ids are one of a kind', () => {
+  let breaches = 0;
   fc.assert(
     fc.property(weeks, (week) => {
       const ids = evaluateWeek(week).breaches.map((breach) => breach.id);
       expect(new Set(ids).size).toBe(ids.length);
+      breaches += ids.length;
     }),
     { numRuns: 100 },
   );
+  expect(breaches).toBeGreaterThan(100);
 });
 
 it('an edit and its reverse leave the plan as it was; edits in a row are one edit', () => {
+  let changed = 0;
   fc.assert(
     fc.property(weeks, tried, tried, (week, first, second) => {
       const editFrom = (activities: Week['activities'], picks: typeof first) => {
@@ -125,13 +132,16 @@ it('an edit and its reverse leave the plan as it was; edits in a row are one edi
       expect(staleChanges(after, reverseEdit(one))).toEqual([]);
       expect(plans(applyEdit(after, reverseEdit(one)))).toEqual(plans(week.activities));
       const two = editFrom(after, second);
+      changed += one.changes.length + two.changes.length;
       expect(plans(applyEdit(week.activities, squashEdits([one, two])))).toEqual(plans(applyEdit(after, two)));
     }),
     { numRuns: 150 },
   );
+  expect(changed).toBeGreaterThan(100);
 });
 
 it('a slip moves free activities of the line only, all by the same minutes', () => {
+  let slipped = 0;
   fc.assert(
     fc.property(weeks, fc.nat(1440), fc.integer({ min: -60, max: 60 }), (week, from, by) => {
       const edit = slipLine(week, 'line2', from, by);
@@ -144,7 +154,9 @@ it('a slip moves free activities of the line only, all by the same minutes', () 
         return activity.placement?.unitId.startsWith('k') && activity.placement.start >= from;
       });
       expect(edit.changes).toHaveLength(by === 0 ? 0 : onLine.length);
+      slipped += edit.changes.length;
     }),
     { numRuns: 100 },
   );
+  expect(slipped).toBeGreaterThan(10);
 });
