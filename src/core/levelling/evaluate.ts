@@ -117,6 +117,7 @@ export function freeAt(problem: Problem, plan: Plan, index: number): number {
   return link ? Math.max(end, momentOf(problem, plan, link.to)) : end;
 }
 
+/** The minute of a link's end in a plan: start or end of its activity, and the offset. [min] */
 export function momentOf(problem: Problem, plan: Plan, end: ProblemLink['from']): number {
   const index = indexById(problem).get(end.activityId) as number;
   const activity = problem.activities[index] as ProblemActivity;

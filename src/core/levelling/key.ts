@@ -34,6 +34,7 @@ export interface Baseline {
   readonly late: Float64Array;
 }
 
+/** What a state passes and is late by before anything is moved. */
 export function baselineOf(state: State): Baseline {
   const late = Float64Array.from(state.model.activities, (a) => Math.max(0, state.endOf(a.index) - a.due));
   return { shared: limitsOver(state).shared, late };
@@ -54,6 +55,7 @@ export function limitsOver(state: State): { process: number; steamKg: number; sh
   return { process, steamKg, shared };
 }
 
+/** How good a state is, beside what stood at first. */
 export function keyOf(state: State, baseline: Baseline): Key {
   const { process, steamKg, shared } = limitsOver(state);
   let lateWorse = 0;
