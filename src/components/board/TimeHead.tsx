@@ -49,6 +49,7 @@ export const TimeHead = memo(function TimeHead({ ticks, shifts, scale, clock, no
         ))}
         {nowMin >= 0 && nowMin < scale.horizonMin ? (
           <span
+            data-testid="now"
             className="absolute top-[23px] z-[1] -translate-x-1/2 rounded-sm bg-ink px-1.5 text-2xs leading-4 font-medium text-paper"
             style={{ left: xOf(scale, nowMin) }}
           >
