@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import { reasonSentence } from '../../core/levelling/reasons';
 import type { LevelFigures, LevellingProposal, ProposedMove } from '../../core/levelling/proposal';
 import { Button } from '../ui/Button';
-import { groupDigits, kgText, rateText, spanText } from '../time';
+import { groupDigits, kgText, rateText, spanText, type Clock } from '../time';
 import type { BoardModel } from './useBoard';
 import type { BoardActions } from './useBoardActions';
 import { activityName, moveText } from './words';
@@ -100,7 +100,7 @@ function Unresolved({ proposal, model }: Omit<Props, 'actions'>) {
               <span className="hatch-over w-1 shrink-0 rounded-sm" aria-hidden="true" />
               <span className="text-xs">
                 <span className="block font-medium">
-                  {clock.dayTime(rest.from)} to {clock.time(rest.to)}, {kgText(rest.kg)}
+                  {clock.dayTime(rest.from)} to {endText(clock, rest.from, rest.to)}, {kgText(rest.kg)}
                 </span>
                 <span className="text-ink-muted">{rest.why}</span>
               </span>
@@ -110,6 +110,11 @@ function Unresolved({ proposal, model }: Omit<Props, 'actions'>) {
       </ul>
     </section>
   );
+}
+
+/** The end of a span, with its day where that is another than the day it begins on. */
+function endText(clock: Clock, from: number, to: number): string {
+  return clock.day(from) === clock.day(Math.max(from, to - 1)) ? clock.time(to) : clock.dayTime(to);
 }
 
 function Moves({
