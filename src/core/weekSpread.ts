@@ -71,19 +71,18 @@ export function createSpreadEvaluator(
   const loads = new SampledLoads(spreadHeader(week, headerId), keys, options);
   const standing = spreadDraws(week, headerId, spreads);
   for (const draw of standing) loads.pour(draw, 1);
-  loads.refresh();
+  loads.settle();
   return {
-    asItStands: loads.figures(),
+    asItStands: loads.tried(),
     preview: (changes) => {
       const tried = spreadDraws(withPlacements(week, changes), headerId, spreads);
       const { removed, added } = difference(standing, tried);
       for (const draw of removed) loads.pour(draw, -1);
       for (const draw of added) loads.pour(draw, 1);
-      loads.refresh();
-      const figures = loads.figures();
+      const figures = loads.tried();
       for (const draw of added) loads.pour(draw, -1);
       for (const draw of removed) loads.pour(draw, 1);
-      loads.refresh();
+      loads.restored();
       return figures;
     },
   };

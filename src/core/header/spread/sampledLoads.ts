@@ -27,7 +27,16 @@ export interface SampledSpread {
   readonly expectedOverMin: number | null;
 }
 
-/** The loads of all samples, minute by minute, and the figures drawn from them; figures follow at `refresh`. Every key draws its numbers here. */
+interface Figures {
+  /** Per sample. */
+  readonly overMinutes: Int32Array;
+  /** Samples over, per minute. */
+  readonly overCount: Int32Array;
+  readonly confident: Float64Array;
+  readonly expected: Float64Array;
+}
+
+/** The loads of all samples, minute by minute, and the figures drawn from them; Every key draws its numbers here. */
 export class SampledLoads {
   readonly #samples: number;
   readonly #horizonMin: number;
@@ -38,10 +47,7 @@ export class SampledLoads {
   readonly #numbers = new Map<string, Float64Array>();
   readonly #stale: Uint8Array;
   readonly #over: Uint8Array;
-  readonly #overMinutes: Int32Array;
-  readonly #overCount: Int32Array;
-  readonly #confident: Float64Array;
-  readonly #expected: Float64Array;
+  readonly #standing: Figures;
   readonly #scratch: Float64Array;
 
   constructor(header: SpreadHeader, keys: ReadonlySet<string>, options: SamplingOptions) {
@@ -54,10 +60,12 @@ export class SampledLoads {
     this.#kgPerH = new Float64Array(horizonMin * samples);
     this.#stale = new Uint8Array(horizonMin).fill(1);
     this.#over = new Uint8Array(horizonMin * samples);
-    this.#overMinutes = new Int32Array(samples);
-    this.#overCount = new Int32Array(horizonMin);
-    this.#confident = new Float64Array(horizonMin);
-    this.#expected = new Float64Array(horizonMin);
+    this.#standing = {
+      overMinutes: new Int32Array(samples),
+      overCount: new Int32Array(horizonMin),
+      confident: new Float64Array(horizonMin),
+      expected: new Float64Array(horizonMin),
+    };
     this.#scratch = new Float64Array(samples);
     header.baseKgPerH.forEach((kgPerH, t) => this.#kgPerH.fill(kgPerH, t * samples, (t + 1) * samples));
     for (const key of [...keys].sort()) {
@@ -84,13 +92,35 @@ export class SampledLoads {
     }
   }
 
-  /** Brings the figures of the minutes that were poured into up to date. */
-  refresh(): void {
-    for (let t = 0; t < this.#horizonMin; t++) if (this.#stale[t]) this.#refreshMinute(t);
+  /** Takes the loads as they are for the week as it stands. */
+  settle(): void {
+    this.#refreshStale(this.#standing, true);
+    this.restored();
+  }
+
+  /** Figures of the loads as they are; those of the week as it stands are kept. */
+  tried(): SampledSpread {
+    const { overMinutes, overCount, confident, expected } = this.#standing;
+    const tried = {
+      overMinutes: overMinutes.slice(),
+      overCount: overCount.slice(),
+      confident: confident.slice(),
+      expected: expected.slice(),
+    };
+    this.#refreshStale(tried, false);
+    return this.#spreadOf(tried);
+  }
+
+  /** To be called when the loads are those of the week as it stands again. */
+  restored(): void {
     this.#stale.fill(0);
   }
 
-  #refreshMinute(t: number): void {
+  #refreshStale(figures: Figures, keep: boolean): void {
+    for (let t = 0; t < this.#horizonMin; t++) if (this.#stale[t]) this.#refreshMinute(t, figures, keep);
+  }
+
+  #refreshMinute(t: number, figures: Figures, keep: boolean): void {
     const first = t * this.#samples;
     const bound = this.#limit ? (this.#limit[t] as number) : Infinity;
     let sum = 0;
@@ -98,28 +128,26 @@ export class SampledLoads {
     for (let k = 0; k < this.#samples; k++) {
       const kgPerH = this.#kgPerH[first + k] as number;
       const over = kgPerH - bound > OVER_TOLERANCE_KG_PER_H ? 1 : 0;
-      this.#overMinutes[k] = (this.#overMinutes[k] as number) + over - (this.#over[first + k] as number);
-      this.#over[first + k] = over;
+      figures.overMinutes[k] = (figures.overMinutes[k] as number) + over - (this.#over[first + k] as number);
+      if (keep) this.#over[first + k] = over;
       this.#scratch[k] = kgPerH;
       sum += kgPerH;
       overCount += over;
     }
-    this.#overCount[t] = overCount;
-    this.#expected[t] = sum / this.#samples;
-    this.#confident[t] = nthSmallest(this.#scratch, this.#rank);
+    figures.overCount[t] = overCount;
+    figures.expected[t] = sum / this.#samples;
+    figures.confident[t] = nthSmallest(this.#scratch, this.#rank);
   }
 
-  /** A copy of the figures. */
-  figures(): SampledSpread {
+  #spreadOf({ overMinutes, overCount, confident, expected }: Figures): SampledSpread {
     const samples = this.#samples;
-    const overWeeks = this.#overMinutes.reduce((count, minutes) => count + (minutes > 0 ? 1 : 0), 0);
-    const overMinutes = this.#overMinutes.reduce((sum, minutes) => sum + minutes, 0);
+    const overWeeks = overMinutes.reduce((count, minutes) => count + (minutes > 0 ? 1 : 0), 0);
     return {
-      overChance: this.#limit && Float64Array.from(this.#overCount, (count) => count / samples),
-      confidentKgPerH: this.#confident.slice(),
-      expectedKgPerH: this.#expected.slice(),
+      overChance: this.#limit && Float64Array.from(overCount, (count) => count / samples),
+      confidentKgPerH: confident,
+      expectedKgPerH: expected,
       anyOverChance: this.#limit && overWeeks / samples,
-      expectedOverMin: this.#limit && overMinutes / samples,
+      expectedOverMin: this.#limit && overMinutes.reduce((sum, minutes) => sum + minutes, 0) / samples,
     };
   }
 }
