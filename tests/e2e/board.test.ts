@@ -59,7 +59,7 @@ async function moveByKeys(page: Page, name: RegExp, key: 'ArrowRight' | 'ArrowLe
 }
 
 describe('the week board in the hand', () => {
-  it('places what is not yet placed with the mouse, keeps it, and takes it back', async () => {
+  it('places with the mouse what is not yet placed and keeps it; Escape lets it be', async () => {
     const { page } = petra;
     const before = await page.getByTestId('unplaced-count').innerText();
     const card = page.getByRole('button', { name: /^A\d+-1 .*not yet placed$/ }).first();
