@@ -34,6 +34,7 @@ export function MomentField({ label, minute, isEnd = false, days, clock, error, 
   };
   const settle = (): void => {
     const found = typed === null ? null : minuteOfWall(clock, day, typed);
+    if (typed !== null && found === null) return;
     if (found !== null) onChange(found);
     setTyped(null);
   };
@@ -54,6 +55,7 @@ export function MomentField({ label, minute, isEnd = false, days, clock, error, 
         autoComplete="off"
         value={typed ?? shown}
         error={wrong}
+        data-unread={wrong ? '' : undefined}
         onChange={(event) => changeTime(event.target.value)}
         onBlur={settle}
       />

@@ -50,6 +50,8 @@ export function SpanForm(props: Props) {
   const submit = (event: SubmitEvent): void => {
     event.preventDefault();
     setMissing(reason.trim() === '');
+    const unread = (event.currentTarget as HTMLFormElement).querySelector<HTMLElement>('[data-unread]');
+    if (unread) return unread.focus();
     if (reason.trim() !== '' && !isBackwards) props.onSave(reason.trim());
   };
 

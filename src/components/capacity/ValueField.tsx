@@ -25,10 +25,11 @@ function LimitValue({ draft, keptKgPerH, error, onChange }: Props) {
   const [typed, setTyped] = useState<string | null>(null);
   const taken = draft.value === null;
   const above = keptKgPerH !== null && draft.value !== null && draft.value > keptKgPerH + 1;
+  const wrong = typed !== null && !taken && rateOf(typed) === null ? 'A rate in kg/h, 0 or more.' : undefined;
   const change = (text: string): void => {
     setTyped(text);
-    const value = Number(text.replace(/[\s,]/g, ''));
-    if (text.trim() !== '' && Number.isFinite(value) && value >= 0) onChange(value);
+    const value = rateOf(text);
+    if (value !== null) onChange(value);
   };
   return (
     <div>
@@ -39,10 +40,11 @@ function LimitValue({ draft, keptKgPerH, error, onChange }: Props) {
         autoComplete="off"
         disabled={taken}
         value={typed ?? (draft.value === null ? '' : String(Math.round(draft.value)))}
-        error={error}
+        error={wrong ?? error}
+        data-unread={wrong ? '' : undefined}
         hint={above ? 'Above net export less the reserve: that will hold instead.' : undefined}
         onChange={(event) => change(event.target.value)}
-        onBlur={() => setTyped(null)}
+        onBlur={() => setTyped(wrong ? typed : null)}
       />
       <label className="flex min-h-7 items-center gap-2 text-sm">
         <input
@@ -55,6 +57,12 @@ function LimitValue({ draft, keptKgPerH, error, onChange }: Props) {
       </label>
     </div>
   );
+}
+
+/** A typed rate [kg/h]; null for what is no number or below 0. */
+function rateOf(text: string): number | null {
+  const value = Number(text.replace(/[\s,]/g, ''));
+  return text.trim() !== '' && Number.isFinite(value) && value >= 0 ? value : null;
 }
 
 function ShareValue({ draft, error, onChange }: Props) {
