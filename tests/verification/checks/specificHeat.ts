@@ -104,7 +104,7 @@ const inBtu = (
 
 const NONE: FoodComposition = { water: 0, protein: 0, fat: 0, carbohydrate: 0, fibre: 0, ash: 0 };
 const TEMPERATURES = [20, 60, 100, 121.1];
-/** At the four temperatures above. The linear term of fat is from memory: transcriptions differ. */
+/** At the four temperatures above. The linear term of fat is from memory: printed copies differ. */
 const COMPONENTS: readonly (readonly [keyof FoodComposition, Table['mark'], ...string[]])[] = [
   ['water', 'independent', '4.17657', '4.19045', '4.22184', '4.24546'],
   ['protein', 'independent', '2.03185', '2.07601', '2.11596', '2.13534'],
