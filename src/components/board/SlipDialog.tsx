@@ -87,7 +87,7 @@ export function SlipDialog({ lines, lineId, week, clock, nowMin, onClose, onSlip
           hint={
             count === 0
               ? 'Nothing free starts there.'
-              : `${count} start${count === 1 ? 's' : ''} move; fixed and running ones stay.`
+              : `${count === 1 ? '1 start moves' : `${count} starts move`}; fixed and running ones stay.`
           }
           error={valid ? undefined : 'Whole minutes, less than 0 for earlier.'}
         />
