@@ -31,6 +31,9 @@ export const EMISSION_FACTORS = {
   },
 } as const satisfies Record<string, EmissionFactor>;
 
+/** Names one of {@link EMISSION_FACTORS}. */
+export type FuelKey = keyof typeof EMISSION_FACTORS;
+
 export interface FuelInput {
   readonly heatToWaterKW: number;
   /** On the heating value that the factor is for. */

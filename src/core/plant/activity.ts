@@ -32,6 +32,27 @@ export interface Mode {
   readonly uses: readonly LimitUse[];
   /** The duty data that the phases were worked out from; null for typed profiles without one. */
   readonly dutyId: string | null;
+  /** What the unit draws before this run; left out: nothing. */
+  readonly between?: BetweenDraws;
+  /** Phases instead of `phases` after a short gap, ascending in gap: the machine is still warm. Left out: always cold. */
+  readonly warm?: readonly WarmPhases[];
+  /** Hours of heating up, then a steady draw: levelling and slipping leave it where the planner put it. */
+  readonly neverMoved?: boolean;
+}
+
+/** Draws of a machine that is kept hot, or shut and warmed up again, between the run before and this one. */
+export interface BetweenDraws {
+  readonly idleKgPerH: number;
+  /** Warming up, offsets from its own start; it ends when the run begins. */
+  readonly warmUp: readonly Phase[];
+  /** A gap of at most this is idled; a longer one is shut and warmed up again. [min] */
+  readonly idleUpToMin: number;
+}
+
+/** A run's phases where the unit has been free of the run before for at most so long. */
+export interface WarmPhases {
+  readonly gapUpToMin: number;
+  readonly phases: readonly Phase[];
 }
 
 /** Where and when. A cleaning that follows starts `cleanAfterMin` minutes after the unit is free. */

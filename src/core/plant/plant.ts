@@ -33,11 +33,30 @@ export interface VentGroup {
   readonly marginMinutes: number;
   /** The study that validated the numbers, or "common practice, no source". */
   readonly source: string;
+  /** The greatest load on the header that the study saw; null or left out: not said. [kg/h] */
+  readonly studyGreatestLoadKgPerH?: number | null;
+  /** The least header pressure that a vent was validated at; null or left out: not said. [bar g] */
+  readonly leastHeaderBarG?: number | null;
 }
 
 export type HeaderFeed =
   | { readonly kind: 'boilers' }
-  | { readonly kind: 'letdown'; readonly fromHeaderId: string; readonly greatestKgPerH: number };
+  | {
+      readonly kind: 'letdown';
+      readonly fromHeaderId: string;
+      readonly greatestKgPerH: number;
+      /** Below this the valve does not hold the pressure; left out: 0. */
+      readonly leastKgPerH?: number;
+    };
+
+/** Hot condensate of a higher header's users, collected at their pressure and flashed into a header. */
+export interface FlashFeed {
+  readonly fromHeaderId: string;
+  /** Share of those users' steam that comes back as condensate to the vessel, 0 to 1. */
+  readonly share: number;
+  /** Pressure that the condensate comes from. [bar g] */
+  readonly condensateBarG: number;
+}
 
 export interface Header {
   readonly id: string;
@@ -48,6 +67,23 @@ export interface Header {
   /** Superheat above saturation [K]; null where saturated. */
   readonly superheatK: number | null;
   readonly feed: HeaderFeed;
+  /** null or left out: no condensate flashes into it. */
+  readonly flash?: FlashFeed | null;
+}
+
+/** Hot water under pressure that carries steam over peaks. */
+export interface Accumulator {
+  readonly id: string;
+  readonly name: string;
+  readonly chargedFromHeaderId: string;
+  readonly feedsHeaderId: string;
+  readonly waterTonnes: number;
+  readonly highBarG: number;
+  readonly lowBarG: number;
+  readonly greatestChargeKgPerH: number;
+  readonly greatestDischargeKgPerH: number;
+  /** Share of what it can give up that is in store at the week's first instant, 0 to 1. */
+  readonly shareAtWeekStart: number;
 }
 
 /** Anything else that is limited across units: crates, cooling water, hoist, operators. */
@@ -68,6 +104,8 @@ export interface CleaningRule {
   /** Its own steam, from the first minute of the cleaning. */
   readonly phases: readonly Phase[];
   readonly uses: readonly LimitUse[];
+  /** The duty data that the phases were worked out from; null or left out: typed. */
+  readonly dutyId?: string | null;
 }
 
 /** Judging rules that the plant sets. */
@@ -78,6 +116,18 @@ export interface PlantRules {
   readonly reserveFraction: number;
   /** A step is too steep when the header would fall further than this. [bar] */
   readonly sagToleranceBar: number;
+  /** Practice rules in force, released by the quality lead; left out: none is set. */
+  readonly practice?: PracticeLimits;
+}
+
+/** Cleanliness as the plant's released practice rules have it; null: not set. [min] */
+export interface PracticeLimits {
+  /** A unit runs no longer than this between two full cleans. */
+  readonly greatestRunningMin: number | null;
+  /** A unit that has run is cleaned within this. */
+  readonly greatestStandingDirtyMin: number | null;
+  /** From the end of an allergen clean to the release of the unit. */
+  readonly allergenReleaseMin: number | null;
 }
 
 /** A header over the week. `limit: null` reads "not judged", never "fits". */
@@ -106,6 +156,8 @@ export interface PlantModel {
   readonly ventGroups: readonly VentGroup[];
   readonly headers: readonly Header[];
   readonly sharedLimits: readonly SharedLimit[];
+  /** Left out: none. */
+  readonly accumulators?: readonly Accumulator[];
   readonly cleaning: readonly CleaningRule[];
 }
 

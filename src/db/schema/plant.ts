@@ -1,5 +1,7 @@
 import { boolean, doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
-import type { HeaderFeed, UnitKind } from '../../core/plant/plant';
+import type { FuelKey } from '../../core/duty/fuel';
+import type { StartSpread } from '../../core/header/spread/startSpread';
+import type { FlashFeed, HeaderFeed, UnitKind } from '../../core/plant/plant';
 import { createdAt, id, instant } from './columns';
 
 export const plants = pgTable('plants', {
@@ -14,6 +16,10 @@ export const plants = pgTable('plants', {
   snapMinutes: integer('snap_minutes').notNull().default(5),
   reserveFraction: doublePrecision('reserve_fraction').notNull().default(0),
   sagToleranceBar: doublePrecision('sag_tolerance_bar').notNull().default(0.5),
+  /** Price of a kWh of fuel on the heating value of the boilers' factor; null: not said. */
+  fuelPricePerKWh: doublePrecision('fuel_price_per_kwh'),
+  /** Letters that stand before the cost, such as EUR. */
+  currency: text('currency').notNull().default('EUR'),
   createdAt: createdAt(),
 });
 
@@ -39,7 +45,13 @@ export const headers = pgTable(
     dryness: doublePrecision('dryness'),
     superheatK: doublePrecision('superheat_k'),
     feed: jsonb('feed').$type<HeaderFeed>().notNull(),
+    /** Hot condensate that flashes into this header; null: none. */
+    flash: jsonb('flash').$type<FlashFeed>(),
+    /** Opening, warming and draining the mains before the first user. [min, kg] */
+    warmUpMinutes: integer('warm_up_minutes').notNull().default(20),
+    warmUpKg: doublePrecision('warm_up_kg').notNull().default(0),
     position: integer('position').notNull(),
+    retiredAt: instant('retired_at'),
   },
   (t) => [index('headers_plant').on(t.plantId)],
 );
@@ -55,6 +67,10 @@ export const ventGroups = pgTable(
     steamOnMinutes: integer('steam_on_minutes').notNull().default(1),
     marginMinutes: integer('margin_minutes').notNull().default(0),
     source: text('source').notNull(),
+    /** The greatest load on the header that the study saw, and the least header pressure it vented at; null: not said. */
+    studyGreatestLoadKgPerH: doublePrecision('study_greatest_load_kg_per_h'),
+    leastHeaderBarG: doublePrecision('least_header_bar_g'),
+    retiredAt: instant('retired_at'),
   },
   (t) => [index('vent_groups_plant').on(t.plantId)],
 );
@@ -71,7 +87,12 @@ export const units = pgTable(
     kind: text('kind').$type<UnitKind>().notNull(),
     headerId: text('header_id').references(() => headers.id),
     ventGroupId: text('vent_group_id').references(() => ventGroups.id),
+    /** How early and late starts are; null: on time. */
+    startSpread: jsonb('start_spread').$type<StartSpread>(),
+    /** Where the spread is from: experience, or so many recorded starts. */
+    startSpreadSource: text('start_spread_source'),
     position: integer('position').notNull(),
+    retiredAt: instant('retired_at'),
   },
   (t) => [index('units_plant').on(t.plantId)],
 );
@@ -95,9 +116,45 @@ export const boilers = pgTable(
     turndown: doublePrecision('turndown').notNull(),
     greatestRiseFractionPerMin: doublePrecision('greatest_rise_fraction_per_min').notNull(),
     waterTonnes: doublePrecision('water_tonnes').notNull(),
+    /** Heat into the water over heat of the fuel, on the heating value of the factor. */
+    efficiency: doublePrecision('efficiency').notNull().default(0.8),
+    /** Key of an emission factor in core. */
+    fuel: text('fuel').$type<FuelKey>().notNull().default('naturalGasUs'),
+    /** Purge before the fire is lit, then to pressure: warm (in fire within half a day) or cold. [min] */
+    purgeMinutes: integer('purge_minutes').notNull().default(5),
+    warmReadyMinutes: integer('warm_ready_minutes').notNull().default(30),
+    coldReadyMinutes: integer('cold_ready_minutes').notNull().default(120),
     position: integer('position').notNull(),
+    retiredAt: instant('retired_at'),
   },
   (t) => [index('boilers_plant').on(t.plantId)],
+);
+
+/** Hot water under pressure that takes steam in from one header and gives it up to another. */
+export const accumulators = pgTable(
+  'accumulators',
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    chargedFromHeaderId: text('charged_from_header_id')
+      .notNull()
+      .references(() => headers.id),
+    feedsHeaderId: text('feeds_header_id')
+      .notNull()
+      .references(() => headers.id),
+    waterTonnes: doublePrecision('water_tonnes').notNull(),
+    /** Charged up to, discharged down to. */
+    highBarG: doublePrecision('high_bar_g').notNull(),
+    lowBarG: doublePrecision('low_bar_g').notNull(),
+    greatestChargeKgPerH: doublePrecision('greatest_charge_kg_per_h').notNull(),
+    greatestDischargeKgPerH: doublePrecision('greatest_discharge_kg_per_h').notNull(),
+    /** Share of what it can give up that is in store at the week's first instant. */
+    shareAtWeekStart: doublePrecision('share_at_week_start').notNull().default(0),
+    position: integer('position').notNull(),
+    retiredAt: instant('retired_at'),
+  },
+  (t) => [index('accumulators_plant').on(t.plantId)],
 );
 
 /**
@@ -170,6 +227,7 @@ export const sharedLimits = pgTable(
     name: text('name').notNull(),
     unit: text('unit').notNull(),
     capacity: jsonb('capacity').$type<{ fromHour: number; value: number }[]>().notNull(),
+    retiredAt: instant('retired_at'),
   },
   (t) => [index('shared_limits_plant').on(t.plantId)],
 );
