@@ -31,7 +31,13 @@ export const plantId = () =>
 
 export const lines = pgTable(
   'lines',
-  { id: id(), plantId: plantId(), name: text('name').notNull(), position: integer('position').notNull() },
+  {
+    id: id(),
+    plantId: plantId(),
+    name: text('name').notNull(),
+    position: integer('position').notNull(),
+    retiredAt: instant('retired_at'),
+  },
   (t) => [index('lines_plant').on(t.plantId)],
 );
 
@@ -70,6 +76,7 @@ export const ventGroups = pgTable(
     /** The greatest load on the header that the study saw, and the least header pressure it vented at; null: not said. */
     studyGreatestLoadKgPerH: doublePrecision('study_greatest_load_kg_per_h'),
     leastHeaderBarG: doublePrecision('least_header_bar_g'),
+    position: integer('position').notNull().default(0),
     retiredAt: instant('retired_at'),
   },
   (t) => [index('vent_groups_plant').on(t.plantId)],
@@ -214,6 +221,8 @@ export const baseLoads = pgTable(
     toHour: integer('to_hour').notNull(),
     kgPerH: doublePrecision('kg_per_h').notNull(),
     note: text('note').notNull(),
+    position: integer('position').notNull().default(0),
+    retiredAt: instant('retired_at'),
   },
   (t) => [index('base_loads_plant').on(t.plantId)],
 );
@@ -227,6 +236,7 @@ export const sharedLimits = pgTable(
     name: text('name').notNull(),
     unit: text('unit').notNull(),
     capacity: jsonb('capacity').$type<{ fromHour: number; value: number }[]>().notNull(),
+    position: integer('position').notNull().default(0),
     retiredAt: instant('retired_at'),
   },
   (t) => [index('shared_limits_plant').on(t.plantId)],
