@@ -31,3 +31,20 @@ export function headersOfUnit(plant: PlantModel, unitId: string): readonly strin
 export function countsOn(plant: PlantModel, unitId: string, headerId: string): boolean {
   return headersOfUnit(plant, unitId).includes(headerId);
 }
+
+const plainByPlant = new WeakMap<PlantModel, PlantModel>();
+
+/**
+ * The same plant without flash and accumulators: every draw counts in full on all headers above it. Levelling places on
+ * this one; both only ever take load off a header that is over, so what fits here fits on the plant as it is. The same
+ * value each time, and the plant itself where it has neither.
+ */
+export function plainNetwork(plant: PlantModel): PlantModel {
+  if (!plant.accumulators?.length && !plant.headers.some((header) => header.flash)) return plant;
+  let plain = plainByPlant.get(plant);
+  if (!plain) {
+    plain = { ...plant, headers: plant.headers.map((header) => ({ ...header, flash: null })), accumulators: [] };
+    plainByPlant.set(plant, plain);
+  }
+  return plain;
+}
