@@ -5,7 +5,10 @@ import { recordedSpread } from '@/core/header/spread/startSpread';
 import { seededRandom } from '@/core/levelling/random';
 import { evaluateWeek, withPlacements } from '@/core/pipeline';
 import { OVER_TOLERANCE_KG_PER_H } from '@/core/header/over';
-import { createSpreadEvaluator, spreadByConvolution } from '@/core/weekSpread';
+import { convolveSpread } from '@/core/header/spread/convolution';
+import { quantileFit } from '@/core/header/spread/quantileFit';
+import { spreadHeader } from '@/core/header/spread/spreadDraws';
+import { createSpreadEvaluator, spreadByConvolution, spreadDraws } from '@/core/weekSpread';
 import { placement, weeks } from '../support/arbitraryWeeks';
 import { activity, flatMode, week } from '../support/builders';
 import { uniform } from '../support/spreads';
@@ -60,6 +63,23 @@ it('chances lie between 0 and 1, least below greatest, and the sampler lies with
       }
     }),
     { numRuns: 20 },
+  );
+});
+
+it('sampled confident loads lie where the distribution passes the confidence', () => {
+  const [samples, confidence] = [400, 0.9];
+  fc.assert(
+    fc.property(weeks, spreads, fc.nat(), (source, spread, seed) => {
+      const options = { samples, random: seededRandom(seed), confidence };
+      const { confidentKgPerH } = createSpreadEvaluator(source, 'main', spread, options).asItStands;
+      const draws = spreadDraws(source, 'main', spread);
+      const fit = quantileFit(spreadHeader(source, 'main'), confidentKgPerH, confidence, (of) =>
+        convolveSpread(of, draws, { gridKgPerH: GRID.gridKgPerH, confidence }),
+      );
+      // Hoeffding: a share of 400 is 0.2 out with a chance of less than 2 exp(-32).
+      expect(fit.greatestMissedChance).toBeLessThan(0.2);
+    }),
+    { numRuns: 15 },
   );
 });
 
