@@ -8,5 +8,7 @@ declare namespace App {
     sessionId: string | null;
     /** As chosen and kept in a cookie; `system` follows the device. */
     theme: 'light' | 'dark' | 'system';
+    /** The person's choice, else the plant's. */
+    units: import('./core/quantity/display').UnitSystem;
   }
 }

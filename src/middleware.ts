@@ -23,7 +23,9 @@ const isJson = ({ headers }: Response): boolean => headers.get('content-type')?.
 async function identify(context: APIContext): Promise<string | null> {
   const cookies = context.request.headers.get('cookie') ?? '';
   const sessionId = lucia.readSessionCookie(cookies);
-  context.locals.theme = themeOf(cookies);
+  const kept = themeOf(cookies);
+  context.locals.theme = kept ?? 'system';
+  context.locals.units = 'si';
   context.locals.actor = null;
   context.locals.sessionId = null;
   if (!sessionId) return null;
@@ -31,6 +33,8 @@ async function identify(context: APIContext): Promise<string | null> {
   if (!found) return lucia.createBlankSessionCookie().serialize();
   context.locals.actor = found.actor;
   context.locals.sessionId = sessionId;
+  context.locals.theme = kept ?? found.choices.theme ?? 'system';
+  context.locals.units = found.choices.units;
   return found.session.fresh ? lucia.createSessionCookie(sessionId).serialize() : null;
 }
 

@@ -2,6 +2,7 @@ import {
   useId,
   type InputHTMLAttributes,
   type ReactNode,
+  type Ref,
   type SelectHTMLAttributes,
   type TextareaHTMLAttributes,
 } from 'react';
@@ -18,6 +19,8 @@ interface FrameProps {
   readonly hint?: ReactNode;
   readonly error?: string | undefined;
   readonly className?: string;
+  /** Stands beside the label, such as the mark of a default. */
+  readonly mark?: ReactNode;
 }
 
 interface Described {
@@ -33,6 +36,7 @@ function Frame({
   hint,
   error,
   className,
+  mark,
   children,
 }: FrameProps & { readonly children: (described: Described) => ReactNode }) {
   const id = useId();
@@ -44,9 +48,12 @@ function Frame({
   };
   return (
     <div className={className}>
-      <label htmlFor={id} className="label mb-1 block">
-        {label}
-      </label>
+      <div className="mb-1 flex items-baseline justify-between gap-2">
+        <label htmlFor={id} className="label">
+          {label}
+        </label>
+        {mark ? <span className="text-2xs text-ink-muted">{mark}</span> : null}
+      </div>
       <div className={`${BOX} ${error ? 'border-over' : 'border-edge'}`}>
         {children(described)}
         {unit ? <span className="pr-3 text-sm text-ink-muted">{unit}</span> : null}
@@ -64,10 +71,11 @@ export function Field({
   hint,
   error,
   className,
+  mark,
   ...input
-}: FrameProps & Omit<InputHTMLAttributes<HTMLInputElement>, 'className'>) {
+}: FrameProps & Omit<InputHTMLAttributes<HTMLInputElement>, 'className'> & { readonly ref?: Ref<HTMLInputElement> }) {
   return (
-    <Frame {...{ label, unit, hint, error, className }}>
+    <Frame {...{ label, unit, hint, error, className, mark }}>
       {(described) => <input {...described} {...input} className={INPUT} />}
     </Frame>
   );
@@ -79,7 +87,8 @@ export function TextField({
   error,
   className,
   ...area
-}: Omit<FrameProps, 'unit'> & Omit<TextareaHTMLAttributes<HTMLTextAreaElement>, 'className'>) {
+}: Omit<FrameProps, 'unit'> &
+  Omit<TextareaHTMLAttributes<HTMLTextAreaElement>, 'className'> & { readonly ref?: Ref<HTMLTextAreaElement> }) {
   return (
     <Frame {...{ label, hint, error, className }}>
       {(described) => <textarea rows={3} {...described} {...area} className={`${INPUT} resize-y`} />}
@@ -92,11 +101,13 @@ export function SelectField({
   hint,
   error,
   className,
+  mark,
   children,
   ...select
-}: Omit<FrameProps, 'unit'> & Omit<SelectHTMLAttributes<HTMLSelectElement>, 'className'>) {
+}: Omit<FrameProps, 'unit'> &
+  Omit<SelectHTMLAttributes<HTMLSelectElement>, 'className'> & { readonly ref?: Ref<HTMLSelectElement> }) {
   return (
-    <Frame {...{ label, hint, error, className }}>
+    <Frame {...{ label, hint, error, className, mark }}>
       {(described) => (
         <select {...described} {...select} className={`${INPUT} cursor-pointer [&>option]:bg-surface`}>
           {children}

@@ -3,6 +3,12 @@ import type { Role } from '../../contracts/account';
 import { createdAt, id, instant } from './columns';
 import { plants } from './plant';
 
+export interface PersonSettings {
+  theme?: 'light' | 'dark' | 'system';
+  /** Left out: as the plant shows them. */
+  units?: 'si' | 'us';
+}
+
 export const people = pgTable('people', {
   id: id(),
   email: text('email').notNull().unique(),
@@ -11,10 +17,7 @@ export const people = pgTable('people', {
   passwordHash: text('password_hash'),
   active: boolean('active').notNull().default(true),
   /** Theme and other choices of the person's own. */
-  settings: jsonb('settings')
-    .$type<{ theme?: 'light' | 'dark' | 'system'; units?: 'si' | 'us' }>()
-    .notNull()
-    .default({}),
+  settings: jsonb('settings').$type<PersonSettings>().notNull().default({}),
   lastSeenAt: instant('last_seen_at'),
   createdAt: createdAt(),
 });

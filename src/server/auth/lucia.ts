@@ -1,7 +1,7 @@
 import { DrizzlePostgreSQLAdapter } from '@lucia-auth/adapter-drizzle';
 import { Lucia, TimeSpan } from 'lucia';
 import { db } from '@/db/client';
-import { people, sessions } from '@/db/schema/index';
+import { people, sessions, type PersonSettings } from '@/db/schema/index';
 import { withHashedIds } from './hashedSessions';
 
 interface SessionAttributes {
@@ -11,6 +11,7 @@ interface SessionAttributes {
 interface UserAttributes {
   readonly name: string;
   readonly active: boolean;
+  readonly settings: PersonSettings;
 }
 
 declare module 'lucia' {
@@ -32,7 +33,7 @@ export function createLucia(appUrl: string | undefined): Lucia<SessionAttributes
         attributes: { secure: appUrl?.startsWith('https:') ?? false, sameSite: 'lax', path: '/' },
       },
       getSessionAttributes: ({ plantId }: SessionAttributes) => ({ plantId }),
-      getUserAttributes: ({ name, active }: UserAttributes) => ({ name, active }),
+      getUserAttributes: ({ name, active, settings }: UserAttributes) => ({ name, active, settings }),
     },
   );
 }

@@ -1,8 +1,9 @@
 import { eq } from 'drizzle-orm';
 import type { Session } from 'lucia';
+import type { UnitSystem } from '@/core/quantity/display';
 import { fail, ok, type Result } from '@/core/result';
 import { db } from '@/db/client';
-import { sessions } from '@/db/schema/index';
+import { sessions, type PersonSettings } from '@/db/schema/index';
 import { plantsOf, type PlantOfPerson } from '../people/people.repo';
 import { notifySessionEnd } from '../events/notify';
 import { notFound, type HttpProblem } from '../http/problem';
@@ -14,6 +15,13 @@ import type { Authorized } from './permissions';
 export interface SignedIn {
   readonly actor: Actor;
   readonly session: Session;
+  readonly choices: Choices;
+}
+
+/** What the person chose for the account, and what the plant shows where nothing was chosen. */
+export interface Choices {
+  readonly theme: 'light' | 'dark' | 'system' | null;
+  readonly units: UnitSystem;
 }
 
 interface Person {
@@ -24,7 +32,19 @@ interface Person {
 export const actorAt = (person: Person, plant: PlantOfPerson): Actor => ({
   personId: person.id,
   name: person.name,
-  ...plant,
+  plantId: plant.plantId,
+  plantName: plant.plantName,
+  isDemo: plant.isDemo,
+  roles: plant.roles,
+});
+
+/** The unit system of a stored choice. */
+export const unitSystemOf = (stored: 'si' | 'us'): UnitSystem => (stored === 'us' ? 'usCustomary' : 'si');
+
+/** The person's own choices over those of the plant. */
+export const choicesOf = (settings: PersonSettings, plant: PlantOfPerson): Choices => ({
+  theme: settings.theme ?? null,
+  units: unitSystemOf(settings.units ?? plant.displayUnits),
 });
 
 /** Who a session's cookie stands for; null where it has ended, or the person may no longer work at any plant. */
@@ -35,7 +55,7 @@ export async function signedIn(sessionId: string): Promise<SignedIn | null> {
   const plant = plants.find(({ plantId }) => plantId === session.plantId) ?? plants[0];
   if (!plant) return null;
   if (plant.plantId !== session.plantId) await setPlant(sessionId, plant.plantId);
-  return { actor: actorAt(user, plant), session };
+  return { actor: actorAt(user, plant), session, choices: choicesOf(user.settings, plant) };
 }
 
 async function setPlant(sessionId: string, plantId: string): Promise<void> {

@@ -1,4 +1,5 @@
 import type { SignInRequest } from '@/contracts/account';
+import type { Session } from 'lucia';
 import { fail, ok, type Result } from '@/core/result';
 import { now } from '../clock';
 import type { HttpProblem } from '../http/problem';
@@ -6,7 +7,8 @@ import { accountByEmail, plantsOf, touchPerson } from '../people/people.repo';
 import { lucia } from './lucia';
 import { verifyPassword } from './password';
 import { countTry, forgiveTry, type RateLimit } from './rateLimit';
-import { actorAt, endSession, type SignedIn } from './session';
+import type { Actor } from './actor';
+import { actorAt, endSession } from './session';
 
 export interface SignInAttempt extends SignInRequest {
   readonly address: string;
@@ -41,7 +43,9 @@ function limitsOf(email: string, address: string): RateLimit[] {
 }
 
 /** Opens a session for e-mail address and password. Unknown, inactive and wrong are one answer in one time. */
-export async function signIn(attempt: SignInAttempt): Promise<Result<SignedIn, HttpProblem>> {
+export async function signIn(
+  attempt: SignInAttempt,
+): Promise<Result<{ readonly actor: Actor; readonly session: Session }, HttpProblem>> {
   const limits = limitsOf(attempt.email, attempt.address);
   if (!(await countTry(limits))) return fail(tooMany);
   const person = await accountByEmail(attempt.email);

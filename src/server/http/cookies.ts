@@ -12,8 +12,8 @@ export function readCookie(header: string | null, name: string): string | null {
   return null;
 }
 
-/** The theme that a person chose on this device; `system` unless chosen. */
-export function themeOf(header: string | null): (typeof THEMES)[number] {
+/** The theme that a person chose on this device; null unless chosen. */
+export function themeOf(header: string | null): (typeof THEMES)[number] | null {
   const value = readCookie(header, THEME_COOKIE);
-  return THEMES.find((theme) => theme === value) ?? 'system';
+  return THEMES.find((theme) => theme === value) ?? null;
 }

@@ -8,6 +8,7 @@ export interface PlantOfPerson {
   readonly plantId: string;
   readonly plantName: string;
   readonly isDemo: boolean;
+  readonly displayUnits: 'si' | 'us';
   readonly roles: readonly Role[];
 }
 
@@ -23,7 +24,13 @@ export async function accountByEmail(email: string) {
 /** The plants at which a person holds roles, by name. */
 export async function plantsOf(personId: string): Promise<PlantOfPerson[]> {
   const rows = await db
-    .select({ plantId: plants.id, plantName: plants.name, isDemo: plants.isDemo, role: memberships.role })
+    .select({
+      plantId: plants.id,
+      plantName: plants.name,
+      isDemo: plants.isDemo,
+      displayUnits: plants.displayUnits,
+      role: memberships.role,
+    })
     .from(memberships)
     .innerJoin(plants, eq(memberships.plantId, plants.id))
     .where(eq(memberships.personId, personId))

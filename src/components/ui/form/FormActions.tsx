@@ -1,0 +1,41 @@
+import type { ReactNode } from 'react';
+import { Button } from '../Button';
+import { Notice } from '../Notice';
+import { useUnits } from '../units';
+import type { SaveState } from './useSave';
+
+interface Props {
+  readonly state: SaveState;
+  readonly save?: string;
+  readonly saved?: string;
+  readonly onCancel?: () => void;
+  readonly cancel?: string;
+  readonly disabled?: boolean;
+  /** Further actions, before saving. */
+  readonly children?: ReactNode;
+}
+
+/** The foot of a form: how the last save went, then leave and save. */
+export function FormActions(props: Props) {
+  const { state, save = 'Save', saved = 'Saved.', onCancel, cancel = 'Leave it', disabled = false, children } = props;
+  const units = useUnits();
+  return (
+    <div className="mt-2 border-t border-rule pt-4">
+      <div className="mb-3 min-h-6" aria-live="polite">
+        {state.kind === 'saved' ? <Notice look="good">{saved}</Notice> : null}
+        {state.kind === 'failed' ? (
+          <Notice look="over" live>
+            {units.sentence(state.message)}
+          </Notice>
+        ) : null}
+      </div>
+      <div className="flex flex-wrap items-center justify-end gap-2">
+        {children}
+        {onCancel ? <Button onClick={onCancel}>{cancel}</Button> : null}
+        <Button type="submit" look="main" busy={state.kind === 'saving'} disabled={disabled}>
+          {save}
+        </Button>
+      </div>
+    </div>
+  );
+}
