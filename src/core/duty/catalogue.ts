@@ -19,17 +19,23 @@ import type { DutyModel } from './model';
 
 type Worked = Exclude<DutyModel, { readonly model: 'typed' }>;
 
-export interface DutyModelEntry<Model extends Worked['model'] = Worked['model']> {
+/** Models that are worked out; a typed profile is not. */
+export type WorkedModel = Worked['model'];
+
+/** What a model is described by. */
+export type InputsOf<Model extends DutyModel['model']> = Extract<DutyModel, { readonly model: Model }>['inputs'];
+
+export interface DutyModelEntry<Model extends WorkedModel = WorkedModel> {
   readonly model: Model;
   readonly title: string;
   /** By field; a field without a range is a choice, a list or a composition. */
   readonly ranges: Readonly<Record<string, Range>>;
-  readonly defaults: InputDefaults<Extract<Worked, { readonly model: Model }>['inputs']>;
+  readonly defaults: InputDefaults<InputsOf<Model>>;
   /** Hours of heating up: once it runs it is neither moved nor stopped. */
   readonly neverMoved: boolean;
 }
 
-type Catalogue = { readonly [Model in Worked['model']]: DutyModelEntry<Model> };
+type Catalogue = { readonly [Model in WorkedModel]: DutyModelEntry<Model> };
 
 /** Every model that is worked out, in the order forms list them. A typed profile needs none of this. */
 export const DUTY_CATALOGUE: Catalogue = {

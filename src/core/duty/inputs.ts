@@ -28,12 +28,15 @@ function checkLength(itsRange: Range, value: number, field: string): Problem | u
 export function checkInputs<Input extends object>(input: Input, ranges: InputRanges<Input>): Problem | undefined {
   const values = input as Readonly<Record<string, unknown>>;
   for (const [field, itsRange] of Object.entries<Range>(ranges)) {
-    const value = Number(values[field] ?? Number.NaN);
-    const bad = checkRange(DUTY_RANGE, itsRange, value, field) ?? checkLength(itsRange, value, field);
+    const bad = checkNumber(itsRange, Number(values[field] ?? Number.NaN), field);
     if (bad) return bad;
   }
   return undefined;
 }
+
+/** @returns DUTY-RANGE for one number outside its range, or a length of time that is neither 0 nor 0.01 min or more. */
+export const checkNumber = (itsRange: Range, value: number, field: string): Problem | undefined =>
+  checkRange(DUTY_RANGE, itsRange, value, field) ?? checkLength(itsRange, value, field);
 
 /** Values that may only rise, each with its field. */
 export type Ladder = readonly (readonly [name: string, field: string, value: number])[];

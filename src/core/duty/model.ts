@@ -83,7 +83,8 @@ export function workOut(duty: DutyModel, supply: SteamSupply): Result<Duty> {
   }
 }
 
-const TYPED_RANGES: InputRanges<DutyPhase> = {
+/** Ranges of a typed phase. */
+export const TYPED_RANGES: InputRanges<DutyPhase> = {
   minutes: range('Length of a typed phase', 'min', 0.01, 10_080),
   steamKgPerH: range('Draw of a typed phase', 'kg/h', 0, 200_000),
 };

@@ -13,7 +13,7 @@ import {
   type Ladder,
 } from './inputs';
 import type { SpecificHeatBasis } from './specificHeat';
-import type { HoldPiece } from './stillRetortInput';
+import { HOLD_COUNT, HOLD_RANGES, type HoldPiece } from './stillRetortInput';
 
 /** A step of the temperature programme up to process temperature, with the contents' mean temperature at its end. */
 export interface ProgrammeStep {
@@ -79,17 +79,12 @@ export const OVERPRESSURE_RETORT_RANGES: InputRanges<OverpressureRetortInput> = 
   coolMin: range('Cooling', 'min', 0, 300),
 };
 
-const STEP_RANGES: InputRanges<ProgrammeStep> = {
+export const STEP_RANGES: InputRanges<ProgrammeStep> = {
   minutes: range('Step of the come-up', 'min', 0.1, 240),
   mediumEndC: range('Temperature at the end of a step', '°C', 30, 140),
   contentsEndC: range('Contents at the end of a step', '°C', 0, 140),
 };
-const HOLD_RANGES: InputRanges<HoldPiece> = {
-  minutes: range('Process time', 'min', 0.1, 600),
-  contentsEndC: range('Contents at the end of a piece of process time', '°C', 0, 140),
-};
-const STEP_COUNT = range('Steps of the come-up', '', 1, 20);
-const HOLD_COUNT = range('Pieces of process time', '', 1, 20);
+export const STEP_COUNT = range('Steps of the come-up', '', 1, 20);
 
 export const OVERPRESSURE_RETORT_DEFAULTS = plantDefaults<OverpressureRetortInput>({
   heating: 'direct',

@@ -43,7 +43,7 @@ const CHOI_OKOS: Readonly<Record<keyof FoodComposition, readonly [a: number, b: 
 };
 
 const fraction = (name: string) => range(name, '', 0, 1);
-const FRACTIONS: InputRanges<FoodComposition> = {
+export const FRACTIONS: InputRanges<FoodComposition> = {
   water: fraction('Water fraction'),
   protein: fraction('Protein fraction'),
   fat: fraction('Fat fraction'),
@@ -52,10 +52,13 @@ const FRACTIONS: InputRanges<FoodComposition> = {
   ash: fraction('Ash fraction'),
 };
 /** Published compositions are rounded; a larger gap is a slip, most often fibre counted twice. */
-const SUM = range('Sum of the fractions', '', 0.98, 1.02);
+export const FRACTIONS_SUM = range('Sum of the fractions', '', 0.98, 1.02);
+/** Of a figure that is given. */
+export const GIVEN_SPECIFIC_HEAT = range('Specific heat', 'kJ/kgK', 0.5, 4.5);
 const TEMPERATURE = range('Temperature for the specific heat', '°C', 0, 150);
 
-const COMPONENTS = Object.keys(CHOI_OKOS) as (keyof FoodComposition)[];
+/** The parts that a composition is given in. */
+export const COMPONENTS = Object.keys(CHOI_OKOS) as (keyof FoodComposition)[];
 
 /** cp [kJ/kgK] at t [degC]: sum of fraction times component, fractions not rescaled. Unchecked; 0 to 150 degC. */
 export function choiOkos(composition: FoodComposition, tC: number): number {
@@ -74,9 +77,13 @@ export function chen(water: number): number {
   return 4.19 - 2.3 * solids - 0.628 * solids ** 3;
 }
 
+/** Sum of the mass fractions; 1 but for rounding. */
+export const sumOfFractions = (composition: FoodComposition): number =>
+  COMPONENTS.reduce((total, name) => total + composition[name], 0);
+
 function fromComposition(composition: FoodComposition, tC: number): Result<SpecificHeat> {
-  const sum = COMPONENTS.reduce((total, name) => total + composition[name], 0);
-  const bad = checkInputs(composition, FRACTIONS) ?? checkRange(DUTY_RANGE, SUM, sum, 'composition');
+  const sum = sumOfFractions(composition);
+  const bad = checkInputs(composition, FRACTIONS) ?? checkRange(DUTY_RANGE, FRACTIONS_SUM, sum, 'composition');
   if (bad) return fail(bad);
   const fractions = COMPONENTS.map((name) => [`x_${name}`, [composition[name], '']] as const);
   return ok({
@@ -111,7 +118,7 @@ export function specificHeat(basis: SpecificHeatBasis, tC: number): Result<Speci
       return ok(fromWater(basis.water));
     }
     case 'given': {
-      const bad = checkRange(DUTY_RANGE, range('Specific heat', 'kJ/kgK', 0.5, 4.5), basis.kJPerKgK, 'kJPerKgK');
+      const bad = checkRange(DUTY_RANGE, GIVEN_SPECIFIC_HEAT, basis.kJPerKgK, 'kJPerKgK');
       if (bad) return fail(bad);
       if (basis.source.trim() === '') {
         return fail(problem('DUTY-SOURCE', 'Say where the specific heat comes from.', 'source'));

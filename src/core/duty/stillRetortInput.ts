@@ -102,12 +102,12 @@ export const STILL_RETORT_DEFAULTS = plantDefaults<StillRetortInput>({
   bleederBoreMm: 3.175,
 });
 
-const HOLD_RANGES: InputRanges<HoldPiece> = {
+export const HOLD_RANGES: InputRanges<HoldPiece> = {
   minutes: range('Process time', 'min', 0.1, 600),
   contentsEndC: range('Contents at the end of a piece of process time', '°C', 0, 140),
 };
-const VENT_STEPS = range('Whole steps of the vent', '', 1, 10);
-const HOLD_COUNT = range('Pieces of process time', '', 1, 20);
+export const VENT_STEPS = range('Whole steps of the vent', '', 1, 10);
+export const HOLD_COUNT = range('Pieces of process time', '', 1, 20);
 
 function checkHolds({ holds }: StillRetortInput): Problem | undefined {
   return checkRange(DUTY_RANGE, HOLD_COUNT, holds.length, 'holds') ?? checkEach('holds', holds, HOLD_RANGES);
