@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { StartSpread } from '../core/header/spread/startSpread';
 import type { Activity } from '../core/plant/activity';
 import type { Interval } from '../core/time/interval';
 import type { Week } from '../core/schedule/week';
@@ -109,6 +110,8 @@ export interface WeekDto {
   /** The newest run that is queued, running or proposed. */
   readonly levelling: LevellingRunDto | null;
   readonly families: readonly { readonly id: string; readonly name: string }[];
+  /** How early or late starts are, by unit id; a unit without one starts on time. */
+  readonly startSpreads: Readonly<Record<string, StartSpread>>;
 }
 
 /** POST /api/weeks/:weekStart/issues and .../agreements */

@@ -19,6 +19,8 @@ const WHO_MAY: Readonly<Record<string, readonly Role[] | 'anybody'>> = {
   'GET events': EVERYBODY,
   'GET process-data/index': EVERYBODY,
   'POST process-data/[id]/release': ['qualityLead'],
+  'GET units/spread': EVERYBODY,
+  'PUT units/[unit]/spread': ['planner', 'utilitiesLead', 'administrator'],
   'GET weeks/[week]/capacity': EVERYBODY,
   'POST weeks/[week]/firings': UTILITIES,
   'POST weeks/[week]/limits': UTILITIES,
@@ -49,7 +51,7 @@ beforeAll(openWorld);
 async function call(name: string, session?: string): Promise<{ status: number; text: string }> {
   const method = name.split(' ')[0] ?? 'GET';
   const controller = new AbortController();
-  const params = { week: 'none', run: 'none', id: 'none' };
+  const params = { week: 'none', run: 'none', id: 'none', unit: 'none' };
   const route = endpoints.get(name);
   if (!route) throw new Error(`no endpoint ${name}`);
   const response = await callApi(route, { method, params, signal: controller.signal, ...(session ? { session } : {}) });

@@ -89,6 +89,15 @@ export const DEMO_UNITS: readonly Unit[] = [
   unit('retort-6', 'c', 'Retort 6', 'retort', MAIN_HEADER, 'demo-vents-south'),
 ];
 
+/** How many minutes early and late starts are, by kind of unit; invented. */
+export const DEMO_START_SPREADS: Partial<Record<UnitKind, readonly [earlyMin: number, lateMin: number]>> = {
+  blancher: [5, 10],
+  kettle: [4, 12],
+  filler: [2, 6],
+  retort: [3, 8],
+};
+export const DEMO_START_SPREAD_SOURCE = 'experience, invented for the demo';
+
 export interface DemoBoiler {
   readonly id: string;
   readonly name: string;

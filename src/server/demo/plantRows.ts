@@ -1,4 +1,6 @@
 /** Rows of the demo plant that do not depend on the week. */
+import { uniformSpread, type StartSpread } from '../../core/header/spread/startSpread';
+import type { Unit } from '../../core/plant/plant';
 import type { Db } from '../../db/client';
 import * as schema from '../../db/schema';
 import { hashPassword } from '../auth/password';
@@ -35,8 +37,15 @@ async function insertUnits(db: Db): Promise<void> {
   await db.insert(schema.lines).values(inOrder(demo.DEMO_LINES));
   await db.insert(schema.headers).values(inOrder(demo.DEMO_HEADERS));
   await db.insert(schema.ventGroups).values(demo.DEMO_VENT_GROUPS.map((group) => ({ ...group, plantId })));
-  await db.insert(schema.units).values(inOrder(demo.DEMO_UNITS));
+  await db.insert(schema.units).values(inOrder(demo.DEMO_UNITS.map((unit) => ({ ...unit, ...spreadOf(unit) }))));
   await db.insert(schema.shifts).values(inOrder(demo.DEMO_SHIFTS).map((s) => ({ ...s, days: [...s.days] })));
+}
+
+function spreadOf({ kind }: Unit): { startSpread: StartSpread | null; startSpreadSource: string | null } {
+  const [early, late] = demo.DEMO_START_SPREADS[kind] ?? [0, 0];
+  const spread = uniformSpread(early, late);
+  if (!spread.ok || early + late === 0) return { startSpread: null, startSpreadSource: null };
+  return { startSpread: spread.value, startSpreadSource: demo.DEMO_START_SPREAD_SOURCE };
 }
 
 async function insertBoilerHouse(db: Db): Promise<void> {

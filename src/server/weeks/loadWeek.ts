@@ -10,6 +10,7 @@ import { reapLostRuns } from '../levelling/reaper';
 import { runDto } from '../levelling/runDto';
 import { namesOf } from '../people/people.repo';
 import { floorEventRows, latestIssueRow, liveRunRow, type ActivityRow } from '../plans/plans.repo';
+import { spreadsOf } from '../spread/spread.repo';
 import { findWeek, planOf, type FoundWeek } from './findWeek';
 import { familyRows } from './plantParts.repo';
 import { agreementDto, floorEventDto, issueDto, nameIn } from './weekDtos';
@@ -56,6 +57,7 @@ async function readWeek(tx: Db, found: FoundWeek): Promise<WeekDto> {
     agreement: agreement && agreementDto(agreement, names),
     levelling: run && runDto(run, names),
     families: await familyRows(tx, plant.id),
+    startSpreads: await spreadsOf(tx, plant.id),
   };
 }
 

@@ -22,6 +22,7 @@ const dto: WeekDto = {
   agreement: { revision: 10, at: '2026-12-01T07:00:00Z', by: 'U', comment: 'c' },
   levelling: null,
   families: [],
+  startSpreads: {},
 };
 const move = editOf('move', [changeOf(a, { placement: { unitId: 'r2', start: 150 } })]);
 const state = (over: Partial<ActivityState>): ActivityState => ({
