@@ -2,6 +2,7 @@ import { judgeHeader, type HeaderJudgement } from './header/judgement';
 import { overTogether } from './header/judge';
 import { loadOf, type LoadCurve } from './header/loadCurve';
 import { NOTHING_OVER, type OverMeasure } from './header/over';
+import { settleFlows, type HeaderFlows } from './header/settle';
 import { whoDraws as whoDrawsOf, type DrawShare } from './header/whoDraws';
 import type { Activity, Placement } from './plant/activity';
 import type { Breach } from './schedule/breach';
@@ -38,9 +39,11 @@ export function whoDraws(week: Week, headerId: string, minute: number): DrawShar
 
 function evaluatePrepared(judged: JudgedWeek, load: LoadCurve): WeekEvaluation {
   const { plant, capacities } = judged.week;
+  const flows = settleFlows(plant, capacities, load);
   const headers = plant.headers.map((header) => {
     const capacity = capacities.find((c) => c.headerId === header.id);
-    return judgeHeader(header, capacity, load.kgPerH(header.id).slice(), plant.rules);
+    const { loadKgPerH, ...beside } = flows.get(header.id) as HeaderFlows;
+    return judgeHeader(header, capacity, loadKgPerH, plant.rules, beside);
   });
   const late = judged.week.activities.map(lateMinutesOf);
   return {

@@ -1,19 +1,33 @@
 import type { Header, HeaderCapacity, PlantRules } from '../plant/plant';
-import { toMinutes, type StepFunction } from '../time/stepFunction';
+import { capacityMinutes, type CapacityMinutes } from './capacityMinutes';
+import type { Carried } from './carry';
+import { belowLeast, type LowFlow } from './lowFlow';
 import { overLimit, type OverSummary } from './over';
+import type { HeaderFlows } from './settle';
 import { leastSpare, loadFactor, loadKg, peakLoad, type LoadFactor, type RateAt } from './spare';
 import { steepSteps, type SteepStep } from './steps';
+
+export { capacityMinutes } from './capacityMinutes';
 
 /** A header over the week: load against limit. Arrays are per minute [kg/h] and to be read only. */
 export interface HeaderJudgement {
   readonly headerId: string;
+  /** What the header's own feed must bring, after flash steam and accumulators: what is judged. */
   readonly loadKgPerH: Float64Array;
+  /** What users, base load and lower headers take by mass alone: load + flash + discharge − charge. */
+  readonly drawnKgPerH: Float64Array;
+  /** Flash steam credited here and below; null: none. */
+  readonly flashKgPerH: Float64Array | null;
+  /** What accumulators carry here and below; null: none works on this header. */
+  readonly carried: Carried | null;
   /** null: not judged. */
   readonly limitKgPerH: Float64Array | null;
   /** null: not judged. */
   readonly over: OverSummary | null;
   /** Load over what the letdown that feeds the header can pass; null where boilers feed it. */
   readonly letdown: OverSummary | null;
+  /** Spans in which the letdown passes less than it can hold the pressure with: a note, not a breach. */
+  readonly letdownLow: readonly LowFlow[];
   readonly steps: readonly SteepStep[];
   readonly peak: RateAt;
   readonly leastSpare: RateAt | null;
@@ -21,48 +35,27 @@ export interface HeaderJudgement {
   readonly steamKg: number;
 }
 
-/** A header's capacity per minute. */
-export interface CapacityMinutes {
-  readonly horizonMin: number;
-  readonly limitKgPerH: Float64Array | null;
-  readonly exportKgPerH: Float64Array | null;
-  readonly greatestRiseKgPerHPerMin: Float64Array | null;
-  readonly storedKgPerBar: Float64Array | null;
-}
-
-const minutesByCapacity = new WeakMap<HeaderCapacity, CapacityMinutes>();
-
-/** A header's capacity per minute, worked out once for each capacity value. */
-export function capacityMinutes(capacity: HeaderCapacity, horizonMin: number): CapacityMinutes {
-  const cached = minutesByCapacity.get(capacity);
-  if (cached?.horizonMin === horizonMin) return cached;
-  const spread = (fn: StepFunction | null) => (fn === null ? null : toMinutes(fn, horizonMin));
-  const minutes = {
-    horizonMin,
-    limitKgPerH: spread(capacity.limitKgPerH),
-    exportKgPerH: spread(capacity.exportKgPerH),
-    greatestRiseKgPerHPerMin: spread(capacity.greatestRiseKgPerHPerMin),
-    storedKgPerBar: spread(capacity.storedKgPerBar),
-  };
-  minutesByCapacity.set(capacity, minutes);
-  return minutes;
-}
-
-/** Judges a load per minute [kg/h] against a header's capacity; without one, or without a limit, it is not judged. */
+/**
+ * Judges a load per minute [kg/h] against a header's capacity; without one, or without a limit, it is not judged. `beside`
+ * says what of the draw the header's own feed need not bring; left out: it brings all.
+ */
 export function judgeHeader(
   header: Header,
   capacity: HeaderCapacity | undefined,
   load: Float64Array,
   rules: PlantRules,
+  beside: Omit<HeaderFlows, 'loadKgPerH'> = { drawnKgPerH: load, flashKgPerH: null, carried: null },
 ): HeaderJudgement {
   const minutes = capacity && capacityMinutes(capacity, load.length);
   const limit = minutes?.limitKgPerH ?? null;
   return {
     headerId: header.id,
     loadKgPerH: load,
+    ...beside,
     limitKgPerH: limit,
     over: limit && overLimit(load, limit, minutes?.storedKgPerBar ?? null),
     letdown: letdownOver(header, load),
+    letdownLow: belowLeast(header, load),
     steps: minutes ? steps(load, minutes, rules) : [],
     peak: peakLoad(load),
     leastSpare: limit && leastSpare(load, limit),
