@@ -4,11 +4,11 @@ import { loadOf, type LoadCurve } from './header/loadCurve';
 import { NOTHING_OVER, type OverMeasure } from './header/over';
 import { settleFlows, type HeaderFlows } from './header/settle';
 import { whoDraws as whoDrawsOf, type DrawShare } from './header/whoDraws';
-import type { Activity, Placement } from './plant/activity';
+import { drawnMode, type Activity, type Placement } from './plant/activity';
 import type { Breach } from './schedule/breach';
 import { weekBreaches } from './schedule/breaches';
-import { drawnActivities } from './schedule/changeovers';
-import { prepareWeek, type JudgedWeek } from './schedule/judged';
+import { drawnActivities, prepareWeek, type JudgedWeek } from './schedule/judged';
+import type { GapDraw } from './schedule/gapDraws';
 import { lateMinutesOf } from './schedule/timeBreaches';
 import type { Week } from './schedule/week';
 
@@ -21,6 +21,10 @@ export interface WeekEvaluation {
   readonly breaches: readonly Breach[];
   /** Cleanings that follow from the sequence on the units. */
   readonly cleanings: readonly Activity[];
+  /** Idle spells and warm-ups between runs (kinds `idle` and `warmUp`), each with the id of the run that it is for. */
+  readonly gapDraws: readonly GapDraw[];
+  /** All that draws: the week's activities, after a short gap with a warm machine's phases, and what follows from them. */
+  readonly drawn: readonly Activity[];
   /** Minutes late, summed over the activities with a due time. */
   readonly lateMinutes: number;
   readonly lateActivities: number;
@@ -32,7 +36,7 @@ export function evaluateWeek(week: Week): WeekEvaluation {
   return evaluatePrepared(judged, loadOf({ ...week, activities: judged.drawn }));
 }
 
-/** Who draws on a header at a minute, greatest first, cleanings included. [kg/h] */
+/** Who draws on a header at a minute, greatest first, what follows from the sequence included. [kg/h] */
 export function whoDraws(week: Week, headerId: string, minute: number): DrawShare[] {
   return whoDrawsOf({ plant: week.plant, activities: drawnActivities(week) }, headerId, minute);
 }
@@ -51,6 +55,8 @@ function evaluatePrepared(judged: JudgedWeek, load: LoadCurve): WeekEvaluation {
     over: headers.length === 0 ? NOTHING_OVER : overTogether(headers.flatMap(({ over }) => (over ? [over] : []))),
     breaches: weekBreaches(judged, headers),
     cleanings: judged.changeovers.map(({ cleaning }) => cleaning),
+    gapDraws: judged.gapDraws,
+    drawn: judged.drawn,
     lateMinutes: late.reduce((sum, minutes) => sum + minutes, 0),
     lateActivities: late.filter((minutes) => minutes > 0).length,
   };
@@ -127,8 +133,7 @@ function replaceDraws(load: LoadCurve, from: readonly Activity[], to: readonly A
 
 function sameDraw(a: Activity, b: Activity): boolean {
   return (
-    a.modes[0]?.phases === b.modes[0]?.phases &&
-    a.modes.length === b.modes.length &&
+    drawnMode(a)?.phases === drawnMode(b)?.phases &&
     a.placement?.unitId === b.placement?.unitId &&
     a.placement?.start === b.placement?.start
   );

@@ -11,22 +11,26 @@ import { ON_TIME } from './header/spread/startSpread';
 import { countsOn } from './header/network';
 import { withPlacements, type TriedPlacement } from './pipeline';
 import type { Activity } from './plant/activity';
-import { changeovers, drawnActivities } from './schedule/changeovers';
+import { prepareWeek } from './schedule/judged';
 import type { Week } from './schedule/week';
 
 /**
  * What draws on a header, cleanings included. A batch is early or late as one: its activities share one random number,
  * and each deviates by the minutes that its own unit's spread has there (on units of equal spread by the same minutes).
- * A cleaning that follows a run goes with that run. What has started or is done stands where it is.
+ * A cleaning that follows a run goes with that run, an idle spell or a warm-up with the run that it is for. What has
+ * started or is done stands where it is.
  */
 export function spreadDraws(week: Week, headerId: string, spreads: UnitSpreads): SpreadDraw[] {
-  const found = changeovers(week);
+  const { changeovers, gapDraws, drawn } = prepareWeek(week);
   const runs = new Map(week.activities.map((activity) => [activity.id, activity]));
-  const before = new Map(found.map(({ cleaning, previousId }) => [cleaning.id, runs.get(previousId)]));
-  return drawnActivities(week, found).flatMap((activity) => {
+  const leaders = new Map([
+    ...changeovers.map(({ cleaning, previousId }) => [cleaning.id, runs.get(previousId)] as const),
+    ...gapDraws.map(({ activity, runId }) => [activity.id, runs.get(runId)] as const),
+  ]);
+  return drawn.flatMap((activity) => {
     const unitId = activity.placement?.unitId;
     if (unitId === undefined || !countsOn(week.plant, unitId, headerId)) return [];
-    const leader = before.get(activity.id) ?? activity;
+    const leader = leaders.get(activity.id) ?? activity;
     const known = leader.fixing === 'started' || leader.fixing === 'done';
     const spread = known ? ON_TIME : (spreads.get(unitId) ?? ON_TIME);
     return [{ activity, key: spreadKey(leader), spread, draws: plannedDraws(activity) }];

@@ -8,9 +8,10 @@ import { slipLine } from '@/core/schedule/hand';
 import { placement, weeks } from '../support/arbitraryWeeks';
 
 const plain = (week: Week) => {
-  const { headers, ...rest } = evaluateWeek(week);
+  const { headers, drawn, ...rest } = evaluateWeek(week);
   return {
     ...rest,
+    drawn: [...drawn].sort((a, b) => (a.id < b.id ? -1 : 1)),
     headers: headers.map((header) => ({ ...header, loadKgPerH: [...header.loadKgPerH], limitKgPerH: null })),
   };
 };
@@ -28,6 +29,7 @@ const changesOf = (
 
 it('trying placements out judges as judging the changed week, and leaves the week as it was', () => {
   let changed = 0;
+  const seen = { idle: 0, warmUp: 0, warm: 0 };
   fc.assert(
     fc.property(weeks, fc.array(tried, { minLength: 1, maxLength: 3 }), (week, rounds) => {
       const before = structuredClone(week);
@@ -39,6 +41,9 @@ it('trying placements out judges as judging the changed week, and leaves the wee
         const preview = evaluator.preview(changes);
         const scratch = evaluateWeek(withPlacements(week, changes));
         expect(preview.evaluation.breaches).toEqual(scratch.breaches);
+        expect(preview.evaluation.drawn).toEqual(scratch.drawn);
+        for (const { activity } of scratch.gapDraws) seen[activity.kind as 'idle' | 'warmUp'] += 1;
+        seen.warm += preview.week.activities.filter((one, at) => one !== preview.evaluation.drawn[at]).length;
         preview.evaluation.headers.forEach((header, i) => {
           expect([...header.loadKgPerH]).toEqual([...(scratch.headers[i]?.loadKgPerH ?? [])]);
         });
@@ -53,6 +58,7 @@ it('trying placements out judges as judging the changed week, and leaves the wee
     { numRuns: 80 },
   );
   expect(changed).toBeGreaterThan(60);
+  expect(Math.min(seen.idle, seen.warmUp, seen.warm)).toBeGreaterThan(10);
 });
 
 it('the order in which activities, links and capacities are listed does not matter', () => {

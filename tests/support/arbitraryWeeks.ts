@@ -39,15 +39,39 @@ export const dutyPhases: fc.Arbitrary<DutyPhase[]> = fc.array(
   { maxLength: 8 },
 );
 
+/** Idling and warming up between runs, and a machine still warm after a short gap; often neither. */
+const beforeRun: fc.Arbitrary<Pick<Mode, 'between' | 'warm'>> = fc
+  .tuple(fc.boolean(), fc.boolean(), rate, fc.integer({ min: 1, max: 30 }), fc.integer({ min: 0, max: 200 }))
+  .map(([idles, cools, kgPerH, minutes, idleUpToMin]) => ({
+    ...(idles
+      ? {
+          between: {
+            idleKgPerH: kgPerH / 8,
+            warmUp: [phase(0, minutes, kgPerH, 'warmUp'), phase(minutes, 2, kgPerH / 2, 'warmUp')],
+            idleUpToMin: Math.max(idleUpToMin, minutes + 1),
+          },
+        }
+      : {}),
+    ...(cools
+      ? {
+          warm: [
+            { gapUpToMin: 20, phases: [phase(0, 3, kgPerH / 4, 'vent'), phase(3, 2, kgPerH / 5)] },
+            { gapUpToMin: 90, phases: [phase(1, 4, kgPerH / 3, 'vent')] },
+          ],
+        }
+      : {}),
+  }));
+
 const mode: fc.Arbitrary<Omit<Mode, 'unitId'>> = fc
-  .array(fc.tuple(fc.integer({ min: 1, max: 40 }), rate, kind), { minLength: 1, maxLength: 5 })
-  .map((parts) => {
+  .tuple(fc.array(fc.tuple(fc.integer({ min: 1, max: 40 }), rate, kind), { minLength: 1, maxLength: 5 }), beforeRun)
+  .map(([parts, before]) => {
     let offset = 0;
     const phases = parts.map(([minutes, kgPerH, phaseKind]) => {
       offset += minutes;
       return phase(offset - minutes, minutes, kgPerH, phaseKind);
     });
     return {
+      ...before,
       minutes: offset,
       phases,
       uses: [{ limitId: 'crates', offsetMin: 0, minutes: offset, amount: 2 }],

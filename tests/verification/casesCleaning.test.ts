@@ -1,9 +1,13 @@
 import { describe, expect, it } from 'vitest';
+import { phasesKg } from '@/core/demand/activityLoad';
+import { workMode } from '@/core/demand/workMode';
 import { evaluateWeek } from '@/core/pipeline';
 import type { Activity } from '@/core/plant/activity';
 import type { CleaningRule } from '@/core/plant/plant';
 import { activity, flatMode, phase, plant, unit, week } from '../support/builders';
 import { cannery, canneryWeek, KETTLE_PEAK_KG_PER_H, retortLoad } from '../support/workedBatches';
+import { blancherA, supply } from './dutyWorkedBatches';
+import { valueOf } from './outcome';
 
 function rule(
   fromFamilyId: string,
@@ -119,13 +123,42 @@ describe('cleanliness is a state since the last full clean (invented plant)', ()
   });
 });
 
-describe('idling over a gap (invented plant)', () => {
-  it('25 minutes of idling draw 31.25 kg, less than re-warming with 37.949', () => {
-    const idle = activity('gap', {
-      kind: 'idle',
-      modes: [{ unitId: 'unit1', minutes: 25, phases: [phase(0, 25, 75.0049, 'idle')], uses: [], dutyId: null }],
+describe('a blancher between two runs (invented plant)', () => {
+  // Worked batch A: idling 75.005 kg/h, warming up again 37.949 kg in 15 min: even at 30.4 min.
+  const mode = valueOf(
+    workMode({
+      unitId: 'unit1',
+      dutyId: 'carrots',
+      duty: { model: 'steamBlancher', inputs: { ...blancherA, runMin: 60 } },
+      supply,
+      leadMin: 0,
+      afterMin: 0,
+      minutes: 0,
+      uses: [],
+    }),
+  );
+  const runs = (gapMin: number) =>
+    week({
+      activities: [
+        activity('first', { modes: [mode], placement: { unitId: 'unit1', start: 300 } }),
+        activity('second', { modes: [mode], placement: { unitId: 'unit1', start: 360 + gapMin } }),
+      ],
     });
-    const steamKg = evaluateWeek(week({ activities: [idle] })).headers[0]?.steamKg;
-    expect(steamKg).toBeCloseTo(31.25, 2);
+  const drawsBefore = (gapMin: number) =>
+    evaluateWeek(runs(gapMin))
+      .gapDraws.filter(({ runId }) => runId === 'second')
+      .map(({ activity: one }) => [one.kind, one.placement?.start, phasesKg(one.modes[0]?.phases ?? [])]);
+
+  it('idles through 25 minutes with 31.25 kg, and no warm-up is charged', () => {
+    expect(drawsBefore(25)).toEqual([['idle', 360, expect.closeTo(31.25, 2)]]);
+    const runKg = 2 * phasesKg(mode.phases);
+    // The first run of the week is warmed up before it.
+    expect(evaluateWeek(runs(25)).headers[0]?.steamKg).toBeCloseTo(37.949 + runKg + 31.252, 2);
+  });
+
+  it('idles up to the break-even of 30.4 minutes and warms up again after a longer gap', () => {
+    expect(drawsBefore(30)).toEqual([['idle', 360, expect.closeTo(37.5, 1)]]);
+    expect(drawsBefore(31)).toEqual([['warmUp', 376, expect.closeTo(37.949, 2)]]);
+    expect(drawsBefore(0)).toEqual([]);
   });
 });

@@ -1,5 +1,6 @@
 import type { Activity } from '../plant/activity';
 import type { CleaningRule, UnitKind } from '../plant/plant';
+import { derivedActivity } from './derived';
 import { occupationsByUnit, type Occupation } from './occupation';
 import type { Week } from './week';
 import { indexOf } from './weekIndex';
@@ -23,14 +24,11 @@ export interface Changeover {
  * allergen clean that the next family asks for after any family since the last allergen clean is asked for here, even
  * where others ran between. A stored cleaning between the runs of at least the rule's length stands in for it.
  */
-export function changeovers(week: Week): Changeover[] {
-  const byUnit = occupationsByUnit(week.activities, week);
-  return [...byUnit.keys()].sort().flatMap((unitId) => unitChangeovers(byUnit.get(unitId) as Occupation[], week));
-}
-
-/** The week with the cleanings that its sequence asks for among its activities: what draws steam and uses limits. */
-export function drawnActivities(week: Week, found: readonly Changeover[] = changeovers(week)): Activity[] {
-  return [...week.activities, ...found.map((changeover) => changeover.cleaning)];
+export function changeovers(
+  week: Week,
+  byUnit: ReadonlyMap<string, readonly Occupation[]> = occupationsByUnit(week.activities, week),
+): Changeover[] {
+  return [...byUnit.keys()].sort().flatMap((unitId) => unitChangeovers(byUnit.get(unitId) ?? [], week));
 }
 
 /** The rule for a change of family on a kind of unit; undefined where nothing has to be done. */
@@ -114,26 +112,19 @@ function changeover(
 
 const CLEANING_TITLES = { rinse: 'Rinse', wash: 'Wash', allergen: 'Allergen clean' } as const;
 
-function cleaningActivity(rule: CleaningRule, previous: Activity, unitId: string, start: number): Activity {
-  const { minutes, phases, uses } = rule;
-  return {
-    id: `clean:${previous.id}`,
+function cleaningActivity(rule: CleaningRule, run: Activity, unitId: string, start: number): Activity {
+  const { minutes, phases, uses, dutyId = null } = rule;
+  const title = `${CLEANING_TITLES[rule.kind]} after ${run.code}`;
+  return derivedActivity({
+    id: `clean:${run.id}`,
     kind: 'cleaning',
-    stage: null,
-    batchId: null,
-    code: previous.code,
-    title: `${CLEANING_TITLES[rule.kind]} after ${previous.code}`,
-    productId: null,
-    familyId: null,
-    modes: [{ unitId, minutes, phases, uses, dutyId: null }],
-    placement: { unitId, start },
-    fixing: 'free',
-    occupiesUntil: 'end',
-    earliestStart: 0,
-    latestStart: null,
-    due: null,
-    weight: 1,
-    processData: null,
-    revision: 0,
-  };
+    run,
+    title,
+    unitId,
+    start,
+    minutes,
+    phases,
+    uses,
+    dutyId,
+  });
 }

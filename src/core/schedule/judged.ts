@@ -1,5 +1,6 @@
 import type { Activity } from '../plant/activity';
-import { changeovers, drawnActivities, type Changeover } from './changeovers';
+import { changeovers, type Changeover } from './changeovers';
+import { gapDraws, runGaps, warmRuns, type GapDraw } from './gapDraws';
 import { occupationsByUnit, type Occupation } from './occupation';
 import type { Week } from './week';
 
@@ -7,19 +8,31 @@ import type { Week } from './week';
 export interface JudgedWeek {
   readonly week: Week;
   readonly changeovers: readonly Changeover[];
-  /** Stored activities and the cleanings that follow from the sequence. */
+  /** Idle spells and warm-ups between the runs. */
+  readonly gapDraws: readonly GapDraw[];
+  /**
+   * What draws steam and uses limits: stored activities, those after a short gap with the phases of a warm machine, and
+   * the cleanings, idle spells and warm-ups that follow from the sequence.
+   */
   readonly drawn: readonly Activity[];
-  /** Occupations of the stored activities. */
+  /** Occupations of the stored activities: what follows from a run occupies nothing. */
   readonly occupations: ReadonlyMap<string, readonly Occupation[]>;
 }
 
-/** Works out the cleanings and occupations of a week. */
+/** Works out what follows from a week's sequence on the units. */
 export function prepareWeek(week: Week): JudgedWeek {
-  const found = changeovers(week);
-  return {
-    week,
-    changeovers: found,
-    drawn: drawnActivities(week, found),
-    occupations: occupationsByUnit(week.activities, week),
-  };
+  const occupations = occupationsByUnit(week.activities, week);
+  const found = changeovers(week, occupations);
+  const gaps = runGaps(week, occupations, found);
+  const between = gapDraws(gaps);
+  const warm = warmRuns(gaps);
+  const drawn = [
+    ...week.activities.map((activity) => warm.get(activity.id) ?? activity),
+    ...found.map(({ cleaning }) => cleaning),
+    ...between.map(({ activity }) => activity),
+  ];
+  return { week, changeovers: found, gapDraws: between, drawn, occupations };
 }
+
+/** A week's activities with what follows from its sequence: what draws steam and uses limits. */
+export const drawnActivities = (week: Week): readonly Activity[] => prepareWeek(week).drawn;

@@ -1,6 +1,7 @@
 import { drawnMode } from '../plant/activity';
+import { sayingIn, type Saying } from '../quantity/saying';
 import type { Breach, ProcessBreach, SharedBreach, SteamBreach, TimeBreach } from './breach';
-import { drawnActivities } from './changeovers';
+import { drawnActivities } from './judged';
 import type { Week } from './week';
 
 /** A breach in the words of the floor. */
@@ -9,8 +10,9 @@ export interface BreachSentence {
   readonly detail: string;
 }
 
-/** Names as people say them; an unknown id is its own name. */
+/** Names and figures as people say them; an unknown id is its own name. */
 export interface Names {
+  readonly say: Saying;
   /** Code and title of an activity. */
   activity(activityId: string): string;
   /** The unit that an activity is placed on. */
@@ -24,8 +26,8 @@ export interface Names {
 /** A minute of the week as people write it: "06:40", with the day where it is needed. */
 export type Clock = (minute: number) => string;
 
-/** The names that a week's breaches need. */
-export function namesOf(week: Week): Names {
+/** The names that a week's breaches need; figures in SI units unless said otherwise. */
+export function namesOf(week: Week, say: Saying = sayingIn('si')): Names {
   const drawn = new Map(drawnActivities(week).map((activity) => [activity.id, activity]));
   const named = (items: readonly { readonly id: string; readonly name: string }[]) => {
     const names = new Map(items.map((item) => [item.id, item.name]));
@@ -34,6 +36,7 @@ export function namesOf(week: Week): Names {
   const unit = named(week.plant.units);
   const limits = new Map(week.plant.sharedLimits.map((limit) => [limit.id, limit]));
   return {
+    say,
     unit,
     header: named(week.plant.headers),
     ventGroup: named(week.plant.ventGroups),
@@ -50,7 +53,7 @@ export function namesOf(week: Week): Names {
   };
 }
 
-/** What a breach is, in a line, and what it concerns. Rates are rounded to 10 kg/h. */
+/** What a breach is, in a line, and what it concerns. */
 export function breachSentence(breach: Breach, names: Names, clock: Clock): BreachSentence {
   switch (breach.class) {
     case 'steam':
@@ -62,12 +65,6 @@ export function breachSentence(breach: Breach, names: Names, clock: Clock): Brea
     case 'time':
       return timeSentence(breach, names, clock);
   }
-}
-
-/** A rate on a screen: to 10 kg/h, a space between thousands; what is over stays at least 10. */
-export function rateText(kgPerH: number): string {
-  const rounded = Math.max(kgPerH > 0 ? 10 : 0, Math.round(kgPerH / 10) * 10);
-  return `${String(rounded).replace(/\B(?=(\d{3})+$)/g, ' ')} kg/h`;
 }
 
 /** "A", "A and B", "A, B and C". */
@@ -89,22 +86,23 @@ function steamSentence(breach: SteamBreach, names: Names, clock: Clock): BreachS
   const who =
     units.length === 0 ? 'Only the base load draws' : `${listed(units)} ${units.length === 1 ? 'draws' : 'draw'} most`;
   const header = names.header(breach.headerId);
-  const sag = breach.sagBar === null ? '' : `; the pressure would fall by about ${breach.sagBar.toFixed(1)} bar`;
-  const kg = `${Math.max(1, Math.round(breach.kg))} kg`;
+  const sag =
+    breach.sagBar === null ? '' : `; the pressure would fall by about ${names.say.pressureFall(breach.sagBar)}`;
+  const kg = names.say.mass(breach.kg);
   switch (breach.code) {
     case 'overLimit':
       return {
-        title: `Over the steam limit by ${rateText(breach.overKgPerH)}, ${span}`,
+        title: `Over the steam limit by ${names.say.rate(breach.overKgPerH)}, ${span}`,
         detail: `${who}. ${header}: ${kg} missing${sag}.`,
       };
     case 'letdownOver':
       return {
-        title: `More than the letdown can pass by ${rateText(breach.overKgPerH)}, ${span}`,
+        title: `More than the letdown can pass by ${names.say.rate(breach.overKgPerH)}, ${span}`,
         detail: `${who}. ${header}: ${kg} missing.`,
       };
     case 'stepTooSteep':
       return {
-        title: `Step too steep: ${rateText(breach.overKgPerH)} more at ${clock(breach.from)}`,
+        title: `Step too steep: ${names.say.rate(breach.overKgPerH)} more at ${clock(breach.from)}`,
         detail: `${units.length === 0 ? 'The base load' : listed(units)} ${units.length === 1 || units.length === 0 ? 'rises' : 'rise'} faster than the boilers in fire can follow. ${header}: ${kg} missing until ${clock(breach.to)}${sag}.`,
       };
   }

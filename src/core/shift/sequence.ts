@@ -1,6 +1,6 @@
 import { placedPhases, type PlacedPhase } from '../demand/activityLoad';
 import type { Activity, Fixing, Stage } from '../plant/activity';
-import { drawnActivities } from '../schedule/changeovers';
+import { drawnActivities } from '../schedule/judged';
 import { occupation, type Occupation } from '../schedule/occupation';
 import type { Week } from '../schedule/week';
 import { indexOf } from '../schedule/weekIndex';
@@ -30,10 +30,14 @@ export interface ShiftRow {
   readonly events: readonly PlannedEvent[];
 }
 
-/** What a line has to do in a shift: activities that overlap it, cleanings included, in order of start, then unit. */
+/**
+ * What a line has to do in a shift: activities that overlap it, cleanings included, idle spells and warm-ups not, in
+ * order of start, then unit.
+ */
 export function shiftSequence(week: Week, lineId: string, shift: Interval): ShiftRow[] {
   const units = indexOf(week).units;
   return drawnActivities(week)
+    .filter(({ kind }) => kind === 'stage' || kind === 'cleaning')
     .flatMap((activity): ShiftRow[] => {
       const taken = occupation(activity, week);
       const unit = taken && units.get(taken.unitId);

@@ -1,5 +1,6 @@
 /** Duty data of the demo plant and the modes that follow from it. Machines are those of an invented plant. */
 import { toGrid } from '../../core/demand/grid';
+import { workMode } from '../../core/demand/workMode';
 import type { SteamSupply } from '../../core/duty/duty';
 import { workOut, type DutyModel } from '../../core/duty/model';
 import type { LimitUse, Mode, Phase, Stage } from '../../core/plant/activity';
@@ -142,26 +143,34 @@ export const DEMO_DUTIES: readonly DemoDuty[] = [
   ...(['rinse', 'wash', 'allergen'] as const).map(cleaningDuty),
 ];
 
-const phasesCache = new Map<string, readonly Phase[]>();
-
-/** A duty's phases on the minute grid, on the steam of a header. */
-export function gridPhases(dutyId: string, headerId: string): readonly Phase[] {
-  const key = `${dutyId} ${headerId}`;
-  const known = phasesCache.get(key);
-  if (known) return known;
+const dutyOf = (dutyId: string): DemoDuty => {
   const duty = DEMO_DUTIES.find((d) => d.id === dutyId);
   if (!duty) throw new Error(`no demo duty ${dutyId}`);
-  const worked = workOut(duty, supplyOf(headerId));
+  return duty;
+};
+
+/** A cleaning's phases on the minute grid, on the steam of a header. */
+function cleaningPhases(dutyId: string, headerId: string): readonly Phase[] {
+  const worked = workOut(dutyOf(dutyId), supplyOf(headerId));
   if (!worked.ok) throw new Error(`${dutyId}: ${worked.error.message}`);
-  const phases = toGrid(worked.value.phases);
-  phasesCache.set(key, phases);
-  return phases;
+  return toGrid(worked.value.phases);
 }
 
-const after = (phases: readonly Phase[], minutes: number): Phase[] =>
-  phases.map((phase) => ({ ...phase, offsetMin: phase.offsetMin + minutes }));
+type DutyDraw = Omit<Mode, 'unitId' | 'dutyId' | 'uses'>;
+const drawCache = new Map<string, DutyDraw>();
 
-const lastMinute = (phases: readonly Phase[]): number => Math.max(0, ...phases.map((p) => p.offsetMin + p.minutes));
+/** What a stage draws on the steam of a header, from charging or loading to unloading; worked out once. */
+function drawOf(dutyId: string, headerId: string, leadMin: number, afterMin: number): DutyDraw {
+  const key = `${dutyId} ${headerId}`;
+  const known = drawCache.get(key);
+  if (known) return known;
+  const [duty, supply] = [dutyOf(dutyId), supplyOf(headerId)];
+  const mode = workMode({ unitId: '', dutyId, duty, supply, leadMin, afterMin, minutes: 0, uses: [] });
+  if (!mode.ok) throw new Error(`${dutyId}: ${mode.error.message}`);
+  const { unitId: _unit, dutyId: _duty, uses: _uses, ...draw } = mode.value;
+  drawCache.set(key, draw);
+  return draw;
+}
 
 const ELIGIBLE: Readonly<Record<DemoProduct['line'], Partial<Record<Stage, readonly string[]>>>> = {
   a: { blanch: ['blancher-1'], fill: ['filler-1'], retort: ['retort-1', 'retort-2'] },
@@ -188,12 +197,11 @@ function modeOn(product: DemoProduct, stage: Stage, unitName: string, loads: num
     return { unitId, minutes, phases: [], uses: [crates(minutes, 4)], dutyId: null };
   }
   const dutyId = `${product.id}-${stage}`;
-  const lead = { retort: RETORT_LEAD_MIN, cook: CHARGE_MIN }[stage as string] ?? 0;
-  const phases = after(gridPhases(dutyId, headerId), lead);
-  if (stage !== 'retort') return { unitId, minutes: lastMinute(phases), phases, uses: [], dutyId };
-  const minutes = lastMinute(phases) + UNLOAD_MIN;
-  const operator: LimitUse = { limitId: plant.OPERATORS, offsetMin: lead - 2, minutes: 8, amount: 1 };
-  return { unitId, minutes, phases, uses: [crates(minutes, 4), operator], dutyId };
+  const leadMin = { retort: RETORT_LEAD_MIN, cook: CHARGE_MIN }[stage as string] ?? 0;
+  const draw = drawOf(dutyId, headerId, leadMin, stage === 'retort' ? UNLOAD_MIN : 0);
+  if (stage !== 'retort') return { unitId, uses: [], dutyId, ...draw };
+  const operator: LimitUse = { limitId: plant.OPERATORS, offsetMin: leadMin - 2, minutes: 8, amount: 1 };
+  return { unitId, uses: [crates(draw.minutes, 4), operator], dutyId, ...draw };
 }
 
 /** Modes of a product's stage on its line's units. */
@@ -214,7 +222,7 @@ export function demoCleaning(): CleaningRule[] {
         const kind = plant.cleaningKind(from, to);
         const minutes = minutesOf[kind];
         if (minutes === undefined) return [];
-        const phases = gridPhases(`demo-clean-${kind}`, HEADER_OF_KIND[unitKind] ?? plant.MAIN_HEADER);
+        const phases = cleaningPhases(`demo-clean-${kind}`, HEADER_OF_KIND[unitKind] ?? plant.MAIN_HEADER);
         return [{ unitKind, fromFamilyId: from, toFamilyId: to, minutes, kind, phases, uses: [] }];
       }),
     ),

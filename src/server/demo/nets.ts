@@ -6,8 +6,8 @@ import type { DemoProduct } from './products';
 export const RETORT_LEAD_MIN = 8;
 /** 1,680 containers at 84 a minute. [min] */
 export const FILL_MINUTES_PER_LOAD = 20;
-/** Product comes out of the blancher so long after its start: warm-up, then the first pieces. [min] */
-const BLANCHED_AFTER_MIN = 25;
+/** The first pieces come out of the blancher so long after its start; it is warm by then. [min] */
+const BLANCHED_AFTER_MIN = 10;
 
 export interface DemoNet {
   /** Such as "A12". */

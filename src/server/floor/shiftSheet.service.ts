@@ -2,7 +2,7 @@ import { z } from 'zod';
 import type { ShiftRowDto, ShiftSheetDto } from '@/contracts/floor';
 import type { FloorEventDto, ShiftSpan } from '@/contracts/week';
 import type { Week } from '@/core/schedule/week';
-import { drawnActivities } from '@/core/schedule/changeovers';
+import { drawnActivities } from '@/core/schedule/judged';
 import { shiftSequence } from '@/core/shift/sequence';
 import { steamOnBy } from '@/core/shift/steamOnBy';
 import { fail, ok, type Result } from '@/core/result';
