@@ -1,6 +1,7 @@
 import type { Placement } from '../plant/activity';
 import type { Week } from '../schedule/week';
 import { judge, type Judgement } from './evaluate';
+import { MEETING_EVERY, type Exchange } from './exchange';
 import { figuresOf } from './figures';
 import type { Key } from './key';
 import { toModel } from './model';
@@ -34,6 +35,8 @@ export interface LevellingEnv {
   readonly cancelled?: () => boolean;
   /** Called now and then, at whole numbers of iterations. */
   readonly onProgress?: (progress: LevellingProgress) => void;
+  /** Another search of the same problem on another thread; left out: this one alone. */
+  readonly exchange?: Exchange;
 }
 
 export interface LevellingResult {
@@ -84,9 +87,10 @@ export function solveProblem(problem: Problem, options: FullOptions, env: Levell
 }
 
 function run(search: Search, clock: Stopwatch, env: LevellingEnv): void {
-  search.flatten();
+  const { exchange } = env;
+  let rebuilt = exchange?.startsFrom === 'nothing' && search.construct();
+  if (!rebuilt) search.flatten();
   report(search, clock, env);
-  let rebuilt = false;
   while (!clock.isOver(search.iterations) && !isPerfect(search.best.key)) {
     const progress = clock.progress(search.iterations);
     if (!rebuilt && progress > REBUILD_AT) {
@@ -94,9 +98,15 @@ function run(search: Search, clock: Stopwatch, env: LevellingEnv): void {
       if (isOver(search.best.key)) search.construct();
     }
     for (let i = 0; i < LOOK; i++) search.step(progress);
+    if (search.iterations % MEETING_EVERY === 0) take(search, exchange?.meet(search.best));
     if (search.iterations % REPORT === 0) report(search, clock, env);
   }
+  take(search, exchange?.close(search.best));
   report(search, clock, env);
+}
+
+function take(search: Search, found: Assignment | null | undefined): void {
+  if (found) search.offer(found);
 }
 
 const isOver = (key: Key): boolean => key.process + key.sharedWorse + key.steamKg > 0;

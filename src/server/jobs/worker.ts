@@ -1,7 +1,10 @@
+import { availableParallelism } from 'node:os';
 import { startLevelling } from '@/solver/levellingClient';
 import { runLevellingWorker } from './levellingWorker';
 
 // The thread's entry is built apart from this file, to the folder that it lies in.
 const thread = new URL('./thread.js', import.meta.url);
 
-await runLevellingWorker((job) => startLevelling(thread, job));
+const threads = availableParallelism() > 1 ? 2 : 1;
+
+await runLevellingWorker((job) => startLevelling(thread, { ...job, threads }));

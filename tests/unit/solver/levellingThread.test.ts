@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { LevellingProgress } from '@/core/levelling/levelWeek';
 import { levelWeek } from '@/solver/levelWeek';
 import { startLevelling } from '@/solver/levellingClient';
+import { demoWeek } from '@/server/demo/demoWeek';
 import type { Week } from '@/core/schedule/week';
 import { activity, mode, phase, unit, week } from '../../support/levellingCases';
 
@@ -40,6 +41,15 @@ describe('levelling on a thread of its own', () => {
     expect(result.cancelled).toBe(true);
     expect(result.iterations).toBeLessThan(1e9);
   }, 60_000);
+
+  it('gives the identical plan each time on two threads that meet, and no worse a plan than one alone', async () => {
+    const job = { week: demoWeek(), options: { budget: { iterations: 2_400 } } };
+    const two = () => startLevelling(SCRIPT, { ...job, threads: 2 }, FROM_SOURCE).result;
+    const [first, second, alone] = [await two(), await two(), await startLevelling(SCRIPT, job, FROM_SOURCE).result];
+    expect(second.proposal).toEqual(first.proposal);
+    expect(first.proposal.after.overKg).toBeLessThanOrEqual(alone.proposal.after.overKg + 1e-6);
+    expect(first.proposal.after.lateMinutes).toBeLessThanOrEqual(alone.proposal.after.lateMinutes);
+  }, 120_000);
 
   it('fails where the thread dies without an answer', async () => {
     const running = startLevelling(SCRIPT, { week: twoVents(), options: { budget: { iterations: 1e9 } } }, FROM_SOURCE);
