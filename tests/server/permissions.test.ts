@@ -11,12 +11,18 @@ const EVERYBODY: readonly Role[] = ROLES;
 const PLANNER: readonly Role[] = ['planner'];
 const UTILITIES: readonly Role[] = ['utilitiesLead'];
 
+const LIBRARY: readonly Role[] = ['planner', 'utilitiesLead', 'administrator'];
+
 /** Who may call what, written out a second time on purpose; `anybody` needs no session. */
 const WHO_MAY: Readonly<Record<string, readonly Role[] | 'anybody'>> = {
   'POST session/index': 'anybody',
   'DELETE session/index': 'anybody',
   'POST session/plant': EVERYBODY,
   'GET events': EVERYBODY,
+  'GET duties/index': EVERYBODY,
+  'POST duties/index': LIBRARY,
+  'POST duties/[id]/index': LIBRARY,
+  'POST duties/[id]/retire': LIBRARY,
   'GET process-data/index': EVERYBODY,
   'POST process-data/[id]/release': ['qualityLead'],
   'GET units/spread': EVERYBODY,
