@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import type { SpreadListDto, SpreadRequest, SpreadStaleResponse, UnitSpreadDto } from '@/contracts/spread';
+import type { SpreadListDto, SpreadStaleResponse, UnitSpreadDto } from '@/contracts/spread';
 import { db } from '@/db/client';
 import * as t from '@/db/schema/index';
 import { PUT } from '@/pages/api/units/[unit]/spread';
@@ -37,7 +37,7 @@ const put = (unitId: string, body: unknown, person: Person = 'uli') =>
   callApi(PUT, { session: sessions[person], method: 'PUT', params: { unit: unitId }, body });
 async function set(unitId: string, request: Record<string, unknown>, person: Person = 'uli'): Promise<Response> {
   const { seen } = await unitOf(unitId, person);
-  return put(unitId, { ...request, seen } as SpreadRequest, person);
+  return put(unitId, { ...request, seen }, person);
 }
 async function week() {
   const loaded = await loadWeek({ plantId: 'quay' }, WEEK);
