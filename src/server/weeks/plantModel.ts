@@ -1,5 +1,6 @@
-import type { PlantModel } from '@/core/plant/plant';
+import type { PlantModel, VentGroup } from '@/core/plant/plant';
 import { ambientAtAltitude, STANDARD_ATMOSPHERE } from '@/core/quantity/pressure';
+import { inUseIn } from './inUse';
 import type { PlantParts, PlantRow } from './plantParts.repo';
 import { stepsByHour } from './weeklySteps';
 import type { WeekTime } from './weekTime';
@@ -7,6 +8,7 @@ import type { WeekTime } from './weekTime';
 /** The plant as core knows it, for one week: hours of the week become elapsed minutes. */
 export function plantModelOf(plant: PlantRow, parts: PlantParts, time: WeekTime): PlantModel {
   const ambient = ambientAtAltitude(plant.altitudeM);
+  const inUse = <Row extends Retirable>(rows: readonly Row[]) => rows.filter((row) => isInUse(row, time));
   return {
     id: plant.id,
     name: plant.name,
@@ -16,18 +18,35 @@ export function plantModelOf(plant: PlantRow, parts: PlantParts, time: WeekTime)
       snapMinutes: plant.snapMinutes,
       reserveFraction: plant.reserveFraction,
       sagToleranceBar: plant.sagToleranceBar,
+      ...(parts.practice ? { practice: parts.practice } : {}),
     },
-    lines: parts.lines.map(({ id, name }) => ({ id, name })),
-    units: parts.units.map(({ id, lineId, name, kind, headerId, ventGroupId }) => {
+    lines: inUse(parts.lines).map(({ id, name }) => ({ id, name })),
+    units: inUse(parts.units).map(({ id, lineId, name, kind, headerId, ventGroupId }) => {
       return { id, lineId, name, kind, headerId, ventGroupId };
     }),
-    ventGroups: parts.ventGroups.map(({ plantId: _plant, ...group }) => group),
-    headers: parts.headers.map(({ id, name, pressureBarG, dryness, superheatK, feed }) => {
-      return { id, name, pressureBarG, dryness, superheatK, feed };
+    ventGroups: inUse(parts.ventGroups).map(({ plantId: _plant, position: _, retiredAt: _retired, ...group }) => group),
+    headers: inUse(parts.headers).map(({ id, name, pressureBarG, dryness, superheatK, feed, flash }) => {
+      return { id, name, pressureBarG, dryness, superheatK, feed, flash };
     }),
-    sharedLimits: parts.sharedLimits.map(({ id, name, unit, capacity }) => {
+    accumulators: inUse(parts.accumulators).map(
+      ({ plantId: _plant, position: _, retiredAt: _retired, ...accumulator }) => accumulator,
+    ),
+    sharedLimits: inUse(parts.sharedLimits).map(({ id, name, unit, capacity }) => {
       return { id, name, unit, capacity: stepsByHour(time, capacity) };
     }),
     cleaning: parts.cleaning.map(({ id: _id, plantId: _plant, ...rule }) => rule),
   };
+}
+
+interface Retirable {
+  readonly retiredAt: Date | null;
+}
+
+/** What was retired before a week's end had no use in it any more; older weeks keep it. */
+const isInUse = ({ retiredAt }: Retirable, time: WeekTime): boolean =>
+  retiredAt === null || retiredAt >= time.endInstant;
+
+function ventGroupOf(row: PlantParts['ventGroups'][number]): VentGroup {
+  const { plantId: _plant, position: _position, retiredAt: _retired, ...group } = row;
+  return group;
 }

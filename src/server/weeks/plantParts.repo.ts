@@ -1,6 +1,7 @@
 import { and, asc, eq, gt, lt } from 'drizzle-orm';
 import type { Db } from '@/db/client';
 import {
+  accumulators,
   calendarExceptions,
   cleaningRules,
   families,
@@ -12,6 +13,7 @@ import {
   units,
   ventGroups,
 } from '@/db/schema/index';
+import { cleanlinessInForce } from '../practice/practice.repo';
 import type { WeekTime } from './weekTime';
 
 export type PlantRow = typeof plants.$inferSelect;
@@ -27,22 +29,28 @@ export async function plantParts(tx: Db, plantId: string) {
   return {
     lines: await tx.select().from(lines).where(eq(lines.plantId, plantId)).orderBy(asc(lines.position), asc(lines.id)),
     units: await tx.select().from(units).where(eq(units.plantId, plantId)).orderBy(asc(units.position), asc(units.id)),
-    ventGroups: await tx.select().from(ventGroups).where(eq(ventGroups.plantId, plantId)).orderBy(asc(ventGroups.id)),
+    ventGroups: await tx.select().from(ventGroups).where(eq(ventGroups.plantId, plantId)).orderBy(asc(ventGroups.position), asc(ventGroups.id)),
     headers: await tx
       .select()
       .from(headers)
       .where(eq(headers.plantId, plantId))
       .orderBy(asc(headers.position), asc(headers.id)),
+    accumulators: await tx
+      .select()
+      .from(accumulators)
+      .where(eq(accumulators.plantId, plantId))
+      .orderBy(asc(accumulators.position), asc(accumulators.id)),
     sharedLimits: await tx
       .select()
       .from(sharedLimits)
       .where(eq(sharedLimits.plantId, plantId))
-      .orderBy(asc(sharedLimits.id)),
+      .orderBy(asc(sharedLimits.position), asc(sharedLimits.id)),
     cleaning: await tx
       .select()
       .from(cleaningRules)
       .where(eq(cleaningRules.plantId, plantId))
       .orderBy(asc(cleaningRules.id)),
+    practice: await cleanlinessInForce(tx, plantId),
   };
 }
 
