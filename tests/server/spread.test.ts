@@ -53,18 +53,16 @@ async function recordStarts(activityId: string, event: 'steamOn' | 'cratesIn', p
   const keys = late.map((_, i) => `${activityId}-${event}-${i}`);
   const issue = (id: string, i: number) => ({ ...row, id, number: base + i, revision: 0, week: issued, comment: '' });
   await db.insert(t.issues).values(keys.map(issue));
-  await db
-    .insert(t.floorEvents)
-    .values(
-      keys.map((id, i) => ({
-        ...row,
-        id,
-        issueId: id,
-        activityId,
-        event,
-        happenedAt: instantOf(time, plannedMin + (late[i] as number)),
-      })),
-    );
+  await db.insert(t.floorEvents).values(
+    keys.map((id, i) => ({
+      ...row,
+      id,
+      issueId: id,
+      activityId,
+      event,
+      happenedAt: instantOf(time, plannedMin + (late[i] as number)),
+    })),
+  );
 }
 
 // The fixture's A107 is planned on R1 at minute 600 and draws first at minute 605; K7 on K1 at 480.
