@@ -20,6 +20,10 @@ export interface Units {
   readonly symbol: (quantity: DisplayQuantity) => string;
   /** What was typed, in SI; null where it can't be read. A unit typed after the figure counts, of either system. */
   readonly parse: (quantity: DisplayQuantity, text: string) => number | null;
+  /** A steam rate as screens round it: '1 555 kg/h', '3 430 lb/h'. */
+  readonly rate: (kgPerH: number) => string;
+  /** Steam or goods: '2 128 kg'; below 10 with one decimal. */
+  readonly mass: (kg: number) => string;
   /** Unrounded, in the units shown: for scales and axes. */
   readonly shown: (quantity: DisplayQuantity, value: number) => number;
   /** The inverse of `shown`. */
@@ -125,13 +129,17 @@ function makeUnits(system: UnitSystem): Units {
   const shown = (quantity: DisplayQuantity, value: number): number => toDisplay(quantity, value, system);
   const number = (quantity: DisplayQuantity, value: number, digits?: number): string =>
     screenNumber(quantity, shown(quantity, value), system, digits);
+  const text = (quantity: DisplayQuantity, value: number, digits?: number): string =>
+    `${number(quantity, value, digits)}\u00a0${symbol(quantity)}`;
   return {
     system,
     symbol,
     shown,
     number,
+    rate: (kgPerH) => text('steamRate', kgPerH),
+    mass: (kg) => text('mass', kg),
     inside: (quantity, value) => fromDisplay(quantity, value, system),
-    text: (quantity, value, digits) => `${number(quantity, value, digits)}\u00a0${symbol(quantity)}`,
+    text,
     parse: (quantity, text) => parseTyped(quantity, text, system),
     sentence: (text) => sentenceIn(system, text),
   };

@@ -2,7 +2,9 @@ import { memo, useMemo } from 'react';
 import type { HeaderJudgement } from '../../core/header/judgement';
 import type { Header, HeaderCapacity } from '../../core/plant/plant';
 import { toMinutes } from '../../core/time/stepFunction';
-import { rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 import { StripFace } from './StripFace';
 import { greatestOf, rateMarks, stripTop, yOfRate, type StripScale } from './strip';
 import { useStore, type Store } from './store';
@@ -32,6 +34,7 @@ const FIGURE_LOOKS = { over: 'text-over', room: 'text-room', quiet: 'text-ink-mu
 /** A header's load against its limit over the week, always in view above the rows. */
 export const HeaderStrip = memo(function HeaderStrip(props: Props) {
   const { header, capacity, judgement, carried, scale, clock, open, onToggle, main, onPoint, pointedMin } = props;
+  const units = useUnits();
   const heightPx = open ? (main ? 128 : 76) : 0;
   const live = useStore(carried, (c) => c?.preview?.evaluation.headers.find((h) => h.headerId === header.id)) ?? null;
   const shown = live ?? judgement;
@@ -41,11 +44,12 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
   );
   const limit = useMemo(() => limitOf(judgement, header), [judgement, header]);
   const topKgPerH = useMemo(
-    () => stripTop(Math.max(judgement.peak.kgPerH, props.before?.peak.kgPerH ?? 0, limit ? greatestOf(limit) : 0)),
-    [judgement, props.before, limit],
+    () =>
+      stripTop(Math.max(judgement.peak.kgPerH, props.before?.peak.kgPerH ?? 0, limit ? greatestOf(limit) : 0), units),
+    [judgement, props.before, limit, units],
   );
   const strip: StripScale = { pxPerMin: scale.pxPerMin, topKgPerH, heightPx };
-  const words = overWords(shown, clock);
+  const words = overWords(shown, clock, units);
 
   return (
     <section className="flex border-b border-rule bg-surface" aria-label={`${header.name}: steam load`}>
@@ -56,7 +60,7 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
         <StripTitle {...{ header, open, onToggle }} />
         {open ? (
           <>
-            {main ? <p className="text-2xs text-ink-muted max-sm:hidden">{stateText(header)}</p> : null}
+            {main ? <p className="text-2xs text-ink-muted max-sm:hidden">{stateText(header, units)}</p> : null}
             <p
               className={`mt-0.5 font-semibold ${main ? 'text-lg max-lg:text-md max-sm:text-sm' : 'text-sm'} ${FIGURE_LOOKS[words.look]} ${words.look === 'over' ? '' : '!text-sm'}`}
               data-testid={`over-${header.id}`}
@@ -93,10 +97,12 @@ function limitOf(judgement: HeaderJudgement, header: Header): Float64Array | nul
   return new Float64Array(judgement.loadKgPerH.length).fill(header.feed.greatestKgPerH);
 }
 
-function stateText(header: Header): string {
-  const pressure = `${header.pressureBarG.toFixed(1)} bar g`;
+function stateText(header: Header, units: Units): string {
+  const pressure = units.text('gaugePressure', header.pressureBarG);
   if (header.dryness !== null) return `${pressure} · x ${header.dryness}`;
-  return header.superheatK ? `${pressure} · ${header.superheatK} K superheat` : pressure;
+  return header.superheatK
+    ? `${pressure} · ${units.text('temperatureDifference', header.superheatK)} superheat`
+    : pressure;
 }
 
 function StripTitle({ header, open, onToggle }: Pick<Props, 'header' | 'open' | 'onToggle'>) {
@@ -123,16 +129,17 @@ function StripTitle({ header, open, onToggle }: Pick<Props, 'header' | 'open' | 
 }
 
 function Marks({ strip, topKgPerH }: { readonly strip: StripScale; readonly topKgPerH: number }) {
+  const units = useUnits();
   return (
     <div className="pointer-events-none absolute top-1 right-1.5 max-md:hidden" aria-hidden="true">
-      {rateMarks(topKgPerH).map((mark) => (
+      {rateMarks(topKgPerH, units).map((mark) => (
         <span
           key={mark}
           className="absolute right-0 -translate-y-1/2 text-2xs whitespace-nowrap text-ink-muted"
           style={{ top: yOfRate(strip, mark) }}
-          title={rateText(mark)}
+          title={units.rate(mark)}
         >
-          {markText(mark, topKgPerH)}
+          {markText(mark, topKgPerH, units)}
         </span>
       ))}
     </div>

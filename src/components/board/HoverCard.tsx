@@ -4,7 +4,8 @@ import { drawnMode, type Activity } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
 import { breachSentence, type Names } from '../../core/schedule/sentences';
 import type { Week } from '../../core/schedule/week';
-import { kgText, rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
 import { ROW_PX, type Rows } from './rows';
 import { useStore, type Store } from './store';
 import { xOf, type TimeScale } from './timeScale';
@@ -24,6 +25,7 @@ interface Props {
 /** All about a block that the pointer rests on or the keys have reached, where its own width leaves no room. */
 export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, names }: Props) {
   const id = useStore(hovered, (h) => h);
+  const units = useUnits();
   const card = useRef<HTMLDivElement>(null);
   useLayoutEffect(() => keepInSight(card.current), [id, scale]);
   const activity = id === null ? undefined : drawn.find((a) => a.id === id);
@@ -52,7 +54,7 @@ export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, 
         {placeText(activity.placement, week.plant, clock)} to {clock.time(activity.placement.start + mode.minutes)}
       </p>
       <p className="text-ink-muted">
-        {peak > 0 ? `${kgText(phasesKg(mode.phases))} of steam, peak ${rateText(peak)}` : 'draws no steam'}
+        {peak > 0 ? `${units.mass(phasesKg(mode.phases))} of steam, peak ${units.rate(peak)}` : 'draws no steam'}
         {activity.fixing === 'free' ? '' : `, ${FIXING_WORDS[activity.fixing]}`}
       </p>
       {wrong.slice(0, 2).map((breach) => (

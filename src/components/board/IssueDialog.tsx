@@ -5,7 +5,8 @@ import { Button } from '../ui/Button';
 import { Dialog } from '../ui/Dialog';
 import { TextField } from '../ui/Field';
 import { Notice } from '../ui/Notice';
-import { kgText, spanText } from '../time';
+import { spanText } from '../time';
+import { useUnits } from '../ui/units';
 import { standingOf, type Standing } from './standing';
 import type { BoardModel } from './useBoard';
 import { useIssue } from './useIssue';
@@ -109,6 +110,7 @@ function ProcessPart({ standing, model, onGo }: PartProps) {
 }
 
 function SteamPart({ standing, model, onGo }: PartProps) {
+  const units = useUnits();
   const { steam, agreed } = standing;
   if (steam.length === 0) return null;
   const { agreement } = model.dto;
@@ -125,7 +127,7 @@ function SteamPart({ standing, model, onGo }: PartProps) {
   const { over } = model.evaluator.evaluation;
   const title =
     over.kg > 0
-      ? `Over the steam limit by ${kgText(over.kg)}, ${spanText(over.minutes)}.`
+      ? `Over the steam limit by ${units.mass(over.kg)}, ${spanText(over.minutes)}.`
       : `${steam.length} steps are too steep for the boilers in fire.`;
   return (
     <Notice look="over" title={title}>

@@ -1,7 +1,8 @@
 import type { LevellingRunDto } from '../../contracts/levelling';
 import { Button } from '../ui/Button';
 import { Notice } from '../ui/Notice';
-import { groupDigits, kgText, spanText } from '../time';
+import { groupDigits, spanText } from '../time';
+import { useUnits } from '../ui/units';
 import { LevelForm } from './LevelForm';
 import { LevelProgress } from './LevelProgress';
 import { ProposalView } from './ProposalView';
@@ -55,6 +56,7 @@ interface RunningProps {
 }
 
 function Running({ run, mine, busy, onCancel }: RunningProps) {
+  const units = useUnits();
   const last = run.progress.at(-1);
   return (
     <>
@@ -64,7 +66,7 @@ function Running({ run, mine, busy, onCancel }: RunningProps) {
       </p>
       <LevelProgress progress={run.progress} seconds={run.seconds} />
       <dl className="grid grid-cols-3 gap-2 text-sm" data-testid="level-progress">
-        <Figure name="over the limit" value={last ? kgText(last.overKg) : '–'} />
+        <Figure name="over the limit" value={last ? units.mass(last.overKg) : '–'} />
         <Figure name="late" value={last ? spanText(last.lateMin) : '–'} />
         <Figure name="moved in all" value={last ? `${groupDigits(last.movedMin)} min` : '–'} />
       </dl>

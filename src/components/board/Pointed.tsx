@@ -4,7 +4,8 @@ import type { WeekEvaluation } from '../../core/pipeline';
 import type { Activity } from '../../core/plant/activity';
 import { valueAt } from '../../core/time/stepFunction';
 import type { Week } from '../../core/schedule/week';
-import { groupDigits, rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
 import { useStore, type Store } from './store';
 import { xOf, type TimeScale } from './timeScale';
 import { unitName } from './words';
@@ -51,6 +52,7 @@ interface WhoProps extends Pick<Props, 'week' | 'evaluation' | 'clock'> {
 }
 
 function WhoDraws({ at, week, evaluation, drawn, clock }: WhoProps) {
+  const units = useUnits();
   const header = evaluation.headers.find((h) => h.headerId === at.headerId);
   const shares = useMemo(
     () => whoDraws({ plant: week.plant, activities: drawn }, at.headerId, at.minute),
@@ -64,7 +66,7 @@ function WhoDraws({ at, week, evaluation, drawn, clock }: WhoProps) {
     <>
       <p className="flex justify-between gap-3 text-sm font-semibold">
         <span>{clock.dayTime(at.minute)}</span>
-        <span>{rateText(header?.loadKgPerH[at.minute] ?? 0)}</span>
+        <span>{units.rate(header?.loadKgPerH[at.minute] ?? 0)}</span>
       </p>
       <LimitLine load={header?.loadKgPerH[at.minute] ?? 0} limit={header?.limitKgPerH?.[at.minute] ?? null} />
       <ul className="mt-1.5 border-t border-rule pt-1.5 text-2xs leading-[17px]">
@@ -72,7 +74,7 @@ function WhoDraws({ at, week, evaluation, drawn, clock }: WhoProps) {
           <li key={share.activityId} className="flex gap-2">
             <span className="w-17 shrink-0 truncate text-ink-muted">{unitName(week.plant, share.unitId)}</span>
             <span className="min-w-0 flex-1 truncate">{byId.get(share.activityId)?.title}</span>
-            <span>{groupDigits(Math.round(share.kgPerH / 5) * 5)}</span>
+            <span>{units.number('steamRate', share.kgPerH)}</span>
           </li>
         ))}
         {rest.length > 0 ? (
@@ -86,24 +88,26 @@ function WhoDraws({ at, week, evaluation, drawn, clock }: WhoProps) {
 }
 
 function Sum({ words, kgPerH }: { readonly words: string; readonly kgPerH: number }) {
+  const units = useUnits();
   return (
     <li className="flex justify-between gap-2 text-ink-muted">
       <span>{words}</span>
-      <span>{groupDigits(Math.round(kgPerH / 5) * 5)}</span>
+      <span>{units.number('steamRate', kgPerH)}</span>
     </li>
   );
 }
 
 function LimitLine({ load, limit }: { readonly load: number; readonly limit: number | null }) {
+  const units = useUnits();
   if (limit === null || limit >= 1e9) return <p className="text-xs text-ink-muted">not judged: no limit is set</p>;
   const over = load - limit;
   return (
     <p className="flex justify-between gap-3 text-xs">
-      <span className="text-ink-muted">limit {rateText(limit)}</span>
+      <span className="text-ink-muted">limit {units.rate(limit)}</span>
       {over > 1e-3 ? (
-        <span className="font-medium text-over">{rateText(over)} over</span>
+        <span className="font-medium text-over">{units.rate(over)} over</span>
       ) : (
-        <span className="font-medium text-room">{rateText(-over)} to spare</span>
+        <span className="font-medium text-room">{units.rate(-over)} to spare</span>
       )}
     </p>
   );

@@ -2,7 +2,8 @@ import { useMemo } from 'react';
 import { reasonSentence } from '../../core/levelling/reasons';
 import type { LevelFigures, LevellingProposal, ProposedMove } from '../../core/levelling/proposal';
 import { Button } from '../ui/Button';
-import { groupDigits, kgText, rateText, spanText, type Clock } from '../time';
+import { groupDigits, spanText, type Clock } from '../time';
+import { useUnits } from '../ui/units';
 import type { BoardModel } from './useBoard';
 import type { BoardActions } from './useBoardActions';
 import { activityName, moveText } from './words';
@@ -42,11 +43,12 @@ export function ProposalView({ proposal, model, actions }: Props) {
 }
 
 function Summary({ proposal, model }: Omit<Props, 'actions'>) {
+  const units = useUnits();
   const { before, after, movedBatches, meanMoveMin } = proposal;
   const header = model.week.plant.headers.find((h) => h.feed.kind === 'boilers');
-  const peak = (figures: LevelFigures): string => (header ? rateText(figures.peakKgPerH[header.id] ?? 0) : '–');
+  const peak = (figures: LevelFigures): string => (header ? units.rate(figures.peakKgPerH[header.id] ?? 0) : '–');
   const rows: readonly (readonly [string, string, string])[] = [
-    ['Over the limit', kgText(before.overKg), kgText(after.overKg)],
+    ['Over the limit', units.mass(before.overKg), units.mass(after.overKg)],
     ['', spanText(before.overMinutes), spanText(after.overMinutes)],
     ['Peak', peak(before), peak(after)],
     ['Late', spanText(before.lateMinutes), spanText(after.lateMinutes)],
@@ -84,6 +86,7 @@ function Summary({ proposal, model }: Omit<Props, 'actions'>) {
 }
 
 function Unresolved({ proposal, model }: Omit<Props, 'actions'>) {
+  const units = useUnits();
   if (proposal.unresolved.length === 0) return null;
   const { clock, view } = model;
   return (
@@ -100,9 +103,9 @@ function Unresolved({ proposal, model }: Omit<Props, 'actions'>) {
               <span className="hatch-over w-1 shrink-0 rounded-sm" aria-hidden="true" />
               <span className="text-xs">
                 <span className="block font-medium">
-                  {clock.dayTime(rest.from)} to {endText(clock, rest.from, rest.to)}, {kgText(rest.kg)}
+                  {clock.dayTime(rest.from)} to {endText(clock, rest.from, rest.to)}, {units.mass(rest.kg)}
                 </span>
-                <span className="text-ink-muted">{rest.why}</span>
+                <span className="text-ink-muted">{units.sentence(rest.why)}</span>
               </span>
             </button>
           </li>

@@ -3,7 +3,8 @@ import { phasesKg, phasesPeakKgPerH } from '../../core/demand/activityLoad';
 import { drawnMode, type Activity } from '../../core/plant/activity';
 import type { Week } from '../../core/schedule/week';
 import { Button } from '../ui/Button';
-import { kgText, rateText, spanText, type Clock } from '../time';
+import { spanText, type Clock } from '../time';
+import { useUnits } from '../ui/units';
 import { canCarry } from './carry';
 import { FixingMark } from './FixingMark';
 import { waitSinceClosing } from './threads';
@@ -22,6 +23,7 @@ interface Props {
 /** The selected activity: where and when, its steam, its due time, its wait. */
 export function SelectedDetail(props: Props) {
   const { activity, week, clock, mayEdit, moved, onFix, onTakeOff } = props;
+  const units = useUnits();
   const mode = drawnMode(activity);
   const isRun = activity.kind !== 'cleaning';
   return (
@@ -44,7 +46,7 @@ export function SelectedDetail(props: Props) {
         {mode ? (
           <Fact name="Steam">
             {phasesPeakKgPerH(mode.phases) > 0
-              ? `${kgText(phasesKg(mode.phases))}, peak ${rateText(phasesPeakKgPerH(mode.phases))}`
+              ? `${units.mass(phasesKg(mode.phases))}, peak ${units.rate(phasesPeakKgPerH(mode.phases))}`
               : 'none'}
           </Fact>
         ) : null}

@@ -1,7 +1,9 @@
 import { memo, useMemo, type KeyboardEvent, type PointerEvent } from 'react';
 import type { Header } from '../../core/plant/plant';
 import { fromMinutes } from '../../core/time/stepFunction';
-import { groupDigits, rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 import { areaPath, betweenPath, linePath, rateMarks, yOfRate, type StripScale } from './strip';
 import { minuteAt, xOf, type TimeScale } from './timeScale';
 
@@ -24,6 +26,7 @@ interface Props {
 /** The drawn load. It takes the focus: arrow keys walk along the minutes and say what is drawn there. */
 export const StripFace = memo(function StripFace(props: Props) {
   const { header, strip, scale, clock, load, limit, onPoint, pointedMin } = props;
+  const units = useUnits();
   const at = pointedMin ?? Math.floor(scale.horizonMin / 2);
   const point = (event: PointerEvent<HTMLDivElement>): void => {
     const x = event.clientX - event.currentTarget.getBoundingClientRect().left;
@@ -45,7 +48,7 @@ export const StripFace = memo(function StripFace(props: Props) {
       aria-valuemin={0}
       aria-valuemax={scale.horizonMin - 1}
       aria-valuenow={at}
-      aria-valuetext={valueText(at, load, limit, clock)}
+      aria-valuetext={valueText(at, load, limit, clock, units)}
       className="relative mt-1 mb-[3px] cursor-crosshair focus-visible:outline-offset-[-2px]"
       style={{ height: strip.heightPx }}
       onPointerMove={point}
@@ -59,15 +62,16 @@ export const StripFace = memo(function StripFace(props: Props) {
   );
 });
 
-function valueText(minute: number, load: Float64Array, limit: Float64Array | null, clock: Clock): string {
+function valueText(minute: number, load: Float64Array, limit: Float64Array | null, clock: Clock, units: Units): string {
   const rate = load[minute] ?? 0;
   const bound = limit?.[minute] ?? NO_LIMIT;
-  const judged = bound < NO_LIMIT ? `limit ${rateText(bound)}` : 'not judged';
-  const over = bound < NO_LIMIT && rate > bound ? `, over by ${rateText(rate - bound)}` : '';
-  return `${clock.dayTime(minute)}: ${rateText(rate)}, ${judged}${over}`;
+  const judged = bound < NO_LIMIT ? `limit ${units.rate(bound)}` : 'not judged';
+  const over = bound < NO_LIMIT && rate > bound ? `, over by ${units.rate(rate - bound)}` : '';
+  return `${clock.dayTime(minute)}: ${units.rate(rate)}, ${judged}${over}`;
 }
 
 function Drawing({ strip, scale, load, before, base, limit, carrying }: Props) {
+  const units = useUnits();
   const view = { from: 0, to: scale.horizonMin };
   const { pxPerMin, topKgPerH, heightPx } = strip;
   const still = useMemo(() => {
@@ -83,9 +87,9 @@ function Drawing({ strip, scale, load, before, base, limit, carrying }: Props) {
           )
         : '',
       room: limit ? areaPath(limit, v, s) : '',
-      marks: rateMarks(topKgPerH).map((mark) => yOfRate(s, mark)),
+      marks: rateMarks(topKgPerH, units).map((mark) => yOfRate(s, mark)),
     };
-  }, [pxPerMin, topKgPerH, heightPx, base, limit, scale.horizonMin]);
+  }, [pxPerMin, topKgPerH, heightPx, base, limit, scale.horizonMin, units]);
   return (
     <svg
       width={scale.widthPx}
@@ -118,6 +122,7 @@ function Drawing({ strip, scale, load, before, base, limit, carrying }: Props) {
 
 /** The limit's value stays in view along its span. */
 function LimitNames({ limit, strip, scale }: Pick<Props, 'limit' | 'strip' | 'scale'>) {
+  const units = useUnits();
   const spans = useMemo(() => (limit ? fromMinutes(limit) : []), [limit]);
   return spans.map((span, i) => {
     const to = spans[i + 1]?.from ?? scale.horizonMin;
@@ -132,9 +137,7 @@ function LimitNames({ limit, strip, scale }: Pick<Props, 'limit' | 'strip' | 'sc
         aria-hidden="true"
       >
         <span className="strip-limit sticky left-[calc(var(--label-w)+8px)] ml-2 inline-block text-2xs leading-[14px] font-semibold text-room">
-          {width > 150
-            ? `limit ${groupDigits(Math.round(span.value / 5) * 5)} kg/h`
-            : groupDigits(Math.round(span.value / 5) * 5)}
+          {width > 150 ? `limit ${units.rate(span.value)}` : units.number('steamRate', span.value)}
         </span>
       </div>
     );

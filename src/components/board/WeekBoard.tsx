@@ -1,17 +1,20 @@
 import { useState } from 'react';
 import type { MeDto } from '../../contracts/account';
+import type { UnitSystem } from '../../core/quantity/display';
 import { QueryProvider } from '../query/client';
 import { Notice } from '../ui/Notice';
+import { UnitsProvider } from '../ui/units';
 import { Board } from './Board';
 import './board.css';
 import { readWeekBlock } from './dataBlock';
 
 interface Props {
   readonly me: MeDto;
+  readonly units: UnitSystem;
 }
 
 /** The week board as an island; the page carries the week beside it. */
-export default function WeekBoard({ me }: Props) {
+export default function WeekBoard({ me, units }: Props) {
   const [week] = useState(readWeekBlock);
   if (!week) {
     return (
@@ -24,7 +27,9 @@ export default function WeekBoard({ me }: Props) {
   }
   return (
     <QueryProvider>
-      <Board me={me} initial={week} />
+      <UnitsProvider system={units}>
+        <Board me={me} initial={week} />
+      </UnitsProvider>
     </QueryProvider>
   );
 }

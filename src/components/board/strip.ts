@@ -1,3 +1,5 @@
+import type { Units } from '../units';
+
 /** A stretch of the strip. [min] */
 export interface StripView {
   readonly from: number;
@@ -75,18 +77,20 @@ export function betweenPath(
   return path;
 }
 
-/** The strip's top: above the greatest load and limit by a little, on a round number. [kg/h] */
-export function stripTop(greatest: number): number {
+/** The strip's top: above the greatest load and limit by a little, on a round number of the units shown. [kg/h] */
+export function stripTop(greatestKgPerH: number, units: Units): number {
+  const greatest = units.shown('steamRate', greatestKgPerH);
   const step = greatest > 4000 ? 1000 : greatest > 800 ? 200 : 50;
-  return Math.max(step, Math.ceil((greatest * 1.06) / step) * step);
+  return units.inside('steamRate', Math.max(step, Math.ceil((greatest * 1.06) / step) * step));
 }
 
-/** Three or four round rates to mark along the strip. [kg/h] */
-export function rateMarks(topKgPerH: number): number[] {
+/** Three or four rates to mark along the strip, round in the units shown. [kg/h] */
+export function rateMarks(topKgPerH: number, units: Units): number[] {
   const steps = [25, 50, 100, 200, 500, 1000, 2000, 5000, 10_000, 20_000];
-  const step = steps.find((s) => topKgPerH / s <= 4.6) ?? 50_000;
+  const top = units.shown('steamRate', topKgPerH) * (1 - 1e-9);
+  const step = steps.find((s) => top / s <= 4.6) ?? 50_000;
   const marks: number[] = [];
-  for (let mark = step; mark < topKgPerH; mark += step) marks.push(mark);
+  for (let mark = step; mark < top; mark += step) marks.push(units.inside('steamRate', mark));
   return marks;
 }
 

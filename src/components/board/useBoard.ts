@@ -4,8 +4,10 @@ import type { FloorEventDto, WeekDto } from '../../contracts/week';
 import { createEvaluator } from '../../core/pipeline';
 import type { Activity } from '../../core/plant/activity';
 import { mergeIntervals } from '../../core/time/interval';
+import { sayingIn } from '../../core/quantity/saying';
 import { breachSentence, namesOf } from '../../core/schedule/sentences';
 import { makeClock } from '../time';
+import { useUnits } from '../ui/units';
 import { breachesByActivity, drawnByUnit, notYetPlaced, waitingGroups } from './drawn';
 import { addNotice, type BoardNotice } from './notices';
 import { boardPeakKgPerH } from './outline';
@@ -85,15 +87,16 @@ function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, c
   const evaluation = preview?.evaluation ?? evaluator.evaluation;
   const { firstInstant, timeZone } = dto;
   const clock = useMemo(() => makeClock({ firstInstant, timeZone }), [firstInstant, timeZone]);
-  const names = useMemo(() => namesOf(week), [week]);
+  const units = useUnits();
+  const names = useMemo(() => namesOf(week, sayingIn(units.system)), [week, units]);
   const drawn = useMemo(() => [...week.activities, ...evaluation.cleanings], [week, evaluation]);
   const byUnit = useMemo(() => drawnByUnit(drawn), [drawn]);
   const breaches = useMemo(() => breachesByActivity(evaluation.breaches), [evaluation]);
   const labels = useMemo(() => {
     const titles = (activity: Activity): string[] =>
       (breaches.get(activity.id) ?? []).map((breach) => breachSentence(breach, names, clock.dayTime).title);
-    return new Map(drawn.map((a) => [a.id, blockLabel(a, week.plant, clock, titles(a))]));
-  }, [drawn, breaches, names, clock, week.plant]);
+    return new Map(drawn.map((a) => [a.id, blockLabel(a, week.plant, clock, titles(a), units)]));
+  }, [drawn, breaches, names, clock, week.plant, units]);
   const over = useMemo(
     () =>
       mergeIntervals(evaluation.headers.flatMap((h) => [...(h.over?.spans ?? []), ...(h.letdown?.spans ?? [])])).filter(

@@ -5,7 +5,7 @@ import type { Breach } from '../../core/schedule/breach';
 import { breachSentence, type Names } from '../../core/schedule/sentences';
 import type { Week } from '../../core/schedule/week';
 import type { Interval } from '../../core/time/interval';
-import { rateText, type Clock } from '../time';
+import type { Clock } from '../time';
 import type { Target } from './carry';
 import { fitsAt, fittingStarts, type RoomOnHeader } from './fits';
 import { spellsOf } from './outline';
@@ -76,13 +76,13 @@ export function verdictOf(
   const spans = fits.get(target.unitId);
   if (!spans) return { look: others.length > 0 ? 'over' : 'quiet', steam: 'steam not judged', others };
   if (fitsAt(spans, target.start)) return { look: others.length > 0 ? 'over' : 'room', steam: 'steam fits', others };
-  return { look: 'over', steam: overWords(mine), others };
+  return { look: 'over', steam: overWords(mine, names), others };
 }
 
-function overWords(breaches: readonly Breach[]): string {
+function overWords(breaches: readonly Breach[], names: Names): string {
   const over = breaches.reduce(
     (most, b) => (b.class === 'steam' && b.code !== 'stepTooSteep' ? Math.max(most, b.overKgPerH) : most),
     0,
   );
-  return over > 0 ? `${rateText(over)} over the limit` : 'over the limit';
+  return over > 0 ? `${names.say.rate(over)} over the limit` : 'over the limit';
 }

@@ -3,7 +3,8 @@ import type { ProposedMove } from '../../core/levelling/proposal';
 import { drawnMode, type Activity, type Fixing, type Placement, type Stage } from '../../core/plant/activity';
 import type { HeaderJudgement } from '../../core/header/judgement';
 import type { PlantModel } from '../../core/plant/plant';
-import { groupDigits, kgText, rateText, spanText, type Clock } from '../time';
+import { groupDigits, spanText, type Clock } from '../time';
+import type { Units } from '../units';
 
 export const STAGE_WORDS: Readonly<Record<Stage, string>> = {
   prepare: 'prepare',
@@ -43,6 +44,7 @@ export function blockLabel(
   plant: PlantModel,
   clock: Clock,
   breachTitles: readonly string[],
+  units: Units,
 ): string {
   const mode = drawnMode(activity);
   const { placement } = activity;
@@ -51,7 +53,7 @@ export function blockLabel(
     activityName(activity),
     placeText(placement, plant, clock),
     placement && mode ? `to ${clock.time(placement.start + mode.minutes)}` : '',
-    peak > 0 ? `steam up to ${rateText(peak)}` : 'no steam',
+    peak > 0 ? `steam up to ${units.rate(peak)}` : 'no steam',
     activity.fixing === 'free' ? '' : FIXING_WORDS[activity.fixing],
     ...breachTitles,
   ];
@@ -65,30 +67,32 @@ export interface OverWords {
 }
 
 /** How a header stands, in a figure and a line below it. */
-export function overWords(judgement: HeaderJudgement | undefined, clock: Clock): OverWords {
+export function overWords(judgement: HeaderJudgement | undefined, clock: Clock, units: Units): OverWords {
   if (!judgement) return { look: 'quiet', figure: 'not judged', line: 'no such header' };
   const { over, letdown, leastSpare } = judgement;
   const worst = over && over.kg > 0 ? over : letdown && letdown.kg > 0 ? letdown : null;
   if (worst) {
     const what = worst === over ? 'over the limit' : 'more than the letdown passes';
-    return { look: 'over', figure: kgText(worst.kg), line: `${what}, ${spanText(worst.minutes)}` };
+    return { look: 'over', figure: units.mass(worst.kg), line: `${what}, ${spanText(worst.minutes)}` };
   }
   if (!over)
-    return letdown ? letdownFits(judgement) : { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
+    return letdown
+      ? letdownFits(judgement, units)
+      : { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
   if (judgement.peak.kgPerH === 0) return { look: 'room', figure: 'under the limit', line: 'nothing draws steam' };
   if (!leastSpare) return { look: 'quiet', figure: 'not judged', line: 'no steam limit is set' };
   return {
     look: 'room',
     figure: 'under the limit',
-    line: `least to spare ${rateText(leastSpare.kgPerH)}, ${clock.dayTime(leastSpare.minute)}`,
+    line: `least to spare ${units.rate(leastSpare.kgPerH)}, ${clock.dayTime(leastSpare.minute)}`,
   };
 }
 
-function letdownFits(judgement: HeaderJudgement): OverWords {
+function letdownFits(judgement: HeaderJudgement, units: Units): OverWords {
   return {
     look: 'room',
     figure: 'the letdown passes it',
-    line: `peak ${rateText(judgement.peak.kgPerH)}; no limit set`,
+    line: `peak ${units.rate(judgement.peak.kgPerH)}; no limit set`,
   };
 }
 
@@ -112,7 +116,8 @@ export function moveText(move: Pick<ProposedMove, 'from' | 'to'>, plant: PlantMo
   return ['to ' + unitName(plant, move.to.unitId), along].filter((part) => part !== '').join(', ');
 }
 
-/** 't/h' marks along a strip. */
-export function markText(kgPerH: number, topKgPerH: number): string {
-  return topKgPerH >= 4000 ? `${kgPerH / 1000} t/h` : groupDigits(kgPerH);
+/** Marks along a strip: t/h where there are tonnes, else the bare figure in the units shown. */
+export function markText(kgPerH: number, topKgPerH: number, units: Units): string {
+  if (units.system === 'si' && topKgPerH >= 4000) return `${kgPerH / 1000} t/h`;
+  return groupDigits(units.shown('steamRate', kgPerH));
 }

@@ -30,18 +30,19 @@ export function NumberField<Values extends FieldValues, Output>(props: Props<Val
   const { control, name, label, hint, min, max, standard, standardMark = 'plant-specific default' } = props;
   const units = useUnits();
   const { field, fieldState } = useController({ control, name });
+  const { ref, onChange, onBlur } = field;
   const [typed, setTyped] = useState<string | null>(null);
   const value = field.value as number | null | undefined;
   const isTyped = typed !== null && isSame(figureValue(units, props, typed), value);
   const span = spanSaid(units, props, min, max);
   const change = (text: string): void => {
     setTyped(text);
-    field.onChange(figureValue(units, props, text));
+    onChange(figureValue(units, props, text));
   };
   const isStandard = standard !== undefined && standard !== null && value === standard;
   return (
     <Field
-      ref={field.ref}
+      ref={ref}
       name={name}
       label={label}
       unit={unitShown(units, props)}
@@ -55,7 +56,7 @@ export function NumberField<Values extends FieldValues, Output>(props: Props<Val
       value={isTyped ? typed : figureText(units, props, value)}
       onChange={(event) => change(event.target.value)}
       onBlur={() => {
-        field.onBlur();
+        onBlur();
         if (!Number.isNaN(value)) setTyped(null);
       }}
     />

@@ -44,7 +44,7 @@ export function SelectInput<Values extends FieldValues, Output>(props: SelectPro
       {...hands}
       className={className}
       error={fieldState.error?.message}
-      value={(value as string | null | undefined) ?? ''}
+      value={value ?? ''}
       onChange={(event) => onChange(none !== undefined && event.target.value === '' ? null : event.target.value)}
     >
       {none === undefined ? null : <option value="">{none}</option>}

@@ -1,7 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { areaPath, betweenPath, greatestOf, linePath, rateMarks, stripTop, yOfRate } from '@/components/board/strip';
+import { unitsOf } from '@/components/units';
 
 const scale = { pxPerMin: 2, topKgPerH: 1000, heightPx: 100 };
+const [si, us] = [unitsOf('si'), unitsOf('usCustomary')];
 const view = { from: 0, to: 4 };
 
 describe('paths of the strip', () => {
@@ -22,13 +24,20 @@ describe('paths of the strip', () => {
 
 describe('scale of the strip', () => {
   it('should end on a round number above the greatest rate', () => {
-    expect(stripTop(5770)).toBe(7000);
-    expect(stripTop(1095)).toBe(1200);
-    expect(stripTop(0)).toBe(50);
+    expect(stripTop(5770, si)).toBe(7000);
+    expect(stripTop(1095, si)).toBe(1200);
+    expect(stripTop(0, si)).toBe(50);
   });
   it('should mark few round rates', () => {
-    expect(rateMarks(7000)).toEqual([2000, 4000, 6000]);
-    expect(rateMarks(1200)).toEqual([500, 1000]);
+    expect(rateMarks(7000, si)).toEqual([2000, 4000, 6000]);
+    expect(rateMarks(1200, si)).toEqual([500, 1000]);
+  });
+  it('should end and mark on round numbers of lb/h where those are shown', () => {
+    // 5 770 kg/h are 12 721 lb/h.
+    expect(us.shown('steamRate', stripTop(5770, us))).toBeCloseTo(14_000, 6);
+    const marks = rateMarks(stripTop(5770, us), us).map((mark) => us.shown('steamRate', mark));
+    expect(marks.map(Math.round)).toEqual([5000, 10_000]);
+    expect(marks[0]).toBeCloseTo(5000, 6);
   });
   it('should leave "no limit known" out of the greatest', () => expect(greatestOf([10, 1e12, 30])).toBe(30));
 });

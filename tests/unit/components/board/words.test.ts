@@ -7,6 +7,7 @@ import { standingOf } from '@/components/board/standing';
 import { closedSpans, shiftSpells, ticksOf } from '@/components/board/ticks';
 import { weekWords } from '@/components/board/weekWords';
 import { blockLabel, markText, moveText, overWords } from '@/components/board/words';
+import { unitsOf } from '@/components/units';
 import { makeClock } from '@/components/time';
 import type { Breach } from '@/core/schedule/breach';
 import { judgeHeader } from '@/core/header/judgement';
@@ -93,6 +94,8 @@ describe('weekWords', () => {
   });
 });
 
+const [si, us] = [unitsOf('si'), unitsOf('usCustomary')];
+
 describe('overWords', () => {
   const header = {
     id: 'main',
@@ -118,17 +121,21 @@ describe('overWords', () => {
     );
   it('should say how much is over and for how long', () => {
     // 600 kg/h over for 2 min: 20 kg.
-    expect(overWords(judged([1000, 1600, 1600, 900], 1000), clock)).toEqual({
+    expect(overWords(judged([1000, 1600, 1600, 900], 1000), clock, si)).toEqual({
       look: 'over',
       figure: '20\u00a0kg',
       line: 'over the limit, 2 min',
     });
   });
   it('should say what is left at the tightest minute', () => {
-    expect(overWords(judged([100, 900, 300], 1000), clock).line).toBe('least to spare 100\u00a0kg/h, Mon 00:01');
+    expect(overWords(judged([100, 900, 300], 1000), clock, si).line).toBe('least to spare 100\u00a0kg/h, Mon 00:01');
+  });
+  it('should say it in lb where those are shown', () => {
+    expect(overWords(judged([1000, 1600, 1600, 900], 1000), clock, us).figure).toBe('44\u00a0lb');
+    expect(overWords(judged([100, 900, 300], 1000), clock, us).line).toBe('least to spare 220\u00a0lb/h, Mon 00:01');
   });
   it('should never say that it fits where no limit is set', () => {
-    expect(overWords(judged([100, 900], null), clock)).toMatchObject({ look: 'quiet', figure: 'not judged' });
+    expect(overWords(judged([100, 900], null), clock, si)).toMatchObject({ look: 'quiet', figure: 'not judged' });
   });
 });
 
@@ -140,9 +147,10 @@ describe('words of a block and a move', () => {
       placement: { unitId: 'r1', start: 400 },
       fixing: 'fixed',
     });
-    expect(blockLabel(one, PLANT, clock, ['Late'])).toBe(
+    expect(blockLabel(one, PLANT, clock, ['Late'], si)).toBe(
       'A1 Peas, Retort 1, Mon 06:40, to 07:40, steam up to 1\u2009550\u00a0kg/h, fixed, Late',
     );
+    expect(blockLabel(one, PLANT, clock, [], us)).toContain('steam up to 3\u2009420\u00a0lb/h');
   });
   it('should say where and how far', () => {
     const from = { unitId: 'r1', start: 400 };
@@ -151,7 +159,8 @@ describe('words of a block and a move', () => {
     expect(moveText({ from, to: { unitId: 'r2', start: 400 } }, PLANT)).toBe('to Retort 2');
   });
   it('should mark tonnes where the scale is large', () => {
-    expect([markText(2000, 7000), markText(500, 1200)]).toEqual(['2 t/h', '500']);
+    expect([markText(2000, 7000, si), markText(500, 1200, si)]).toEqual(['2 t/h', '500']);
+    expect(markText(us.inside('steamRate', 10_000), 7000, us)).toBe('10\u2009000');
   });
 });
 

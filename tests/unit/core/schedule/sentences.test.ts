@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { Breach } from '@/core/schedule/breach';
-import { breachSentence, listed, minutesText, namesOf, rateText } from '@/core/schedule/sentences';
+import { sayingIn } from '@/core/quantity/saying';
+import { breachSentence, listed, minutesText, namesOf } from '@/core/schedule/sentences';
 import { activity, flatMode, plant, unit, ventGroup, week } from '../../../support/builders';
 
 const clock = (minute: number) =>
@@ -9,16 +10,15 @@ const clock = (minute: number) =>
 const loads = [2, 3, 5, 6].map((n) =>
   activity(`load${n}`, { code: `A10${n}`, title: 'Sweet corn', modes: [flatMode(`r${n}`, 60, 500)] }),
 );
-const names = namesOf(
-  week({
-    plant: plant({
-      units: [2, 3, 5, 6].map((n) => unit(`r${n}`, { name: `Retort ${n}` })),
-      ventGroups: [ventGroup('g', { name: 'Manifold north' })],
-      sharedLimits: [{ id: 'crates', name: 'Crates', unit: 'crates', capacity: [] }],
-    }),
-    activities: loads,
+const inWeek = week({
+  plant: plant({
+    units: [2, 3, 5, 6].map((n) => unit(`r${n}`, { name: `Retort ${n}` })),
+    ventGroups: [ventGroup('g', { name: 'Manifold north' })],
+    sharedLimits: [{ id: 'crates', name: 'Crates', unit: 'crates', capacity: [] }],
   }),
-);
+  activities: loads,
+});
+const names = namesOf(inWeek);
 const say = (breach: Breach) => breachSentence(breach, names, clock);
 const span = { id: 'x', from: 400, to: 406, activityIds: ['load2', 'load3', 'load5', 'load6'] };
 const process = { ...span, class: 'process', found: 140, limit: 120, ventGroupId: null } as const;
@@ -117,8 +117,25 @@ describe('breaches in the words of the floor', () => {
   });
 });
 
+it('says steam, load and pressure in the units asked for', () => {
+  const over: Breach = {
+    ...span,
+    class: 'steam',
+    code: 'overLimit',
+    headerId: 'main',
+    overKgPerH: 604,
+    kg: 41,
+    sagBar: 0.3,
+  };
+  const us = breachSentence(over, namesOf(inWeek, sayingIn('usCustomary')), clock);
+  // 604 kg/h are 1 331.6 lb/h, 41 kg are 90.4 lb, 0.3 bar are 4.35 psi.
+  expect(us.title).toBe('Over the steam limit by 1 325 lb/h, 06:40 to 06:46');
+  expect(us.detail).toContain('90 lb missing; the pressure would fall by about 4.4 psi');
+  expect(say(over).detail).toContain('41 kg missing; the pressure would fall by about 0.3 bar');
+});
+
 it('writes rates to 10 kg/h, minutes and lists', () => {
-  expect([3, 604, 605, 1234567, 0].map(rateText)).toEqual([
+  expect([3, 604, 605, 1234567, 0].map(sayingIn('si').rate)).toEqual([
     '10 kg/h',
     '600 kg/h',
     '610 kg/h',

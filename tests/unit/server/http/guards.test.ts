@@ -78,9 +78,9 @@ describe('headers', () => {
 });
 
 it.each([
-  [null, 'system'],
+  [null, null],
   ['a=1; theme=dark', 'dark'],
   ['theme=light;x=2', 'light'],
-  ['theme=neon', 'system'],
-  ['othertheme=dark', 'system'],
+  ['theme=neon', null],
+  ['othertheme=dark', null],
 ])('the theme of %j is %s', (cookie, theme) => expect(themeOf(cookie)).toBe(theme));
