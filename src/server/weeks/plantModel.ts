@@ -1,4 +1,4 @@
-import type { PlantModel, VentGroup } from '@/core/plant/plant';
+import type { Accumulator, PlantModel, VentGroup } from '@/core/plant/plant';
 import { ambientAtAltitude, STANDARD_ATMOSPHERE } from '@/core/quantity/pressure';
 import { inUseIn } from './inUse';
 import type { PlantParts, PlantRow } from './plantParts.repo';
@@ -8,7 +8,7 @@ import type { WeekTime } from './weekTime';
 /** The plant as core knows it, for one week: hours of the week become elapsed minutes. */
 export function plantModelOf(plant: PlantRow, parts: PlantParts, time: WeekTime): PlantModel {
   const ambient = ambientAtAltitude(plant.altitudeM);
-  const inUse = <Row extends Retirable>(rows: readonly Row[]) => rows.filter((row) => isInUse(row, time));
+  const inUse = <Row extends { readonly retiredAt: Date | null }>(rows: readonly Row[]) => inUseIn(time, rows);
   return {
     id: plant.id,
     name: plant.name,
@@ -24,13 +24,11 @@ export function plantModelOf(plant: PlantRow, parts: PlantParts, time: WeekTime)
     units: inUse(parts.units).map(({ id, lineId, name, kind, headerId, ventGroupId }) => {
       return { id, lineId, name, kind, headerId, ventGroupId };
     }),
-    ventGroups: inUse(parts.ventGroups).map(({ plantId: _plant, position: _, retiredAt: _retired, ...group }) => group),
+    ventGroups: inUse(parts.ventGroups).map(ventGroupOf),
     headers: inUse(parts.headers).map(({ id, name, pressureBarG, dryness, superheatK, feed, flash }) => {
       return { id, name, pressureBarG, dryness, superheatK, feed, flash };
     }),
-    accumulators: inUse(parts.accumulators).map(
-      ({ plantId: _plant, position: _, retiredAt: _retired, ...accumulator }) => accumulator,
-    ),
+    accumulators: inUse(parts.accumulators).map(accumulatorOf),
     sharedLimits: inUse(parts.sharedLimits).map(({ id, name, unit, capacity }) => {
       return { id, name, unit, capacity: stepsByHour(time, capacity) };
     }),
@@ -38,15 +36,12 @@ export function plantModelOf(plant: PlantRow, parts: PlantParts, time: WeekTime)
   };
 }
 
-interface Retirable {
-  readonly retiredAt: Date | null;
-}
-
-/** What was retired before a week's end had no use in it any more; older weeks keep it. */
-const isInUse = ({ retiredAt }: Retirable, time: WeekTime): boolean =>
-  retiredAt === null || retiredAt >= time.endInstant;
-
 function ventGroupOf(row: PlantParts['ventGroups'][number]): VentGroup {
   const { plantId: _plant, position: _position, retiredAt: _retired, ...group } = row;
   return group;
+}
+
+function accumulatorOf(row: PlantParts['accumulators'][number]): Accumulator {
+  const { plantId: _plant, position: _position, retiredAt: _retired, ...accumulator } = row;
+  return accumulator;
 }

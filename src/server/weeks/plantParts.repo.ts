@@ -29,7 +29,11 @@ export async function plantParts(tx: Db, plantId: string) {
   return {
     lines: await tx.select().from(lines).where(eq(lines.plantId, plantId)).orderBy(asc(lines.position), asc(lines.id)),
     units: await tx.select().from(units).where(eq(units.plantId, plantId)).orderBy(asc(units.position), asc(units.id)),
-    ventGroups: await tx.select().from(ventGroups).where(eq(ventGroups.plantId, plantId)).orderBy(asc(ventGroups.position), asc(ventGroups.id)),
+    ventGroups: await tx
+      .select()
+      .from(ventGroups)
+      .where(eq(ventGroups.plantId, plantId))
+      .orderBy(asc(ventGroups.position), asc(ventGroups.id)),
     headers: await tx
       .select()
       .from(headers)
