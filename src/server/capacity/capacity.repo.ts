@@ -1,6 +1,7 @@
 import { and, asc, eq, gt, lt } from 'drizzle-orm';
 import type { Db } from '@/db/client';
 import { baseLoads, boilerFirings, boilers, headers, plants, steamLimits } from '@/db/schema/index';
+import { inUseIn } from '../weeks/inUse';
 import type { WeekTime } from '../weeks/weekTime';
 
 export type CapacityRows = Awaited<ReturnType<typeof capacityRows>>;
@@ -51,5 +52,12 @@ export async function capacityRows(tx: Db, plantId: string, time: WeekTime) {
   const firings = await firingsOf(tx, plantId, time);
   const limits = await limitsOf(tx, plantId, time);
   const base = await tx.select().from(baseLoads).where(eq(baseLoads.plantId, plantId)).orderBy(asc(baseLoads.id));
-  return { plant, headers: headerRows, boilers: boilerRows, firings, limits, baseLoads: base };
+  return {
+    plant,
+    headers: inUseIn(time, headerRows),
+    boilers: inUseIn(time, boilerRows),
+    firings,
+    limits,
+    baseLoads: inUseIn(time, base),
+  };
 }
