@@ -5,6 +5,7 @@ import { evaluateWeek } from '@/core/pipeline';
 import { Button } from '../ui/Button';
 import { Notice } from '../ui/Notice';
 import { makeClock } from '../time';
+import { useUnits } from '../ui/units';
 import { DeskChart } from './DeskChart';
 import { DeskPanel, spanSummary } from './DeskPanel';
 import { Duration } from './Duration';
@@ -40,6 +41,7 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
     () => evaluateWeek({ ...week.week, capacities: dto.capacities }).headers,
     [week.week, dto.capacities],
   );
+  const units = useUnits();
   const capacity = capacityOf(dto, headerId);
   const header = judged.find((h) => h.headerId === headerId);
   const nowMin = clock.minuteOf(dto.now);
@@ -51,7 +53,7 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
   };
   const store = (reason: string): void => {
     if (!draft) return;
-    const done = spanSummary(draft, dto, clock);
+    const done = spanSummary(draft, dto, clock, units);
     save.mutate(
       { draft, reason },
       {
@@ -81,7 +83,7 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
                     change(null);
                   }}
                 >
-                  {h.name}, {h.pressureBarG.toFixed(1)} bar g
+                  {h.name}, {units.text('gaugePressure', h.pressureBarG)}
                 </Button>
               ))}
             </div>

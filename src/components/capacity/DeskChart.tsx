@@ -2,13 +2,14 @@ import { useMemo } from 'react';
 import type { CapacityDto } from '@/contracts/capacity';
 import type { HeaderJudgement } from '@/core/header/judgement';
 import type { HeaderCapacity } from '@/core/plant/plant';
-import { rateText, type Clock } from '../time';
+import type { Clock } from '../time';
 import { useWidth } from '../ui/useWidth';
+import { useUnits } from '../ui/units';
 import { Axis } from './Axis';
 import { BoilerRow } from './BoilerRow';
 import type { Draft } from './draft';
 import { LoadStrip, RateLabels } from './LoadStrip';
-import { roundTop, type DeskScale } from './scale';
+import { limitSnap, roundTop, type DeskScale } from './scale';
 import { useSpanDrag } from './useSpanDrag';
 import type { DayOfWeek } from './wallTime';
 
@@ -33,11 +34,12 @@ const BOILER_HEIGHT = 52;
 /** Load, limit and boilers on one time axis. */
 export function DeskChart(props: Props) {
   const { dto, headerId, capacity, judged, day, days, clock, nowMin, draft, canSet, onDraft } = props;
+  const units = useUnits();
   const [ref, width] = useWidth<HTMLDivElement>(720);
   const topKgPerH = useMemo(() => {
     const sent = Math.max(0, ...(capacity?.exportKgPerH ?? []).map((step) => step.value));
-    return roundTop(Math.max(sent, judged.peak.kgPerH));
-  }, [capacity, judged]);
+    return roundTop(Math.max(sent, judged.peak.kgPerH), units);
+  }, [capacity, judged, units]);
   const scale = useMemo<DeskScale>(
     () => ({ from: day?.from ?? 0, to: day?.to ?? dto.horizonMin, width, height: STRIP_HEIGHT, topKgPerH }),
     [day, dto.horizonMin, width, topKgPerH],
@@ -45,7 +47,7 @@ export function DeskChart(props: Props) {
   const boilerScale = useMemo<DeskScale>(() => ({ ...scale, height: BOILER_HEIGHT }), [scale]);
   const drag = useSpanDrag(
     { minutes: (scale.to - scale.from) / width, kgPerH: topKgPerH / STRIP_HEIGHT },
-    { horizonMin: dto.horizonMin, snapMin: day ? 5 : 15, topKgPerH },
+    { horizonMin: dto.horizonMin, snapMin: day ? 5 : 15, topKgPerH, snapKgPerH: limitSnap(units) },
     onDraft,
     draft,
   );
@@ -79,7 +81,7 @@ export function DeskChart(props: Props) {
         <div key={boiler.id} className="contents">
           <div className="border-t border-rule py-2 pr-2">
             <p className="text-sm leading-4 font-semibold">{boiler.name}</p>
-            <p className="mt-1 text-2xs text-ink-muted max-sm:hidden">{rateText(boiler.netKgPerH)} net</p>
+            <p className="mt-1 text-2xs text-ink-muted max-sm:hidden">{units.rate(boiler.netKgPerH)} net</p>
           </div>
           <div className="border-t border-l border-rule">
             <BoilerRow boiler={boiler} scale={boilerScale} {...shared} />

@@ -5,10 +5,12 @@ import type { HeaderCapacity } from '@/core/plant/plant';
 import { valueAt } from '@/core/time/stepFunction';
 import { Button } from '../ui/Button';
 import { Notice } from '../ui/Notice';
-import { kgText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 import { firstDraft, type Draft, type Subject } from './draft';
 import { overWith } from './preview';
-import { segments } from './scale';
+import { limitSnap, segments } from './scale';
 import { actionText, SpanForm } from './SpanForm';
 import type { DayOfWeek } from './wallTime';
 
@@ -40,18 +42,18 @@ function nameOf(subject: Subject, dto: CapacityDto): string {
 }
 
 /** 'Shut Boiler 2, Tue 12:00 to Tue 14:00' */
-export function spanSummary(draft: Draft, dto: CapacityDto, clock: Clock): string {
+export function spanSummary(draft: Draft, dto: CapacityDto, clock: Clock, units: Units): string {
   const span = `${clock.dayTime(draft.fromMin)} to ${clock.dayTime(draft.toMin)}`;
-  return `${actionText(draft, nameOf(draft.subject, dto))}, ${span}`;
+  return `${actionText(draft, nameOf(draft.subject, dto), units)}, ${span}`;
 }
 
-function outcomeOf(before: HeaderJudgement['over'], after: HeaderJudgement['over']): string {
+function outcomeOf(before: HeaderJudgement['over'], after: HeaderJudgement['over'], units: Units): string {
   if (!after) return 'Without a limit the plan is not judged.';
-  const now = before && before.kg >= 0.5 ? kgText(before.kg) : 'nothing';
+  const now = before && before.kg >= 0.5 ? units.mass(before.kg) : 'nothing';
   if (after.kg < 0.5)
     return before && before.kg >= 0.5 ? `Nothing is over any more; now ${now}.` : 'The plan still fits.';
   const places = after.spans.length === 1 ? 'one place' : `${after.spans.length} places`;
-  return `The plan would be over by ${kgText(after.kg)} in ${places}; now ${now}.`;
+  return `The plan would be over by ${units.mass(after.kg)} in ${places}; now ${now}.`;
 }
 
 /** The least that the boilers send over a span, less the reserve. [kg/h] */
@@ -64,6 +66,8 @@ function keptOver(draft: Draft, capacity: HeaderCapacity | undefined, reserveFra
 /** The side of the desk: what can be set, the span being set, or who may. */
 export function DeskPanel(props: Props) {
   const { dto, headerId, capacity, judged, draft, clock, nowMin } = props;
+  const units = useUnits();
+  const snap = limitSnap(units);
   const boilers = useMemo(() => dto.boilers.filter((b) => b.headerId === headerId), [dto.boilers, headerId]);
   if (!props.canSet) return <Notice title="To be read">{props.whoMay}</Notice>;
 
@@ -79,7 +83,7 @@ export function DeskPanel(props: Props) {
         draft={draft}
         name={nameOf(draft.subject, dto)}
         keptKgPerH={keptOver(draft, capacity, dto.reserveFraction)}
-        outcome={outcomeOf(before, after)}
+        outcome={outcomeOf(before, after, units)}
         isWorse={(after?.kg ?? 0) > (before?.kg ?? 0) + 0.5}
         onChange={props.onDraft}
         onCancel={() => props.onDraft(null)}
@@ -100,7 +104,7 @@ export function DeskPanel(props: Props) {
       <div className="grid gap-2">
         <Button
           className="justify-start"
-          onClick={() => begin({ kind: 'limit', headerId }, Math.round(Math.min(limitNow, 1e6) / 50) * 50)}
+          onClick={() => begin({ kind: 'limit', headerId }, Math.round(Math.min(limitNow, 1e6) / snap) * snap)}
         >
           Steam limit…
         </Button>

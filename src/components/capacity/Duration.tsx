@@ -3,7 +3,7 @@ import { NOT_JUDGED_KG_PER_H } from '@/core/header/capacity';
 import { Button } from '../ui/Button';
 import { Fallible } from '../ui/Fallible';
 import { useWidth } from '../ui/useWidth';
-import { rateText } from '../time';
+import { useUnits } from '../ui/units';
 import { durationCurve, hoursAbove } from './durationCurve';
 
 const DurationChart = lazy(() => import('./DurationChart'));
@@ -25,6 +25,7 @@ function usualLimit(limit: Float64Array | null): number | null {
 
 /** For how long the steam load stands how high: asked for, then loaded and drawn. */
 export function Duration({ loadKgPerH, limitKgPerH }: Props) {
+  const units = useUnits();
   const [asked, setAsked] = useState(false);
   const [ref, width] = useWidth<HTMLDivElement>(600);
   const points = useMemo(() => (asked ? durationCurve(loadKgPerH) : []), [asked, loadKgPerH]);
@@ -38,7 +39,7 @@ export function Duration({ loadKgPerH, limitKgPerH }: Props) {
       <p className="mb-3 min-h-5 text-sm text-ink-muted">
         {limit === null || above === null
           ? 'No limit is set to compare with.'
-          : `Above the usual limit of ${rateText(limit)} for ${above.toFixed(1)} h of the week.`}
+          : `Above the usual limit of ${units.rate(limit)} for ${above.toFixed(1)} h of the week.`}
       </p>
       <div
         ref={ref}

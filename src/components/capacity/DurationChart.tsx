@@ -1,6 +1,8 @@
 import { Area, AreaChart, CartesianGrid, ReferenceLine, Tooltip, XAxis, YAxis } from 'recharts';
-import { groupDigits, rateText } from '../time';
+import { groupDigits } from '../time';
+import { useUnits } from '../ui/units';
 import type { DurationPoint } from './durationCurve';
+import { rateTicks } from './scale';
 
 interface Props {
   readonly points: readonly DurationPoint[];
@@ -18,18 +20,22 @@ interface Hovered {
 }
 
 function Reading({ active, payload }: Hovered) {
+  const units = useUnits();
   const point = payload?.[0]?.payload;
   if (!active || !point) return null;
   return (
     <p className="rounded-sm border border-rule bg-surface px-2 py-1 text-xs shadow-float">
-      {rateText(point.loadKgPerH)} or more for {point.hours.toFixed(1)} h
+      {units.rate(point.loadKgPerH)} or more for {point.hours.toFixed(1)} h
     </p>
   );
 }
 
 /** The load-duration curve drawn; loaded apart, for it brings a chart library with it. */
 export default function DurationChart({ points, width, height, limitKgPerH }: Props) {
+  const units = useUnits();
   const hours = points.at(-1)?.hours ?? 168;
+  const greatest = Math.max(limitKgPerH ?? 0, points[0]?.loadKgPerH ?? 0);
+  const ticks = [0, ...rateTicks(greatest * 1.1, units)];
   return (
     <AreaChart
       width={width}
@@ -52,8 +58,10 @@ export default function DurationChart({ points, width, height, limitKgPerH }: Pr
         width={56}
         tick={TICK}
         stroke="var(--color-edge)"
-        tickFormatter={(rate: number) => groupDigits(rate)}
-        label={{ value: 'kg/h', position: 'insideTopLeft', dx: 22, dy: -24, ...TICK }}
+        ticks={ticks}
+        domain={[0, ticks.at(-1) ?? greatest]}
+        tickFormatter={(rate: number) => groupDigits(units.shown('steamRate', rate))}
+        label={{ value: units.symbol('steamRate'), position: 'insideTopLeft', dx: 22, dy: -24, ...TICK }}
       />
       <Tooltip content={<Reading />} isAnimationActive={false} cursor={{ stroke: 'var(--color-ink)' }} />
       <Area

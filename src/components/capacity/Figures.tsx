@@ -3,7 +3,9 @@ import type { HeaderJudgement } from '@/core/header/judgement';
 import { NOT_JUDGED_KG_PER_H } from '@/core/header/capacity';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { valueAt } from '@/core/time/stepFunction';
-import { groupDigits, spanText, type Clock } from '../time';
+import { spanText, type Clock } from '../time';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 
 interface Props {
   readonly dto: CapacityDto;
@@ -21,9 +23,7 @@ interface Figure {
   readonly look?: 'over';
 }
 
-const round = (kgPerH: number): string => groupDigits(Math.round(kgPerH / 5) * 5);
-
-function overFigure(judged: HeaderJudgement | undefined): Figure {
+function overFigure(judged: HeaderJudgement | undefined, units: Units): Figure {
   const over = judged?.over;
   const name = 'Plan over the limit';
   if (!over) return { name, value: 'not judged', unit: '', note: 'no limit is set' };
@@ -31,14 +31,16 @@ function overFigure(judged: HeaderJudgement | undefined): Figure {
   const places = over.spans.length === 1 ? 'one place' : `${over.spans.length} places`;
   return {
     name,
-    value: groupDigits(over.kg),
-    unit: 'kg',
+    value: units.number('mass', over.kg),
+    unit: units.symbol('mass'),
     note: `${spanText(over.minutes)} in ${places}`,
     look: 'over',
   };
 }
 
-function figures({ dto, capacity, judged, clock, nowMin }: Props): Figure[] {
+function figures({ dto, capacity, judged, clock, nowMin }: Props, units: Units): Figure[] {
+  const round = (kgPerH: number): string => units.number('steamRate', kgPerH);
+  const perHour = units.symbol('steamRate');
   const inWeek = nowMin >= 0 && nowMin < dto.horizonMin;
   const minute = inWeek ? nowMin : 0;
   const when = inWeek ? 'now' : 'as the week begins';
@@ -51,36 +53,37 @@ function figures({ dto, capacity, judged, clock, nowMin }: Props): Figure[] {
     {
       name: `Net export ${when}`,
       value: sent === null ? 'not known' : round(sent),
-      unit: sent === null ? '' : 'kg/h',
+      unit: sent === null ? '' : perHour,
       note: sent === null ? 'no boiler feeds this header' : 'of the boilers in fire, at the header',
     },
     {
       name: `Reserve, ${Math.round(dto.reserveFraction * 100)} %`,
       value: sent === null ? 'none' : round(sent * dto.reserveFraction),
-      unit: sent === null ? '' : 'kg/h',
+      unit: sent === null ? '' : perHour,
       note: 'kept back from the plan',
     },
     {
       name: `Steam limit ${when}`,
       value: isJudged ? round(limit) : 'not judged',
-      unit: isJudged ? 'kg/h' : '',
+      unit: isJudged ? perHour : '',
       note: !isJudged ? 'no limit is set' : isSet ? 'set by hand' : 'net export less the reserve',
     },
     {
       name: 'Peak of the plan',
       value: judged ? round(judged.peak.kgPerH) : '0',
-      unit: 'kg/h',
+      unit: perHour,
       note: judged ? clock.dayTime(judged.peak.minute) : '',
     },
-    overFigure(judged),
+    overFigure(judged, units),
   ];
 }
 
 /** The week in five numbers. */
 export function Figures(props: Props) {
+  const units = useUnits();
   return (
     <dl className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3 xl:grid-cols-5">
-      {figures(props).map(({ name, value, unit, note, look }) => (
+      {figures(props, units).map(({ name, value, unit, note, look }) => (
         <div key={name} className="flex min-w-0 gap-3">
           {look === 'over' ? <span className="hatch-over w-1 shrink-0 rounded-sm" aria-hidden="true" /> : null}
           <div className="min-w-0">

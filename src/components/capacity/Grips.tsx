@@ -1,5 +1,6 @@
 import type { KeyboardEvent, PointerEvent } from 'react';
-import { rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
 import type { Draft, Grip } from './draft';
 
 interface Box {
@@ -25,6 +26,7 @@ const GRIP_PX = 16;
 /** The span being set: its two ends and, for a limit, its level, each to be dragged or moved with the arrow keys. */
 export function Grips({ draft, box, clock, horizonMin, topKgPerH, onHold, onKey }: Props) {
   const { left, right, level, top, bottom } = box;
+  const units = useUnits();
   const ends = [
     { grip: 'from' as const, x: left, minute: draft.fromMin, name: 'From' },
     { grip: 'to' as const, x: right, minute: draft.toMin, name: 'To' },
@@ -67,7 +69,7 @@ export function Grips({ draft, box, clock, horizonMin, topKgPerH, onHold, onKey 
           aria-valuemin={0}
           aria-valuemax={topKgPerH}
           aria-valuenow={draft.value}
-          aria-valuetext={rateText(draft.value)}
+          aria-valuetext={units.rate(draft.value)}
           className="cursor-ns-resize"
           onPointerDown={(event) => onHold(event, 'level')}
           onKeyDown={(event) => onKey(event, 'level')}

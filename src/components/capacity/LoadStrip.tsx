@@ -2,11 +2,12 @@ import { useMemo, type PointerEvent } from 'react';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { fromMinutes, valueAt, type StepFunction } from '@/core/time/stepFunction';
 import { Hatch } from '../ui/Hatch';
-import { groupDigits, rateText } from '../time';
+import { groupDigits } from '../time';
+import { useUnits } from '../ui/units';
 import type { Draft } from './draft';
 import type { DeskPart } from './deskPart';
 import { Grips } from './Grips';
-import { areaPath, linePath, minuteAtX, rateTicks, xOf, yOf, type DeskScale } from './scale';
+import { areaPath, limitSnap, linePath, minuteAtX, rateTicks, xOf, yOf, type DeskScale } from './scale';
 
 interface Props extends DeskPart {
   readonly capacity: HeaderCapacity | undefined;
@@ -35,6 +36,7 @@ function overPath(scale: DeskScale, load: StepFunction, limit: StepFunction): st
 /** The plan's load under its limit; the limit is a line that one can take hold of. */
 export function LoadStrip(props: Props) {
   const { scale, days, clock, capacity, nowMin, draft, canSet, horizonMin } = props;
+  const units = useUnits();
   const load = useMemo(() => fromMinutes(props.loadKgPerH), [props.loadKgPerH]);
   const limit = capacity?.limitKgPerH ?? null;
   const base = capacity?.baseLoadKgPerH ?? NONE;
@@ -57,7 +59,9 @@ export function LoadStrip(props: Props) {
     if (!canSet || !capacity) return;
     const minute = minuteAtX(scale, event.clientX - event.currentTarget.getBoundingClientRect().left);
     const snapped = Math.round(minute / 5) * 5;
-    const value = limit ? Math.round(valueAt(limit, Math.min(snapped, horizonMin - 1)) / 50) * 50 : scale.topKgPerH / 2;
+    const snap = limitSnap(units);
+    const now = limit ? valueAt(limit, Math.min(snapped, horizonMin - 1)) : scale.topKgPerH / 2;
+    const value = Math.round(now / snap) * snap;
     const start = { subject: { kind: 'limit', headerId: capacity.headerId }, fromMin: snapped, toMin: snapped, value };
     props.onHold(event, start as Draft, 'draw');
   };
@@ -87,7 +91,7 @@ export function LoadStrip(props: Props) {
           className="stroke-rule"
         />
       ))}
-      {rateTicks(scale.topKgPerH).map((rate) => (
+      {rateTicks(scale.topKgPerH, units).map((rate) => (
         <line
           key={rate}
           x2={scale.width}
@@ -158,17 +162,18 @@ export function LoadStrip(props: Props) {
 
 /** Rates at the side of the strip. */
 export function RateLabels({ scale }: { readonly scale: DeskScale }) {
+  const units = useUnits();
   return (
     <svg width={72} height={scale.height} className="block overflow-visible" aria-hidden="true">
-      {rateTicks(scale.topKgPerH).map((rate) => (
+      {rateTicks(scale.topKgPerH, units).map((rate) => (
         <text key={rate} x={66} y={yOf(scale, rate) + 4} textAnchor="end" className="fill-ink-muted text-2xs">
-          {groupDigits(rate)}
+          {groupDigits(units.shown('steamRate', rate))}
         </text>
       ))}
       <text x={66} y={scale.height - 4} textAnchor="end" className="fill-ink-muted text-2xs">
-        kg/h
+        {units.symbol('steamRate')}
       </text>
-      <title>{`Up to ${rateText(scale.topKgPerH)}`}</title>
+      <title>{`Up to ${units.rate(scale.topKgPerH)}`}</title>
     </svg>
   );
 }

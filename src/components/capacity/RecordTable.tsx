@@ -1,5 +1,7 @@
 import type { CapacityEntryDto } from '@/contracts/capacity';
-import { rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 import { shareText } from './BoilerRow';
 
 interface Props {
@@ -8,9 +10,9 @@ interface Props {
   readonly horizonMin: number;
 }
 
-function valueText(entry: CapacityEntryDto): string {
+function valueText(entry: CapacityEntryDto, units: Units): string {
   if (entry.kind === 'firing') return shareText(entry.value ?? 0);
-  return entry.value === null ? 'taken back' : rateText(entry.value);
+  return entry.value === null ? 'taken back' : units.rate(entry.value);
 }
 
 function spanWords({ fromMin, toMin }: CapacityEntryDto, clock: Clock, horizonMin: number): string {
@@ -23,6 +25,7 @@ function spanWords({ fromMin, toMin }: CapacityEntryDto, clock: Clock, horizonMi
 
 /** Who has set what, when and why; newest first. */
 export function RecordTable({ entries, clock, horizonMin }: Props) {
+  const units = useUnits();
   if (entries.length === 0)
     return <p className="text-sm text-ink-muted">Nothing has been set for this week: the boilers run as they are.</p>;
   return (
@@ -31,7 +34,7 @@ export function RecordTable({ entries, clock, horizonMin }: Props) {
         <li key={entry.id} className="grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 py-2 text-sm">
           <p className="min-w-0">
             <span className="font-medium">
-              {entry.subject} {valueText(entry)}
+              {entry.subject} {valueText(entry, units)}
             </span>
             <span className="text-ink-muted">, {spanWords(entry, clock, horizonMin)}</span>
           </p>

@@ -3,7 +3,9 @@ import { ApiProblem, messageOf } from '../query/api';
 import { Button } from '../ui/Button';
 import { Field } from '../ui/Field';
 import { Notice } from '../ui/Notice';
-import { rateText, type Clock } from '../time';
+import type { Clock } from '../time';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 import { shareText } from './BoilerRow';
 import type { Draft } from './draft';
 import { MomentField } from './MomentField';
@@ -28,9 +30,9 @@ interface Props {
 }
 
 /** What the button does, in words: 'Set the limit to 4 300 kg/h', 'Shut Boiler 2'. */
-export function actionText({ subject, value }: Draft, name: string): string {
+export function actionText({ subject, value }: Draft, name: string, units: Units): string {
   if (subject.kind === 'limit')
-    return value === null ? 'Take the set limit back' : `Set the limit to ${rateText(value)}`;
+    return value === null ? 'Take the set limit back' : `Set the limit to ${units.rate(value)}`;
   if (value === null || value <= 0) return `Shut ${name}`;
   return value >= 1 ? `Light ${name}` : `Run ${name} ${shareText(value)}`;
 }
@@ -38,10 +40,12 @@ export function actionText({ subject, value }: Draft, name: string): string {
 /** The span being set, typed: from, to, value, reason. */
 export function SpanForm(props: Props) {
   const { draft, name, days, clock, onChange } = props;
+  const units = useUnits();
   const [reason, setReason] = useState('');
   const [missing, setMissing] = useState(false);
   const problem = props.error instanceof ApiProblem ? props.error.problem : null;
-  const fieldError = (path: string): string | undefined => problem?.fields?.find((f) => f.path === path)?.message;
+  const said = (message: string | undefined) => message && units.sentence(message);
+  const fieldError = (path: string): string | undefined => said(problem?.fields?.find((f) => f.path === path)?.message);
   const shownByField = problem?.fields?.some((f) =>
     ['fromMin', 'toMin', 'limitKgPerH', 'share', 'reason'].includes(f.path),
   );
@@ -96,13 +100,13 @@ export function SpanForm(props: Props) {
       </Notice>
       <div className="grid gap-2">
         <Button type="submit" look="main" busy={props.busy} disabled={isBackwards}>
-          {actionText(draft, name)}
+          {actionText(draft, name, units)}
         </Button>
         <Button onClick={props.onCancel}>Leave it</Button>
       </div>
       {props.error && !shownByField ? (
         <Notice look="over" live className="mt-3">
-          {messageOf(props.error)}
+          {units.sentence(messageOf(props.error))}
         </Notice>
       ) : null}
     </form>

@@ -1,5 +1,7 @@
 import { useState } from 'react';
 import { Field } from '../ui/Field';
+import { useUnits } from '../ui/units';
+import type { Units } from '../units';
 import type { Draft } from './draft';
 
 interface Props {
@@ -22,24 +24,28 @@ export function ValueField(props: Props) {
 }
 
 function LimitValue({ draft, keptKgPerH, error, onChange }: Props) {
+  const units = useUnits();
   const [typed, setTyped] = useState<string | null>(null);
   const taken = draft.value === null;
   const above = keptKgPerH !== null && draft.value !== null && draft.value > keptKgPerH + 1;
-  const wrong = typed !== null && !taken && rateOf(typed) === null ? 'A rate in kg/h, 0 or more.' : undefined;
+  const wrong =
+    typed !== null && !taken && rateOf(typed, units) === null
+      ? `A rate in ${units.symbol('steamRate')}, 0 or more.`
+      : undefined;
   const change = (text: string): void => {
     setTyped(text);
-    const value = rateOf(text);
+    const value = rateOf(text, units);
     if (value !== null) onChange(value);
   };
   return (
     <div>
       <Field
         label="Steam limit"
-        unit="kg/h"
+        unit={units.symbol('steamRate')}
         inputMode="numeric"
         autoComplete="off"
         disabled={taken}
-        value={typed ?? (draft.value === null ? '' : String(Math.round(draft.value)))}
+        value={typed ?? (draft.value === null ? '' : String(Math.round(units.shown('steamRate', draft.value))))}
         error={wrong ?? error}
         data-unread={wrong ? '' : undefined}
         hint={above ? 'Above net export less the reserve: that will hold instead.' : undefined}
@@ -59,10 +65,10 @@ function LimitValue({ draft, keptKgPerH, error, onChange }: Props) {
   );
 }
 
-/** A typed rate [kg/h]; null for what is no number or below 0. */
-function rateOf(text: string): number | null {
-  const value = Number(text.replace(/[\s,]/g, ''));
-  return text.trim() !== '' && Number.isFinite(value) && value >= 0 ? value : null;
+/** A typed rate [kg/h]; null for what can't be read or is below 0. */
+function rateOf(text: string, units: Units): number | null {
+  const value = units.parse('steamRate', text);
+  return value !== null && value >= 0 ? value : null;
 }
 
 function ShareValue({ draft, error, onChange }: Props) {

@@ -17,10 +17,11 @@ export interface DraftBounds {
   readonly horizonMin: number;
   readonly snapMin: number;
   readonly topKgPerH: number;
+  /** The step in which a limit moves. */
+  readonly snapKgPerH: number;
 }
 
 const LEAST_SPAN_MIN = 5;
-const LIMIT_SNAP_KG_PER_H = 50;
 
 const clamp = (value: number, least: number, most: number): number => Math.min(most, Math.max(least, value));
 const snapTo = (value: number, step: number): number => Math.round(value / step) * step;
@@ -60,13 +61,13 @@ export function dragDraft(
 function levelled(start: Draft, moved: { readonly kgPerH: number }, bounds: DraftBounds): number | null {
   if (start.subject.kind !== 'limit' || start.value === null) return start.value;
   if (moved.kgPerH === 0) return start.value;
-  return clamp(snapTo(start.value + moved.kgPerH, LIMIT_SNAP_KG_PER_H), 0, bounds.topKgPerH);
+  return clamp(snapTo(start.value + moved.kgPerH, bounds.snapKgPerH), 0, bounds.topKgPerH);
 }
 
 /** The draft after a press of an arrow key on a grip; null where the key does nothing there. */
 export function nudgeDraft(draft: Draft, grip: Grip, key: string, large: boolean, bounds: DraftBounds): Draft | null {
   const minutes = large ? 60 : bounds.snapMin;
-  const kgPerH = large ? 500 : LIMIT_SNAP_KG_PER_H;
+  const kgPerH = large ? 10 * bounds.snapKgPerH : bounds.snapKgPerH;
   const across = { ArrowLeft: -minutes, ArrowRight: minutes }[key];
   const down = { ArrowUp: kgPerH, ArrowDown: -kgPerH }[key];
   if (grip === 'level') return down === undefined ? null : dragDraft(draft, grip, { minutes: 0, kgPerH: down }, bounds);

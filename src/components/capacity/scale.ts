@@ -1,4 +1,5 @@
 import type { StepFunction } from '@/core/time/stepFunction';
+import type { Units } from '../units';
 
 /** Where minutes of the week and kg/h stand on the desk. */
 export interface DeskScale {
@@ -21,17 +22,25 @@ export function minuteAtX(scale: DeskScale, x: number): number {
   return Math.max(scale.from, Math.min(scale.to, minute));
 }
 
-/** A round number at or above a rate, so that a small change of the load does not move the whole drawing. [kg/h] */
-export function roundTop(kgPerH: number): number {
-  const step = kgPerH > 20_000 ? 5_000 : kgPerH > 5_000 ? 1_000 : 500;
-  return Math.max(step, Math.ceil((kgPerH * 1.06) / step) * step);
+/**
+ * A round number of the units shown at or above a rate, so that a small change of the load does not move the whole
+ * drawing. [kg/h]
+ */
+export function roundTop(kgPerH: number, units: Units): number {
+  const shown = units.shown('steamRate', kgPerH);
+  const step = shown > 20_000 ? 5_000 : shown > 5_000 ? 1_000 : 500;
+  return units.inside('steamRate', Math.max(step, Math.ceil((shown * 1.06) / step) * step));
 }
 
-/** Rates to write at the side: four to six round ones. [kg/h] */
-export function rateTicks(topKgPerH: number): number[] {
-  const step = [250, 500, 1_000, 2_000, 5_000, 10_000, 20_000].find((s) => topKgPerH / s <= 6) ?? 50_000;
-  return Array.from({ length: Math.floor(topKgPerH / step) }, (_, i) => (i + 1) * step);
+/** Rates to write at the side: four to six, round in the units shown. [kg/h] */
+export function rateTicks(topKgPerH: number, units: Units): number[] {
+  const top = units.shown('steamRate', topKgPerH) * (1 + 1e-9);
+  const step = [250, 500, 1_000, 2_000, 5_000, 10_000, 20_000].find((s) => top / s <= 6) ?? 50_000;
+  return Array.from({ length: Math.floor(top / step) }, (_, i) => units.inside('steamRate', (i + 1) * step));
 }
+
+/** The step in which a limit is drawn: 50 kg/h or 100 lb/h. [kg/h] */
+export const limitSnap = (units: Units): number => units.inside('steamRate', units.system === 'si' ? 50 : 100);
 
 interface Segment {
   readonly from: number;

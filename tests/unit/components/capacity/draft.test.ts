@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { dragDraft, firstDraft, nudgeDraft, type Draft, type Grip } from '@/components/capacity/draft';
 
-const bounds = { horizonMin: 10_080, snapMin: 15, topKgPerH: 8_000 };
+const bounds = { horizonMin: 10_080, snapMin: 15, topKgPerH: 8_000, snapKgPerH: 50 };
 const draft: Draft = { subject: { kind: 'limit', headerId: 'main' }, fromMin: 600, toMin: 720, value: 4_300 };
 const firing: Draft = { subject: { kind: 'firing', boilerId: 'b2' }, fromMin: 600, toMin: 720, value: 0 };
 
