@@ -16,32 +16,46 @@ export default {
     {
       name: 'core-stages-in-order',
       comment:
-        'A week is worked out in stages, duty, demand, header, levelling, schedule, shift; a stage reads what came ' +
+        'A week is worked out in stages, duty, demand, header, house, levelling, schedule, shift; a stage reads what came ' +
         'before it, never what comes after, so that each can be understood alone.',
       severity: 'error',
       from: { path: '^src/core/(quantity|time|steam|plant)/' },
-      to: { path: '^src/core/(duty|demand|header|levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/(duty|demand|header|house|levelling|schedule|shift|pipeline)' },
     },
     {
       name: 'duty-before-demand',
       comment: 'Duties are worked out before any load exists (see core-stages-in-order).',
       severity: 'error',
       from: { path: '^src/core/duty/' },
-      to: { path: '^src/core/(demand|header|levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/(demand|header|house|levelling|schedule|shift|pipeline)' },
     },
     {
       name: 'demand-before-header',
       comment: 'Demand belongs to one activity; the header sums them afterwards (see core-stages-in-order).',
       severity: 'error',
       from: { path: '^src/core/demand/' },
-      to: { path: '^src/core/(header|levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/(header|house|levelling|schedule|shift|pipeline)' },
     },
     {
       name: 'header-before-levelling',
       comment: 'The load is what it is, whoever moves batches about (see core-stages-in-order).',
       severity: 'error',
       from: { path: '^src/core/header/' },
+      to: { path: '^src/core/(house|levelling|schedule|shift|pipeline)' },
+    },
+    {
+      name: 'house-before-levelling',
+      comment: 'What the boiler house must do follows from loads and firings, whoever moves batches about.',
+      severity: 'error',
+      from: { path: '^src/core/house/' },
       to: { path: '^src/core/(levelling|schedule|shift|pipeline)' },
+    },
+    {
+      name: 'plans-without-the-house',
+      comment: 'Levelling, rules and shifts read the limit that the house gives, never its boilers.',
+      severity: 'error',
+      from: { path: '^src/core/(levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/house/' },
     },
     {
       name: 'solver-imports-core-only',
