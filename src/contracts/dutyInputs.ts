@@ -26,6 +26,9 @@ export function numberIn(range: Range) {
 const wholeIn = (range: Range) =>
   numberIn(range).refine(Number.isInteger, { error: `${range.name}: enter a whole number.` });
 
+/** A figure that may be left empty. */
+const optional = <T>(schema: z.ZodType<T, T>) => schema.nullish().transform((value) => value ?? undefined);
+
 const numbersIn = (ranges: Readonly<Record<string, Range>>) =>
   Object.fromEntries(Object.entries(ranges).map(([field, range]) => [field, numberIn(range)]));
 
@@ -78,7 +81,7 @@ function shapeOf(model: WorkedModel): z.ZodRawShape {
     });
   }
   for (const [field, list] of Object.entries(DUTY_LISTS[model] ?? {})) shape[field] = listSchema(list);
-  for (const [field, range] of Object.entries(DUTY_OPTIONAL[model] ?? {})) shape[field] = wholeIn(range).optional();
+  for (const [field, range] of Object.entries(DUTY_OPTIONAL[model] ?? {})) shape[field] = optional(wholeIn(range));
   const basis = DUTY_BASES[model];
   if (basis) shape[basis.field] = specificHeatBasisSchema;
   return shape;

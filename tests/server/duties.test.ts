@@ -118,6 +118,7 @@ describe('duties', () => {
     const [status, body] = await bodyOf(await post(change, request, id));
     expect(status).toBe(400);
     expect((body as { message: string }).message).toContain('On the kettle header');
+    expect(body).toMatchObject({ fields: [{ path: 'duty.inputs.jacketPressureBarG' }] });
     expect(await stored(id)).toMatchObject({ revision: 0 });
     expect((await list()).duties[0]?.uses).toEqual([
       { kind: 'route', text: 'Leek soup, cooking', href: '/products/north-soup' },

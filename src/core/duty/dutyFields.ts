@@ -1,6 +1,8 @@
 /** Fields of duty models that are no plain numbers, what they are called, and what a form says beside some. */
 import type { Range } from '../quantity/range';
+import type { Problem } from '../result';
 import type { WorkedModel } from './catalogue';
+import type { DutyModel } from './model';
 import { HOLD_COUNT, HOLD_RANGES, VENT_STEPS } from './stillRetortInput';
 import { STEP_COUNT, STEP_RANGES } from './overpressureRetortInput';
 
@@ -137,3 +139,12 @@ const HINTS_OF: Readonly<Partial<Record<WorkedModel, Readonly<Record<string, str
 /** What a form says beside a field; undefined where its name says it all. */
 export const hintOf = (model: WorkedModel, field: string): string | undefined =>
   HINTS_OF[model]?.[field] ?? HINTS[field];
+
+/**
+ * The field that a refusal to work a duty out belongs to; undefined where it is the header's steam. A pressure above the
+ * header's is a matter of the jacket or exchanger.
+ */
+export function faultField(duty: DutyModel, { code, field }: Problem): string | undefined {
+  if (code !== 'STEAM-THROTTLE') return field;
+  return ['jacketPressureBarG', 'exchangerPressureBarG'].find((pressure) => pressure in duty.inputs);
+}

@@ -1,5 +1,6 @@
 import { and, eq } from 'drizzle-orm';
 import type { ChangeDutyRequest, DutiesDto, NewDutyRequest } from '@/contracts/duties';
+import { faultField } from '@/core/duty/dutyFields';
 import { supplyOf } from '@/core/duty/supply';
 import { workOut, type DutyModel } from '@/core/duty/model';
 import { fail, ok, type Result } from '@/core/result';
@@ -144,7 +145,8 @@ function unworkableOn(duty: DutyModel, header: HeaderRow, altitudeM: number, isT
   if (!supply.ok) return withStatus(409, { ...supply.error, field: 'tryOnHeaderId' });
   const worked = workOut(duty, supply.value);
   if (worked.ok) return null;
-  const { code, message, field } = worked.error;
+  const { code, message } = worked.error;
+  const field = faultField(duty, worked.error);
   const told = isTried ? message : `On the ${header.name.toLowerCase()}, where it is used: ${message}`;
   return withStatus(400, { code, message: told, ...(field === undefined ? {} : { field: `duty.inputs.${field}` }) });
 }
