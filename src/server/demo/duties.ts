@@ -183,6 +183,12 @@ const ELIGIBLE: Readonly<Record<DemoProduct['line'], Partial<Record<Stage, reado
   },
 };
 
+/** Charging or loading before a stage's steam, unloading after it. [min] */
+export function demoStageEnds(stage: Stage): { readonly leadMin: number; readonly afterMin: number } {
+  const leadMin = { retort: RETORT_LEAD_MIN, cook: CHARGE_MIN }[stage as string] ?? 0;
+  return { leadMin, afterMin: stage === 'retort' ? UNLOAD_MIN : 0 };
+}
+
 function modeOn(product: DemoProduct, stage: Stage, unitName: string, loads: number): Mode {
   const unitId = `demo-${unitName}`;
   const headerId = plant.DEMO_UNITS.find((u) => u.id === unitId)?.headerId ?? plant.MAIN_HEADER;
@@ -197,8 +203,8 @@ function modeOn(product: DemoProduct, stage: Stage, unitName: string, loads: num
     return { unitId, minutes, phases: [], uses: [crates(minutes, 4)], dutyId: null };
   }
   const dutyId = `${product.id}-${stage}`;
-  const leadMin = { retort: RETORT_LEAD_MIN, cook: CHARGE_MIN }[stage as string] ?? 0;
-  const draw = drawOf(dutyId, headerId, leadMin, stage === 'retort' ? UNLOAD_MIN : 0);
+  const { leadMin, afterMin } = demoStageEnds(stage);
+  const draw = drawOf(dutyId, headerId, leadMin, afterMin);
   if (stage !== 'retort') return { unitId, uses: [], dutyId, ...draw };
   const operator: LimitUse = { limitId: plant.OPERATORS, offsetMin: leadMin - 2, minutes: 8, amount: 1 };
   return { unitId, uses: [crates(draw.minutes, 4), operator], dutyId, ...draw };
@@ -222,8 +228,9 @@ export function demoCleaning(): CleaningRule[] {
         const kind = plant.cleaningKind(from, to);
         const minutes = minutesOf[kind];
         if (minutes === undefined) return [];
-        const phases = cleaningPhases(`demo-clean-${kind}`, HEADER_OF_KIND[unitKind] ?? plant.MAIN_HEADER);
-        return [{ unitKind, fromFamilyId: from, toFamilyId: to, minutes, kind, phases, uses: [] }];
+        const dutyId = `demo-clean-${kind}`;
+        const phases = cleaningPhases(dutyId, HEADER_OF_KIND[unitKind] ?? plant.MAIN_HEADER);
+        return [{ unitKind, fromFamilyId: from, toFamilyId: to, minutes, kind, phases, uses: [], dutyId }];
       }),
     ),
   );

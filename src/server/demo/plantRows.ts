@@ -4,7 +4,7 @@ import type { Unit } from '../../core/plant/plant';
 import type { Db } from '../../db/client';
 import * as schema from '../../db/schema';
 import { hashPassword } from '../auth/password';
-import { DEMO_DUTIES, demoCleaning, demoModes } from './duties';
+import { DEMO_DUTIES, demoCleaning, demoModes, demoStageEnds } from './duties';
 import { DEMO_PASSWORD, DEMO_PEOPLE } from './people';
 import * as demo from './plant';
 import { DEMO_PRODUCTS, type DemoProduct } from './products';
@@ -86,6 +86,7 @@ const productRow = (product: DemoProduct) => ({
   containerKg: 0.055,
   fillKg: 0.425,
   casePieces: 24,
+  initialC: product.initialC,
 });
 
 const processRow = (product: DemoProduct, now: Date) => ({
@@ -121,8 +122,9 @@ function routeRows(product: DemoProduct) {
       position,
       stage,
       unitId: mode.unitId,
-      minutes: mode.minutes,
+      minutes: mode.dutyId === null ? mode.minutes : 0,
       dutyId: mode.dutyId,
+      ...demoStageEnds(stage),
       uses: [...mode.uses],
     })),
   );
