@@ -4,6 +4,7 @@ import { buildInto, startDist } from './support/build';
 import { demoPeople, migrate, seedDemo } from './support/data';
 import { atEnd, runCommand } from './support/finish';
 import { keepAlive } from './support/keepAlive';
+import { ownMail } from './support/localMail';
 import { takeLock } from './support/lock';
 import { freePortFrom } from './support/ports';
 import { ensureDatabase, holdServer } from './support/postgres/hold';
@@ -43,12 +44,20 @@ async function openDatabase(): Promise<string> {
   return url;
 }
 
+/** What the processes must be told of the mail server; ours only receives, on loopback. */
+async function openMail(): Promise<Record<string, string>> {
+  const own = await ownMail(statePath('mail'));
+  if (!own) return {};
+  atEnd(() => own.mail.stop());
+  return own.env;
+}
+
 async function serve(databaseUrl: string): Promise<string> {
   const wanted = Number(process.env['PORT'] || 4321);
   const port = await freePortFrom(wanted);
   if (port !== wanted) say(`Port ${wanted} is taken; using ${port}`);
   const address = process.env['APP_URL'] || `http://localhost:${port}`;
-  const env = { DATABASE_URL: databaseUrl, PORT: String(port), APP_URL: address };
+  const env = { DATABASE_URL: databaseUrl, PORT: String(port), APP_URL: address, ...(await openMail()) };
   writeFileSync(addressFile, `${address}\n`);
   atEnd(async () => rmSync(addressFile, { force: true }));
   say('Starting the web process and the levelling worker');

@@ -26,6 +26,9 @@ export const PERMISSIONS = {
   'floor.record': ['lineSupervisor'],
   'processData.read': ROLES,
   'processData.release': ['qualityLead'],
+  'people.manage': ['administrator'],
+  'tablets.manage': ['administrator'],
+  'mail.read': ['administrator'],
 } as const satisfies Record<string, readonly Role[]>;
 
 export type Permission = keyof typeof PERMISSIONS;

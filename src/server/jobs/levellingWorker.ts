@@ -9,9 +9,12 @@ const STOP_MS = 8_000;
 
 /**
  * Takes levelling runs from the queue until the process is asked to stop; any number of processes may. What it works on
- * by then goes back to the queue.
+ * by then goes back to the queue. `stopBeside` ends what else the process does, before the database is let go.
  */
-export async function runLevellingWorker(startThread: StartThread): Promise<void> {
+export async function runLevellingWorker(
+  startThread: StartThread,
+  stopBeside: () => Promise<void> = async () => undefined,
+): Promise<void> {
   process.on('unhandledRejection', (error) => console.error('levelling worker:', error));
   const stop = new AbortController();
   const queue = await openQueue(true);
@@ -26,7 +29,7 @@ export async function runLevellingWorker(startThread: StartThread): Promise<void
   onStopSignal(async () => {
     clearInterval(reaping);
     stop.abort();
-    await queue.stop({ graceful: true, timeout: STOP_MS });
+    await Promise.all([queue.stop({ graceful: true, timeout: STOP_MS }), stopBeside()]);
     await closeDb();
   });
   console.log('The levelling worker is ready.');
