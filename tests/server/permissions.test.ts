@@ -10,6 +10,7 @@ const METHODS = ['GET', 'POST', 'PUT', 'PATCH', 'DELETE', 'HEAD', 'OPTIONS', 'AL
 const EVERYBODY: readonly Role[] = ROLES;
 const PLANNER: readonly Role[] = ['planner'];
 const UTILITIES: readonly Role[] = ['utilitiesLead'];
+const PLANT_EDITORS: readonly Role[] = ['utilitiesLead', 'administrator'];
 
 const LIBRARY: readonly Role[] = ['planner', 'utilitiesLead', 'administrator'];
 
@@ -27,6 +28,15 @@ const WHO_MAY: Readonly<Record<string, readonly Role[] | 'anybody'>> = {
   'POST process-data/[id]/release': ['qualityLead'],
   'GET units/spread': EVERYBODY,
   'PUT units/[unit]/spread': ['planner', 'utilitiesLead', 'administrator'],
+  'GET plant/index': EVERYBODY,
+  'POST plant/[kind]/index': PLANT_EDITORS,
+  'POST plant/[kind]/order': PLANT_EDITORS,
+  'POST plant/[kind]/[id]/index': PLANT_EDITORS,
+  'POST plant/[kind]/[id]/retire': PLANT_EDITORS,
+  'GET practice/index': EVERYBODY,
+  'POST practice/index': ['planner', 'utilitiesLead', 'administrator'],
+  'POST practice/[id]/release': ['qualityLead'],
+  'POST practice/[id]/withdraw': ['qualityLead'],
   'GET weeks/[week]/capacity': EVERYBODY,
   'POST weeks/[week]/firings': UTILITIES,
   'POST weeks/[week]/limits': UTILITIES,

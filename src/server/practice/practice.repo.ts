@@ -2,9 +2,16 @@ import { and, desc, eq, isNotNull, isNull } from 'drizzle-orm';
 import type { PracticeRuleKind } from '@/contracts/practice';
 import type { PracticeLimits } from '@/core/plant/plant';
 import type { Db } from '@/db/client';
-import { practiceRules } from '@/db/schema/index';
+import { headers, practiceRules, processData, products, units, ventGroups } from '@/db/schema/index';
 
 export type PracticeRow = typeof practiceRules.$inferSelect;
+
+/** The longest waits that the plant allows, whatever a product's document says. [min] */
+export interface LongestWaits {
+  readonly sinceClosingMin: number;
+  readonly initialTemperatureMin: number | null;
+  readonly source: string;
+}
 
 /** The rule in force of a kind that is set for the whole plant; null where none is. */
 async function inForce(tx: Db, plantId: string, kind: PracticeRuleKind): Promise<PracticeRow | null> {
@@ -26,7 +33,55 @@ export async function cleanlinessInForce(tx: Db, plantId: string): Promise<Pract
   return { greatestRunningMin, greatestStandingDirtyMin, allergenReleaseMin };
 }
 
-/** The longest wait since closing that the plant allows whatever a product's document says; null where none is set. [min] */
-export async function longestWaitInForce(tx: Db, plantId: string): Promise<number | null> {
-  return (await inForce(tx, plantId, 'waits'))?.values.longestWaitSinceClosingMin ?? null;
+/** The plant's longest waits in force; null where none are set. */
+export async function longestWaitsInForce(tx: Db, plantId: string): Promise<LongestWaits | null> {
+  const rule = await inForce(tx, plantId, 'waits');
+  const sinceClosingMin = rule?.values.longestWaitSinceClosingMin;
+  if (!rule || typeof sinceClosingMin !== 'number') return null;
+  const { longestWaitForInitialTemperatureMin: initialTemperatureMin = null } = rule.values;
+  return { sinceClosingMin, initialTemperatureMin, source: rule.source };
+}
+
+/** Every rule of a plant, newest first. */
+export async function practiceRows(tx: Db, plantId: string): Promise<PracticeRow[]> {
+  return tx
+    .select()
+    .from(practiceRules)
+    .where(eq(practiceRules.plantId, plantId))
+    .orderBy(desc(practiceRules.createdAt), desc(practiceRules.id));
+}
+
+/** Vent groups in use with the headers that their retorts draw from. */
+export async function ventGroupsWithHeaders(tx: Db, plantId: string) {
+  const groups = await tx
+    .select()
+    .from(ventGroups)
+    .where(and(eq(ventGroups.plantId, plantId), isNull(ventGroups.retiredAt)))
+    .orderBy(ventGroups.position, ventGroups.id);
+  const drawn = await tx
+    .selectDistinct({ groupId: units.ventGroupId, name: headers.name, pressureBarG: headers.pressureBarG })
+    .from(units)
+    .innerJoin(headers, eq(headers.id, units.headerId))
+    .where(and(eq(units.plantId, plantId), isNull(units.retiredAt), isNotNull(units.ventGroupId)));
+  return groups.map((group) => ({
+    group,
+    headers: drawn
+      .filter(({ groupId }) => groupId === group.id)
+      .map(({ name, pressureBarG }) => ({ name, pressureBarG })),
+  }));
+}
+
+/** Released process data with its longest wait since closing. */
+export async function statedWaits(tx: Db, plantId: string) {
+  return tx
+    .select({
+      product: products.name,
+      document: processData.document,
+      issue: processData.issue,
+      values: processData.values,
+    })
+    .from(processData)
+    .innerJoin(products, eq(products.id, processData.productId))
+    .where(and(eq(processData.plantId, plantId), isNotNull(processData.releasedAt), isNull(processData.withdrawnAt)))
+    .orderBy(products.name);
 }

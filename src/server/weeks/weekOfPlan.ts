@@ -5,6 +5,8 @@ import type { Db } from '@/db/client';
 import { loadCapacity } from '../capacity/loadCapacity';
 import { activityOfRow, linkOfRow } from '../plans/activityOfRow';
 import { activityRows, linkRows, processDataRows, type ActivityRow, type PlanRow } from '../plans/plans.repo';
+import { longestWaitsInForce } from '../practice/practice.repo';
+import { keptWaits } from '../practice/waits';
 import { expandShifts, unitCalendars } from './calendar';
 import type { FoundWeek } from './findWeek';
 import { plantModelOf } from './plantModel';
@@ -29,7 +31,7 @@ export async function weekOfPlan(tx: Db, { plant, time }: FoundWeek, plan: PlanR
     calendars: unitCalendars(time, model.units, shifts, await exceptionRows(tx, plant.id, time)),
     capacities: await loadCapacity(tx, plant.id, time),
     activities: rows.map((row) => activityOfRow(row, time, processData)),
-    links: (await linkRows(tx, plan)).map(linkOfRow),
+    links: keptWaits((await linkRows(tx, plan)).map(linkOfRow), await longestWaitsInForce(tx, plan.plantId)),
   };
   return { week, rows, shifts };
 }
