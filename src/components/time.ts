@@ -78,13 +78,3 @@ export function spanText(minutes: number): string {
 export function groupDigits(value: number): string {
   return String(Math.round(value)).replace(/\B(?=(\d{3})+(?!\d))/g, '\u2009');
 }
-
-/** kg/h for screens, rounded to 5 (inputs are good to 20 % at best): '1 555 kg/h'. */
-export function rateText(kgPerH: number): string {
-  return `${groupDigits(Math.round(kgPerH / 5) * 5)}\u00a0kg/h`;
-}
-
-/** kg for screens: '2 128 kg'; below 10 with one decimal. */
-export function kgText(kg: number): string {
-  return kg > 0 && kg < 10 ? `${kg.toFixed(1)}\u00a0kg` : `${groupDigits(kg)}\u00a0kg`;
-}

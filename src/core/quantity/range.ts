@@ -13,6 +13,18 @@ export interface Range {
 export const shortNumber = (value: number): string => String(Number(value.toPrecision(6)));
 
 /**
+ * {@link shortNumber} of an end of a range in other units, rounded into the range: what a person then types as the end is
+ * inside.
+ */
+export function shortEnd(value: number, end: 'least' | 'most'): string {
+  const near = Number(value.toPrecision(6));
+  const slack = 1e-12 * Math.abs(value);
+  if (value === 0 || (end === 'least' ? near >= value - slack : near <= value + slack)) return shortNumber(near);
+  const step = 10 ** (Math.floor(Math.log10(Math.abs(value))) - 5);
+  return shortNumber(end === 'least' ? near + step : near - step);
+}
+
+/**
  * Checks one number against its range; not-a-number is out of range.
  * @returns undefined when inside, else a problem naming the value and the range.
  */

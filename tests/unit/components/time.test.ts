@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { groupDigits, kgText, makeClock, rateText, spanText } from '@/components/time';
+import { groupDigits, makeClock, spanText } from '@/components/time';
 
 const berlin = (firstInstant: string) => makeClock({ firstInstant, timeZone: 'Europe/Berlin' });
 
@@ -48,9 +48,4 @@ describe('spanText', () => {
 
 describe('numbers on screens', () => {
   it('should group thousands with thin spaces', () => expect(groupDigits(1234567)).toBe('1\u2009234\u2009567'));
-  it('should round rates to 5 kg/h', () => expect(rateText(1552.6)).toBe('1\u2009555\u00a0kg/h'));
-  it('should keep a decimal of small weights only', () => {
-    expect(kgText(4.25)).toBe('4.3\u00a0kg');
-    expect(kgText(2128.4)).toBe('2\u2009128\u00a0kg');
-  });
 });

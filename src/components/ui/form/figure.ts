@@ -1,5 +1,5 @@
 import { quantityOfUnit, type DisplayQuantity } from '../../../core/quantity/display';
-import { shortNumber } from '../../../core/quantity/range';
+import { shortEnd, shortNumber } from '../../../core/quantity/range';
 import { readNumber, type Units } from '../../units';
 
 /** A figure of a form: a quantity that converts, or a unit that is the same to everybody. */
@@ -35,9 +35,11 @@ export function figureValue(units: Units, kind: FigureKind, text: string): numbe
 /** '0.5 to 16 bar g', 'at least 0 kg'; nothing where no end is known. Ends in SI, spoken in the units shown. */
 export function spanSaid(units: Units, kind: FigureKind, min?: number, max?: number): string {
   const unit = unitShown(units, kind);
-  const said = (value: number): string => figureText(units, kind, value);
+  const quantity = quantityOf(kind);
+  const said = (value: number, end: 'least' | 'most'): string =>
+    quantity ? shortEnd(units.shown(quantity, value), end) : shortNumber(value);
   const behind = unit === '' ? '' : ` ${unit}`;
-  if (min !== undefined && max !== undefined) return `${said(min)} to ${said(max)}${behind}`;
-  if (min !== undefined) return `at least ${said(min)}${behind}`;
-  return max === undefined ? '' : `at most ${said(max)}${behind}`;
+  if (min !== undefined && max !== undefined) return `${said(min, 'least')} to ${said(max, 'most')}${behind}`;
+  if (min !== undefined) return `at least ${said(min, 'least')}${behind}`;
+  return max === undefined ? '' : `at most ${said(max, 'most')}${behind}`;
 }
