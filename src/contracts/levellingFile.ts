@@ -42,11 +42,33 @@ const use = z.strictObject({
 });
 const linkEnd = z.strictObject({ activityId: id, anchor: z.enum(['start', 'end']), offsetMin: minute });
 
+const uses = z.array(use).max(200);
+const mode = z.strictObject({
+  unitId: id,
+  minutes: length,
+  uses,
+  warm: z
+    .array(z.strictObject({ gapUpToMin: length, uses }))
+    .max(20)
+    .refine((classes) => classes.every((c, i) => i === 0 || c.gapUpToMin > (classes[i - 1]?.gapUpToMin ?? 0)), {
+      message: 'Classes of gaps must ascend in “gapUpToMin”.',
+    })
+    .optional(),
+  before: z
+    .strictObject({
+      idle: z.array(z.strictObject({ resourceId: id, amount: z.number().min(0).max(1e9) })).max(20),
+      idleUpToMin: length,
+      warmUp: uses,
+    })
+    .optional(),
+});
+
 const activity = z.strictObject({
   id,
   batchId: id,
   familyId: id.nullable(),
-  modes: z.array(z.strictObject({ unitId: id, minutes: length, uses: z.array(use).max(200) })).min(1),
+  isCleaning: z.boolean().optional(),
+  modes: z.array(mode).min(1),
   plan: z.strictObject({ unitId: id, start: minute }),
   movable: z.boolean(),
   takenOffBy: id.nullable(),
@@ -77,7 +99,7 @@ export const problemFileSchema = z.strictObject({
       fromFamilyId: id,
       toFamilyId: id,
       minutes: length,
-      uses: z.array(use).max(200),
+      uses,
     }),
   ),
   resources: z.array(

@@ -8,6 +8,8 @@ const FAMILIES = ['f0', 'f1'];
 /** What a small random problem has in it. */
 export interface SmallShape {
   readonly cleaningDraws: boolean;
+  /** Runs idle, warm up and are still warm by the gap before them, and some are stored cleanings. */
+  readonly gapDraws?: boolean;
 }
 
 /**
@@ -21,6 +23,7 @@ export function smallProblem(seed: number, shape: SmallShape = { cleaningDraws: 
   const links: ProblemLink[] = [];
   const batches = 3 + wholeBelow(random, 3);
   for (let b = 0; b < batches; b++) addBatch(random, b, free, activities, links);
+  if (shape.gapDraws) activities.forEach((a, i) => (activities[i] = withGapDraws(random, a)));
   return {
     version: 1,
     horizonMin: HORIZON,
@@ -127,6 +130,23 @@ function modeOn(random: Random, unitId: string, minutes: number): ProblemMode {
   if (random() < 0.5) uses.push(use('vents:g', 0, 3, 1));
   if (random() < 0.5) uses.push(use('limit:people', 1, 3, 1));
   return { unitId, minutes, uses };
+}
+
+function withGapDraws(random: Random, activity: ProblemActivity): ProblemActivity {
+  if (random() < 0.15) return { ...activity, familyId: null, isCleaning: true };
+  const modes = activity.modes.map((mode): ProblemMode => {
+    const warm = [
+      { gapUpToMin: 4, uses: [use('header:main', 0, 2, 15), use('vents:g', 0, 1, 1)] },
+      { gapUpToMin: 12, uses: [use('header:main', 1, 4, 18)] },
+    ];
+    const before = {
+      idle: [{ resourceId: 'header:main', amount: 8 }],
+      idleUpToMin: 3 + wholeBelow(random, 8),
+      warmUp: [use('header:main', -4, 3, 30), use('header:main', -1, 1, 12)],
+    };
+    return { ...mode, ...(random() < 0.6 ? { warm } : {}), ...(random() < 0.6 ? { before } : {}) };
+  });
+  return { ...activity, modes };
 }
 
 function linkTo(

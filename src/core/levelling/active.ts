@@ -14,15 +14,17 @@ export interface ActiveDraw {
 /** Positions that a look back along a unit's queue may take: cleaning may outlast the activity that it follows. */
 const LOOK_BACK = 3;
 
-/** Draws on a resource at a minute, cleaning included. */
+/** Draws on a resource at a minute, cleanings and warm-ups included; an idle spell has no start of its own to move. */
 export function activeDraws(state: State, resource: number, minute: number): ActiveDraw[] {
   const found: ActiveDraw[] = [];
   for (let unit = 0; unit < state.queues.length; unit++) {
     const queue = state.queues[unit]!;
     const last = state.position(unit, minute + 1) - 1;
+    const next = queue[last + 1];
+    if (next !== undefined) collect(found, state, next, state.gaps.warmUpOf(next), 0, resource, minute);
     for (let i = last; i >= 0 && i > last - LOOK_BACK; i--) {
       const a = queue[i]!;
-      collect(found, state, a, state.mode(a).draws, 0, resource, minute);
+      collect(found, state, a, state.gaps.drawsOf(a), 0, resource, minute);
       const cleaning = state.cleaningOf(a);
       if (cleaning) collect(found, state, a, cleaning.draws, cleaning.offset, resource, minute);
     }

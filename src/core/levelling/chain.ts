@@ -1,6 +1,6 @@
 import { toMinutes } from '../time/stepFunction';
 import type { EdgeCause, EdgeList } from './edges';
-import { placedUses, type PlacedUse } from './evaluate';
+import { placedUses, type PlacedUse } from './placedUses';
 import { isUnlimited, type Plan, type Problem, type ProblemResource } from './problem';
 
 /** A draw, or a block that stands for capacity which is not there; it hands its amount on to later draws. */

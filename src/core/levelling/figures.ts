@@ -1,7 +1,8 @@
 import { valueAt } from '../time/stepFunction';
-import { judge, momentOf, type Judgement } from './evaluate';
+import { judge, type Judgement } from './evaluate';
 import type { Plan, Problem, ProblemResource } from './problem';
 import type { LevelFigures } from './proposal';
+import { momentOf } from './sequences';
 import { headerResource } from './uses';
 
 const TRACE = 1e-3;

@@ -35,8 +35,9 @@ const PUSH_PRICE = 2;
  * what is left under the limits with sliding sums, kept to the gaps, cleaning and shifts of the eligible units, and
  * the members are joined by dynamic programming over their links with sliding-window minima.
  *
- * Exact for the present prices up to two things: draws of members that overlap one another, and of a cleaning with
- * the members beside it, are priced as if each were alone.
+ * Exact for the present prices up to three things: draws of members that overlap one another, and of a cleaning with
+ * the members beside it, are priced as if each were alone; and every place is priced as one of a cold machine, warmed
+ * up before it, whatever the gap: the state then draws what the gap asks for.
  */
 export class Kernel {
   private readonly slots: Slot[] = [];
@@ -141,7 +142,7 @@ export class Kernel {
       const mode = activity.modes[m]!;
       if (mode.shape !== shape) {
         shape = mode.shape;
-        this.priceStarts(mode.draws, slot.lo, slot.count);
+        this.priceStarts(mode.priced, slot.lo, slot.count);
       }
       if (mode.unit < 0) found = this.fillSpan(members, k, m, null, taker) || found;
       else found = this.fillGaps(members, k, m, window, taker) || found;
@@ -507,7 +508,7 @@ export class Kernel {
     const { home, modes, cleanAfter } = state.model.activities[member.activity]!;
     const mode = modes[home.mode]!;
     if (this.slots[k]!.homeCost === Infinity) return Infinity;
-    const own = this.priceAt(mode.draws, home.start) + state.placeCost(member.activity, home.start, home.mode);
+    const own = this.priceAt(mode.priced, home.start) + state.placeCost(member.activity, home.start, home.mode);
     const gap = this.gapAt(mode.unit, home.start);
     if (!gap) return own;
     const cleaning = gap.next < 0 ? null : state.cleaningBetween(mode.unit, member.activity, gap.next);

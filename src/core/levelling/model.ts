@@ -1,4 +1,11 @@
-import { isUnlimited, type Problem, type ProblemActivity, type ProblemLink, type Use } from './problem';
+import {
+  isUnlimited,
+  type Problem,
+  type ProblemActivity,
+  type ProblemLink,
+  type Use,
+  type UsesBefore,
+} from './problem';
 import { toMinutes } from '../time/stepFunction';
 
 /** Stands for "no bound" in whole minutes. */
@@ -16,9 +23,27 @@ export interface Draw {
 export interface Mode {
   readonly unit: number;
   readonly minutes: number;
+  /** Of a cold machine. */
   readonly draws: readonly Draw[];
+  /** Of a machine still warm, by the gap since the run before, ascending. */
+  readonly warm: readonly WarmDraws[];
+  readonly before: DrawsBefore | null;
+  /** What its starts are priced with wherever they are: a cold machine, warmed up before. */
+  readonly priced: readonly Draw[];
   readonly shape: number;
   readonly length: number;
+}
+
+export interface WarmDraws {
+  readonly gapUpTo: number;
+  readonly draws: readonly Draw[];
+}
+
+/** Drawn before a run: all through a short gap, or a warm-up with offsets from the run's start. */
+export interface DrawsBefore {
+  readonly idle: readonly { readonly resource: number; readonly amount: number }[];
+  readonly idleUpTo: number;
+  readonly warmUp: readonly Draw[];
 }
 
 /** A link as seen from the starts: least <= (start of `to`) - (start of `from`) - base <= greatest. */
@@ -50,6 +75,8 @@ export interface ModelActivity {
   readonly home: { readonly start: number; readonly mode: number };
   readonly homeOutsideShift: boolean;
   readonly movable: boolean;
+  /** A stored cleaning: it leaves no machine warm. */
+  readonly isCleaning: boolean;
   /** Link whose later moment frees the unit, or -1. */
   readonly takenOffBy: number;
   readonly cleanAfter: number;
@@ -130,6 +157,7 @@ export function toModel(problem: Problem): Model {
       home: { start: a.plan.start, mode },
       homeOutsideShift: !spans.some(([from, to]) => from <= a.plan.start && free <= to),
       movable: a.movable,
+      isCleaning: a.isCleaning === true,
       takenOffBy: a.takenOffBy === null ? -1 : (linkIndex.get(a.takenOffBy) ?? -1),
       cleanAfter: a.cleanAfterMin,
       earliest: a.earliestStart,
@@ -221,6 +249,14 @@ function toDraws(uses: readonly Use[], resources: ReadonlyMap<string, number>): 
   });
 }
 
+function toBefore({ idle, idleUpToMin, warmUp }: UsesBefore, resources: ReadonlyMap<string, number>): DrawsBefore {
+  const idling = idle.flatMap(({ resourceId, amount }) => {
+    const resource = resources.get(resourceId);
+    return resource === undefined ? [] : [{ resource, amount }];
+  });
+  return { idle: idling, idleUpTo: idleUpToMin, warmUp: toDraws(warmUp, resources) };
+}
+
 function toModes(
   a: ProblemActivity,
   units: ReadonlyMap<string, number>,
@@ -230,12 +266,15 @@ function toModes(
   const lengths = new Map<number, number>();
   return a.modes.map((m) => {
     const draws = toDraws(m.uses, resources);
-    const key = JSON.stringify([m.minutes, draws]);
+    const warm = (m.warm ?? []).map((w) => ({ gapUpTo: w.gapUpToMin, draws: toDraws(w.uses, resources) }));
+    const before = m.before ? toBefore(m.before, resources) : null;
+    const priced = before ? [...before.warmUp, ...draws] : draws;
+    const key = JSON.stringify([m.minutes, draws, warm, before]);
     const shape = shapes.get(key) ?? shapes.size;
     const length = lengths.get(m.minutes) ?? lengths.size;
     shapes.set(key, shape);
     lengths.set(m.minutes, length);
-    return { unit: units.get(m.unitId) ?? -1, minutes: m.minutes, draws, shape, length };
+    return { unit: units.get(m.unitId) ?? -1, minutes: m.minutes, draws, warm, before, priced, shape, length };
   });
 }
 

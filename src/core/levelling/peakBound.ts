@@ -1,6 +1,13 @@
 import { toMinutes } from '../time/stepFunction';
-import { placedUses } from './evaluate';
-import { planOf, type Problem, type ProblemActivity, type ProblemMode, type ProblemResource } from './problem';
+import {
+  planOf,
+  type Problem,
+  type ProblemActivity,
+  type ProblemMode,
+  type ProblemResource,
+  type Use,
+} from './problem';
+import { modeIn } from './sequences';
 
 /** What no plan of a problem can bring the greatest load of a header below, and what that rests on. */
 export interface PeakBound {
@@ -31,15 +38,24 @@ export function peakBound(problem: Problem, resource: ProblemResource): PeakBoun
   return bounds.reduce((best, bound) => (bound.kgPerH > best.kgPerH ? bound : best));
 }
 
-/** Base load and what can't move, by minute. [kg/h] */
+/** Base load and the least that what can't move draws, by minute. [kg/h] */
 function groundLoad(problem: Problem, resource: ProblemResource): Float64Array {
   const load = toMinutes(resource.baseLoad, problem.horizonMin);
-  for (const use of placedUses(problem, planOf(problem))) {
-    if (use.resourceId !== resource.id || use.isCleaning || problem.activities[use.activity]?.movable) continue;
-    const to = Math.min(load.length, use.start + use.minutes);
-    for (let t = Math.max(0, use.start); t < to; t++) load[t] = (load[t] as number) + use.amount;
-  }
+  const plan = planOf(problem);
+  problem.activities.forEach((activity, i) => {
+    if (activity.movable) return;
+    leastOf(profilesOf(modeIn(activity, plan, i), resource.id)).forEach((amount, minute) => {
+      const t = activity.plan.start + minute;
+      if (t >= 0 && t < load.length) load[t] = (load[t] as number) + amount;
+    });
+  });
   return load;
+}
+
+/** The least at each minute; a profile that has ended draws nothing. */
+function leastOf(profiles: readonly Float64Array[]): Float64Array {
+  const [first, ...more] = profiles;
+  return (first ?? new Float64Array()).map((amount, t) => Math.min(amount, ...more.map((one) => one[t] ?? 0)));
 }
 
 function fixedBound(ground: Float64Array): PeakBound {
@@ -51,8 +67,7 @@ function fixedBound(ground: Float64Array): PeakBound {
 /** The least greatest load that an activity makes with the ground alone, over its modes and starts. */
 function singleBound(activity: ProblemActivity, resource: ProblemResource, ground: Float64Array): PeakBound {
   let least = Infinity;
-  for (const mode of activity.modes) {
-    const own = profileOf(mode, resource.id);
+  for (const own of activity.modes.flatMap((mode) => profilesOf(mode, resource.id))) {
     if (own.length === 0) least = 0;
     for (let start = activity.earliestStart; start <= activity.latestStart && least > 0; start++) {
       least = Math.min(least, greatestFrom(own, ground, start, least));
@@ -62,14 +77,22 @@ function singleBound(activity: ProblemActivity, resource: ProblemResource, groun
   return { kgPerH: Number.isFinite(least) ? least : 0, kind: 'single', from, to, activityId: id };
 }
 
-/** Draws of a mode on a resource by minute after its start. */
-function profileOf(mode: ProblemMode, resourceId: string): Float64Array {
-  const uses = mode.uses.filter((use) => use.resourceId === resourceId && use.offsetMin >= 0);
-  const own = new Float64Array(Math.max(0, ...uses.map((use) => use.offsetMin + use.minutes)));
-  for (const use of uses) {
-    for (let t = use.offsetMin; t < use.offsetMin + use.minutes; t++) own[t] = (own[t] as number) + use.amount;
-  }
-  return own;
+/** The uses that a mode can have: of a cold machine, and of one that is still warm. */
+const usesOf = (mode: ProblemMode): readonly (readonly Use[])[] => [
+  mode.uses,
+  ...(mode.warm ?? []).map(({ uses }) => uses),
+];
+
+/** What a mode can draw on a resource, by minute after its start. */
+function profilesOf(mode: ProblemMode, resourceId: string): Float64Array[] {
+  return usesOf(mode).map((all) => {
+    const uses = all.filter((use) => use.resourceId === resourceId && use.offsetMin >= 0);
+    const own = new Float64Array(Math.max(0, ...uses.map((use) => use.offsetMin + use.minutes)));
+    for (const use of uses) {
+      for (let t = use.offsetMin; t < use.offsetMin + use.minutes; t++) own[t] = (own[t] as number) + use.amount;
+    }
+    return own;
+  });
 }
 
 /** Stops as soon as it is no better than `enough`. */
@@ -108,7 +131,7 @@ function energyBound(problem: Problem, resource: ProblemResource, ground: Float6
 
 /** The span that an activity draws in wherever it starts, and the least that it draws. */
 function confinedTo(activity: ProblemActivity, resourceId: string): Confined {
-  const profiles = activity.modes.map((mode) => mode.uses.filter((use) => use.resourceId === resourceId));
+  const profiles = activity.modes.flatMap(usesOf).map((uses) => uses.filter((use) => use.resourceId === resourceId));
   const kgs = profiles.map((uses) => uses.reduce((kg, use) => kg + (use.amount * use.minutes) / 60, 0));
   const drawn = profiles.flat();
   return {

@@ -44,7 +44,30 @@ export interface Use {
 export interface ProblemMode {
   readonly unitId: string;
   readonly minutes: number;
+  /** Those of a cold machine, where `warm` has others. */
   readonly uses: readonly Use[];
+  /** Uses instead of `uses` after a gap of at most so long since the run before; ascending. Left out: none. */
+  readonly warm?: readonly WarmUses[];
+  /** Drawn before the run; left out: nothing. */
+  readonly before?: UsesBefore;
+}
+
+/** What a run draws where its unit has been free of the run before for at most so long. */
+export interface WarmUses {
+  readonly gapUpToMin: number;
+  readonly uses: readonly Use[];
+}
+
+/**
+ * A machine kept hot between two runs, or warmed up again: by the gap since its unit is free and clean. Before the
+ * first run on its unit it is warmed up.
+ */
+export interface UsesBefore {
+  /** All through a gap that is idled. */
+  readonly idle: readonly { readonly resourceId: string; readonly amount: number }[];
+  readonly idleUpToMin: number;
+  /** Offsets from the run's start, so less than 0. */
+  readonly warmUp: readonly Use[];
 }
 
 export interface ProblemActivity {
@@ -52,6 +75,8 @@ export interface ProblemActivity {
   /** Activities of one batch are moved and counted together. */
   readonly batchId: string;
   readonly familyId: string | null;
+  /** A stored cleaning leaves no machine warm; left out: no cleaning. */
+  readonly isCleaning?: boolean;
   /** Sorted by unit. */
   readonly modes: readonly ProblemMode[];
   /** Where the planner's plan has it. */

@@ -1,5 +1,5 @@
 import { fail, ok, problem as fault, type Problem as Fault, type Result } from '../result';
-import type { Plan, Problem, ProblemActivity, ProblemLink, Use } from './problem';
+import type { Plan, Problem, ProblemActivity, ProblemLink, ProblemMode, Use } from './problem';
 
 /** Faults named at once; more would not be read. */
 const FAULTS_NAMED = 20;
@@ -73,11 +73,21 @@ function missing(p: Problem): Fault[] {
     set.has(id) ? [] : [unknown(what, id, field)];
   const uses = (list: readonly Use[], at: string): Fault[] =>
     list.flatMap((use, i) => known(resources, 'resource', use.resourceId, `${at}.uses.${i}.resourceId`));
+  const beforeFaults = ({ before }: ProblemMode, at: string): Fault[] => [
+    ...(before?.idle ?? []).flatMap((use, i) =>
+      known(resources, 'resource', use.resourceId, `${at}.idle.${i}.resourceId`),
+    ),
+    ...(before?.warmUp ?? []).flatMap((use, i) =>
+      known(resources, 'resource', use.resourceId, `${at}.warmUp.${i}.resourceId`),
+    ),
+  ];
   return [
     ...p.activities.flatMap((a, i) => [
       ...a.modes.flatMap((m, k) => [
         ...known(units, 'unit', m.unitId, `activities.${i}.modes.${k}.unitId`),
         ...uses(m.uses, `activities.${i}.modes.${k}`),
+        ...(m.warm ?? []).flatMap((w, j) => uses(w.uses, `activities.${i}.modes.${k}.warm.${j}`)),
+        ...beforeFaults(m, `activities.${i}.modes.${k}.before`),
       ]),
       ...(a.takenOffBy === null ? [] : known(links, 'link', a.takenOffBy, `activities.${i}.takenOffBy`)),
     ]),

@@ -1,3 +1,4 @@
+import { GapBook } from './gapBook';
 import { FAR, linkBase, type Cleaning, type Draw, type LinkArc, type Mode, type Model } from './model';
 
 /** Least price of a minute late, against 1 for a minute moved. */
@@ -5,7 +6,8 @@ export const LATE_PRICE = 20;
 
 /**
  * The search's working plan: starts and modes, who follows whom on each unit, and the excess over each limit by
- * minute, kept up to date as activities are taken out and put back. Cleaning draws follow their predecessors.
+ * minute, kept up to date as activities are taken out and put back. Cleaning draws follow their predecessors; what hangs
+ * on the gap before a run is kept by the gap book.
  */
 export class State {
   readonly starts: Int32Array;
@@ -30,6 +32,7 @@ export class State {
   /** Rough count of elementary steps, to share the budget between kinds of moves without a clock. */
   work = 0;
 
+  readonly gaps: GapBook;
   private readonly cleanings: (Cleaning | null)[];
   private readonly cleaningFrom: Int32Array;
   private readonly movedInBatch: Int32Array;
@@ -47,6 +50,7 @@ export class State {
     this.cleanings = new Array<Cleaning | null>(n).fill(null);
     this.cleaningFrom = new Int32Array(n);
     this.movedInBatch = new Int32Array(model.batchCount);
+    this.gaps = new GapBook(this);
     this.resync();
   }
 
@@ -136,27 +140,28 @@ export class State {
     this.modes[a] = mode;
     this.placed[a] = 1;
     this.count(a, 1);
-    this.draw(this.mode(a).draws, start, 1);
     this.freeAt[a] = this.freeMoment(a);
     const unit = this.unitOf(a);
     if (unit >= 0) {
       const at = this.position(unit, start);
       this.queues[unit]!.splice(at, 0, a);
+      this.gaps.take(a);
       if (at > 0) this.refreshCleaning(this.queues[unit]![at - 1]!);
       this.refreshCleaning(a);
-    }
+    } else this.gaps.take(a);
     this.refreshFreed(a);
   }
 
   remove(a: number): void {
     const unit = this.unitOf(a);
+    this.gaps.give(a);
     if (unit >= 0) {
       const at = this.positionOf(a);
       this.queues[unit]!.splice(at, 1);
       this.setCleaning(a, null, 0);
       if (at > 0) this.refreshCleaning(this.queues[unit]![at - 1]!);
+      else this.gaps.refreshFrom(unit, 0);
     }
-    this.draw(this.mode(a).draws, this.starts[a]!, -1);
     this.count(a, -1);
     this.placed[a] = 0;
   }
@@ -165,15 +170,15 @@ export class State {
   shift(list: readonly number[], starts: readonly number[]): void {
     for (const a of list) {
       this.count(a, -1);
-      this.draw(this.mode(a).draws, this.starts[a]!, -1);
+      this.gaps.give(a);
     }
     for (let i = 0; i < list.length; i++) this.starts[list[i]!] = starts[i]!;
     for (const a of list) {
-      this.draw(this.mode(a).draws, this.starts[a]!, 1);
       this.count(a, 1);
       this.freeAt[a] = this.freeMoment(a);
     }
     for (const a of list) this.restoreOrder(this.unitOf(a));
+    for (const a of list) this.gaps.take(a);
     for (const a of list) {
       const unit = this.unitOf(a);
       if (unit >= 0) {
@@ -300,9 +305,11 @@ export class State {
   private refreshCleaning(a: number): void {
     const unit = this.unitOf(a);
     if (unit < 0) return;
-    const next = this.queues[unit]![this.positionOf(a) + 1];
+    const at = this.positionOf(a) + 1;
+    const next = this.queues[unit]![at];
     const cleaning = next === undefined ? null : this.cleaningBetween(unit, a, next);
     this.setCleaning(a, cleaning, this.freeAt[a]! + this.model.activities[a]!.cleanAfter);
+    this.gaps.refreshFrom(unit, at);
   }
 
   private setCleaning(a: number, cleaning: Cleaning | null, from: number): void {

@@ -1,6 +1,6 @@
 import { chainResources } from './chain';
 import { EdgeList, type Edge } from './edges';
-import { changeovers, freeAt, modeIn, sequences, indexById } from './evaluate';
+import { changeovers, freeAt, modeIn, sequences, indexById } from './sequences';
 import type { Plan, Problem, ProblemActivity } from './problem';
 import type { LpModel, LpRow, SolveLp } from './solverPort';
 

@@ -1,4 +1,4 @@
-import { drawnMode, type Activity, type Link, type LinkEnd } from '../plant/activity';
+import { drawnMode, type Activity, type Link, type LinkEnd, type Mode } from '../plant/activity';
 import type { PlantModel, Unit } from '../plant/plant';
 import type { Week } from '../schedule/week';
 import { mergeIntervals } from '../time/interval';
@@ -13,7 +13,7 @@ import {
   type ProblemUnit,
 } from './problem';
 import { toResources } from './resources';
-import { limitUses, modeUses, steamResources, steamUses } from './uses';
+import { limitUses, modeUses, steamResources, steamUses, usesBefore } from './uses';
 
 const byId = <T extends { readonly id: string }>(a: T, b: T): number => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0);
 
@@ -73,6 +73,7 @@ function toActivity(a: Activity, week: Week, options: FullOptions, linkIds: Read
     id: a.id,
     batchId: a.batchId ?? a.id,
     familyId: a.kind === 'stage' ? a.familyId : null,
+    ...(a.kind === 'cleaning' ? { isCleaning: true } : {}),
     modes: toModes(a, week.plant, movable && options.mayChangeUnit),
     plan: { unitId: placement.unitId, start: placement.start },
     movable,
@@ -88,7 +89,8 @@ function toActivity(a: Activity, week: Week, options: FullOptions, linkIds: Read
 function isMovable(a: Activity, options: FullOptions, horizonMin: number): boolean {
   const start = a.placement?.start ?? -1;
   const minutes = drawnMode(a)?.minutes ?? 0;
-  if (a.fixing !== 'free' || start < 0 || start + minutes > horizonMin) return false;
+  if (a.fixing !== 'free' || a.modes.some((mode) => mode.neverMoved) || start < 0 || start + minutes > horizonMin)
+    return false;
   return options.span === null || (start >= options.span.from && start < options.span.to);
 }
 
@@ -108,8 +110,20 @@ function toModes(a: Activity, plant: PlantModel, mayChangeUnit: boolean): Proble
   const here = drawn ? [{ ...drawn, unitId: home }] : [];
   const others = mayChangeUnit ? a.modes.filter((m) => m.unitId !== home) : [];
   return [...here, ...others]
-    .map((m) => ({ unitId: m.unitId, minutes: m.minutes, uses: modeUses(plant, units.get(m.unitId), a, m) }))
+    .map((m) => toMode(a, m, plant, units.get(m.unitId)))
     .sort((x, y) => (x.unitId < y.unitId ? -1 : 1));
+}
+
+function toMode(a: Activity, mode: Mode, plant: PlantModel, unit: Unit | undefined): ProblemMode {
+  const usesOf = (phases: Mode['phases']) => modeUses(plant, unit, a, { ...mode, phases });
+  const warm = mode.warm?.map(({ gapUpToMin, phases }) => ({ gapUpToMin, uses: usesOf(phases) }));
+  return {
+    unitId: mode.unitId,
+    minutes: mode.minutes,
+    uses: usesOf(mode.phases),
+    ...(warm ? { warm } : {}),
+    ...(mode.between ? { before: usesBefore(mode.between, steamResources(plant, unit?.headerId ?? null)) } : {}),
+  };
 }
 
 function toLinks(links: readonly Link[], placed: readonly Activity[]): ProblemLink[] {

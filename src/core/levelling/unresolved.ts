@@ -1,6 +1,7 @@
 import { valueAt } from '../time/stepFunction';
-import { modeIn, placedUses, type Judgement } from './evaluate';
+import type { Judgement } from './evaluate';
 import { overSpans, type OverSpan } from './figures';
+import { placedUses } from './placedUses';
 import {
   isUnlimited,
   type Plan,
@@ -10,6 +11,7 @@ import {
   type ProblemResource,
 } from './problem';
 import type { LevellingProposal } from './proposal';
+import { modeIn } from './sequences';
 
 const TRACE = 1e-3;
 
@@ -55,7 +57,7 @@ function fixedExcess(problem: Problem, resource: ProblemResource): Float64Array 
   const excess = new Float64Array(problem.horizonMin);
   for (let t = 0; t < excess.length; t++) excess[t] = -valueAt(resource.capacity, t);
   for (const use of placedUses(problem, plan)) {
-    if (use.resourceId !== resource.id || use.isCleaning || problem.activities[use.activity]?.movable) continue;
+    if (use.resourceId !== resource.id || use.follows || problem.activities[use.activity]?.movable) continue;
     const to = Math.min(excess.length, use.start + use.minutes);
     for (let t = Math.max(0, use.start); t < to; t++) excess[t] = (excess[t] as number) + use.amount;
   }
@@ -89,7 +91,8 @@ function leastMissing(
   fixed: Float64Array,
 ): Stuck | null {
   let least: Stuck | null = null;
-  const uses = mode.uses.filter((u) => u.resourceId === resource.id);
+  const warmest = mode.warm?.[0]?.uses ?? mode.uses;
+  const uses = warmest.filter((u) => u.resourceId === resource.id);
   for (let start = activity.earliestStart; start <= activity.latestStart; start++) {
     let worst: Stuck = { id: activity.id, needs: 0, left: 0 };
     for (const use of uses) {

@@ -1,7 +1,7 @@
-import type { Activity, LimitUse, Mode, Phase } from '../plant/activity';
+import type { Activity, BetweenDraws, LimitUse, Mode, Phase } from '../plant/activity';
 import type { Header, PlantModel, Unit, VentGroup } from '../plant/plant';
 import { mergeIntervals } from '../time/interval';
-import type { Use } from './problem';
+import type { Use, UsesBefore } from './problem';
 
 export const headerResource = (headerId: string): string => `header:${headerId}`;
 export const letdownResource = (headerId: string): string => `letdown:${headerId}`;
@@ -38,6 +38,20 @@ export function steamUses(phases: readonly Phase[], resources: readonly string[]
         phase: p.kind,
       })),
     );
+}
+
+/** Idling and warming up before a run; the warm-up ends when the run begins. */
+export function usesBefore(between: BetweenDraws, resources: readonly string[]): UsesBefore {
+  const { idleKgPerH, idleUpToMin, warmUp } = between;
+  const minutes = Math.max(0, ...warmUp.map((p) => p.offsetMin + p.minutes));
+  return {
+    idle: idleKgPerH > 0 ? resources.map((resourceId) => ({ resourceId, amount: idleKgPerH })) : [],
+    idleUpToMin,
+    warmUp: steamUses(
+      warmUp.map((p) => ({ ...p, offsetMin: p.offsetMin - minutes })),
+      resources,
+    ),
+  };
 }
 
 /** Uses of shared limits as draws. */

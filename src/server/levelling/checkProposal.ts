@@ -1,4 +1,5 @@
 import type { LevellingProposal, ProposedMove } from '@/core/levelling/proposal';
+import { plainNetwork } from '@/core/header/network';
 import { evaluateWeek, withPlacements, type WeekEvaluation } from '@/core/pipeline';
 import type { Breach } from '@/core/schedule/breach';
 import type { Week } from '@/core/schedule/week';
@@ -27,9 +28,12 @@ export function tryMoves(week: Week, moves: readonly ProposedMove[]): CheckedMov
   return { week: moved, evaluation, broken: newlyBroken(evaluateWeek(week).breaches, evaluation.breaches) };
 }
 
-/** What the solver says of its proposal and judging does not bear out; null where they agree. */
+/**
+ * What the solver says of its proposal and judging does not bear out; null where they agree. The solver knows neither
+ * flash steam nor accumulators, which only take off the load, so that the two are held together without them.
+ */
 export function disagreement(week: Week, proposal: LevellingProposal): string | null {
-  const { evaluation, broken } = tryMoves(week, proposal.moves);
+  const { evaluation, broken } = tryMoves({ ...week, plant: plainNetwork(week.plant) }, proposal.moves);
   if (broken.length > 0) return `breaks ${broken.map(({ id }) => id).join(', ')}`;
   const kg = overKgOf(evaluation);
   const said = proposal.after.overKg;

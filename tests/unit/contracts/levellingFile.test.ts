@@ -16,6 +16,10 @@ function example(): Problem {
   return read.value;
 }
 
+const USE = { resourceId: 'x', offsetMin: -5, minutes: 5, amount: 1, phase: 'warmUp' };
+const IDLE = { resourceId: 'x', amount: 1 };
+const BEFORE = { idle: [], idleUpToMin: 20, warmUp: [] };
+
 type Node = Record<string, unknown>;
 
 /** The example with a value put at a place, such as `activities.0.plan.start`, as text. */
@@ -58,6 +62,25 @@ describe('the file form of a levelling problem', () => {
     ['the same id twice', 'activities.1.id', 'load-1', '“load-1” is there twice'],
     ['a start outside its bounds', 'activities.0.plan.start', 100, 'outside its own bounds 300 to 480'],
     ['a plan without a mode', 'activities.0.plan.unitId', 'retort-2', 'without a mode there'],
+    [
+      'an unknown resource of a warm machine',
+      'activities.0.modes.0.warm',
+      [{ gapUpToMin: 9, uses: [USE] }],
+      'no resource “x”',
+    ],
+    [
+      'an unknown resource before a run',
+      'activities.0.modes.0.before',
+      { ...BEFORE, warmUp: [USE] },
+      'no resource “x”',
+    ],
+    ['an unknown resource of idling', 'activities.0.modes.0.before', { ...BEFORE, idle: [IDLE] }, 'no resource “x”'],
+    [
+      'gaps out of order',
+      'activities.0.modes.0.warm',
+      [9, 9].map((gapUpToMin) => ({ gapUpToMin, uses: [] })),
+      'must ascend',
+    ],
     ['a draw below 0', 'activities.0.modes.0.uses.0.amount', -1, 'activities.0.modes.0.uses.0.amount'],
     ['steps out of order', 'resources.0.capacity.1', { from: 0, value: 1 }, 'Steps must ascend'],
     ['an unknown word', 'colour', 'red', 'colour'],

@@ -58,4 +58,43 @@ describe('toProblem', () => {
     const open = toProblem({ ...plan, capacities: [] });
     expect(open.resources.find((r) => r.id === 'header:main')?.capacity).toEqual([{ from: 0, value: 1e12 }]);
   });
+
+  it('leaves a cooker that takes hours to heat up where it is', () => {
+    const cooker = activity('d', {
+      modes: [{ ...mode('K', 40), neverMoved: true }],
+      placement: { unitId: 'K', start: 200 },
+    });
+    expect(toProblem({ ...plan, activities: [cooker], links: [] }).activities[0]?.movable).toBe(false);
+  });
+
+  it('states what hangs on the gap before a run: idling, a warm-up that ends at its start, and warm phases', () => {
+    const warmUp = [phase('warmUp', 0, 10, 300), phase('warmUp', 10, 2, 100)];
+    const between = { idleKgPerH: 80, idleUpToMin: 25, warmUp };
+    const warm = [{ gapUpToMin: 15, phases: [phase('vent', 5, 3, 800)] }];
+    const run = activity('d', {
+      modes: [{ ...mode('R1', 40, vents), between, warm }],
+      placement: { unitId: 'R1', start: 200 },
+    });
+    const stated = toProblem({ ...plan, activities: [run], links: [] }).activities[0]?.modes[0];
+    expect(stated?.before).toMatchObject({
+      idle: [{ resourceId: 'header:main', amount: 80 }],
+      idleUpToMin: 25,
+      warmUp: [
+        { offsetMin: -12, minutes: 10, amount: 300 },
+        { offsetMin: -2, minutes: 2, amount: 100 },
+      ],
+    });
+    expect(
+      stated?.warm?.map(({ gapUpToMin, uses }) => [gapUpToMin, uses.map((u) => [u.resourceId, u.minutes])]),
+    ).toEqual([
+      [
+        15,
+        [
+          ['header:main', 3],
+          ['vents:group', 5],
+          ['steamOns:group', 3],
+        ],
+      ],
+    ]);
+  });
 });
