@@ -10,5 +10,7 @@ declare namespace App {
     theme: 'light' | 'dark' | 'system';
     /** The person's choice, else the plant's. */
     units: import('./core/quantity/display').UnitSystem;
+    /** Where the person may work, by name. */
+    plants: readonly { readonly plantId: string; readonly plantName: string }[];
   }
 }

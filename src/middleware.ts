@@ -1,7 +1,7 @@
 import type { APIContext, MiddlewareHandler } from 'astro';
 import { lucia } from './server/auth/lucia';
 import { signedIn, type SignedIn } from './server/auth/session';
-import { themeOf } from './server/http/cookies';
+import { readCookie, TABLET_COOKIE, themeOf } from './server/http/cookies';
 import { faultProblem } from './server/http/fault';
 import { needsSignIn, safeNext, signInAddress } from './server/http/gate';
 import { originAllowed } from './server/http/origin';
@@ -26,22 +26,31 @@ async function identify(context: APIContext): Promise<string | null> {
   const kept = themeOf(cookies);
   context.locals.theme = kept ?? 'system';
   context.locals.units = 'si';
+  context.locals.plants = [];
   context.locals.actor = null;
   context.locals.sessionId = null;
   if (!sessionId) return null;
-  const found: SignedIn | null = await signedIn(sessionId);
+  const isTouch = !isEndpoint(context) || context.request.method !== 'GET';
+  const found: SignedIn | null = await signedIn(sessionId, {
+    tabletToken: readCookie(cookies, TABLET_COOKIE),
+    isTouch,
+  });
   if (!found) return lucia.createBlankSessionCookie().serialize();
   context.locals.actor = found.actor;
   context.locals.sessionId = sessionId;
   context.locals.theme = kept ?? found.choices.theme ?? 'system';
   context.locals.units = found.choices.units;
+  context.locals.plants = found.plants.map(({ plantId, plantName }) => ({ plantId, plantName }));
   return found.session.fresh ? lucia.createSessionCookie(sessionId).serialize() : null;
 }
 
 const redirect = (location: string): Response => new Response(null, { status: 302, headers: { location } });
 
-function redirected({ locals, url, routePattern }: APIContext): Response | null {
-  if (!locals.actor) return needsSignIn(url.pathname, routePattern) ? redirect(signInAddress(url)) : null;
+function redirected({ locals, url, routePattern, request }: APIContext): Response | null {
+  if (!locals.actor) {
+    if (!needsSignIn(url.pathname, routePattern)) return null;
+    return redirect(readCookie(request.headers.get('cookie'), TABLET_COOKIE) ? '/tablet' : signInAddress(url));
+  }
   return routePattern === '/sign-in' ? redirect(safeNext(url.searchParams.get('next'))) : null;
 }
 

@@ -6,12 +6,17 @@ import { withHashedIds } from './hashedSessions';
 
 interface SessionAttributes {
   readonly plantId: string | null;
+  /** Of a session opened by badge. */
+  readonly tabletId?: string | null;
+  readonly touchedAt?: Date | null;
+  readonly endsAt?: Date | null;
 }
 
 interface UserAttributes {
   readonly name: string;
   readonly active: boolean;
   readonly settings: PersonSettings;
+  readonly lastSeenAt: Date | null;
 }
 
 declare module 'lucia' {
@@ -32,8 +37,18 @@ export function createLucia(appUrl: string | undefined): Lucia<SessionAttributes
         name: 'steadmain_session',
         attributes: { secure: appUrl?.startsWith('https:') ?? false, sameSite: 'lax', path: '/' },
       },
-      getSessionAttributes: ({ plantId }: SessionAttributes) => ({ plantId }),
-      getUserAttributes: ({ name, active, settings }: UserAttributes) => ({ name, active, settings }),
+      getSessionAttributes: ({ plantId, tabletId, touchedAt, endsAt }: SessionAttributes) => ({
+        plantId,
+        tabletId,
+        touchedAt,
+        endsAt,
+      }),
+      getUserAttributes: ({ name, active, settings, lastSeenAt }: UserAttributes) => ({
+        name,
+        active,
+        settings,
+        lastSeenAt,
+      }),
     },
   );
 }

@@ -41,13 +41,20 @@ export const ROLE_NAMES: Readonly<Record<Role, string>> = {
   administrator: 'administrator',
 };
 
+/** What a session by badge is not for, whoever holds it: the account itself. */
+const NOT_AT_TABLETS: ReadonlySet<Permission> = new Set(['account.own', 'settings.own']);
+
+/** The roles that a session by badge carries, of those that the person holds. */
+export const FLOOR_ROLES: readonly Role[] = PERMISSIONS['floor.record'];
+
 declare const checked: unique symbol;
 
 /** An actor found to hold a permission. Only `authorize` makes one, so a forgotten check does not compile. */
 export type Authorized<P extends Permission> = Actor & { readonly [checked]: { readonly [K in P]: true } };
 
 /** True where one of the actor's roles carries the permission. */
-export function may(actor: Pick<Actor, 'roles'>, permission: Permission): boolean {
+export function may(actor: Pick<Actor, 'roles' | 'tabletId'>, permission: Permission): boolean {
+  if (actor.tabletId && NOT_AT_TABLETS.has(permission)) return false;
   const roles: readonly Role[] = PERMISSIONS[permission];
   return actor.roles.some((role) => roles.includes(role));
 }
@@ -55,6 +62,9 @@ export function may(actor: Pick<Actor, 'roles'>, permission: Permission): boolea
 /** The actor as one who holds the permission; a refusal names the roles that do. */
 export function authorize<P extends Permission>(actor: Actor, permission: P): Result<Authorized<P>> {
   if (may(actor, permission)) return ok(actor as Authorized<P>);
+  if (actor.tabletId && NOT_AT_TABLETS.has(permission)) {
+    return fail(problem('TABLET', 'This is not done at a shared tablet. Sign in with your e-mail address elsewhere.'));
+  }
   const names = PERMISSIONS[permission].map((role) => ROLE_NAMES[role]).join(' or ');
   return fail(problem('ROLE', `Only a ${names} of ${actor.plantName} may do this.`));
 }

@@ -1,27 +1,25 @@
-import { eq } from 'drizzle-orm';
-import type { Session } from 'lucia';
-import type { UnitSystem } from '@/core/quantity/display';
+import { and, eq, ne } from 'drizzle-orm';
+import type { Session, User } from 'lucia';
 import { fail, ok, type Result } from '@/core/result';
-import { db } from '@/db/client';
-import { sessions, type PersonSettings } from '@/db/schema/index';
-import { plantsOf, type PlantOfPerson } from '../people/people.repo';
+import { db, type Db } from '@/db/client';
+import { sessions } from '@/db/schema/index';
+import { now } from '../clock';
+import { plantsOf, touchPerson, type PlantOfPerson } from '../people/people.repo';
 import { notifySessionEnd } from '../events/notify';
 import { notFound, type HttpProblem } from '../http/problem';
 import type { Actor } from './actor';
+import { choicesOf, type Choices } from './choices';
 import { hashSessionId } from './hashedSessions';
 import { lucia } from './lucia';
-import type { Authorized } from './permissions';
+import { FLOOR_ROLES, type Authorized } from './permissions';
+import { touchTabletSession, tabletHolds } from './tabletSession';
 
 export interface SignedIn {
   readonly actor: Actor;
   readonly session: Session;
   readonly choices: Choices;
-}
-
-/** What the person chose for the account, and what the plant shows where nothing was chosen. */
-export interface Choices {
-  readonly theme: 'light' | 'dark' | 'system' | null;
-  readonly units: UnitSystem;
+  /** Where the person may work, by name. */
+  readonly plants: readonly PlantOfPerson[];
 }
 
 interface Person {
@@ -38,24 +36,53 @@ export const actorAt = (person: Person, plant: PlantOfPerson): Actor => ({
   roles: plant.roles,
 });
 
-/** The unit system of a stored choice. */
-export const unitSystemOf = (stored: 'si' | 'us'): UnitSystem => (stored === 'us' ? 'usCustomary' : 'si');
+const SEEN_EVERY_MS = 5 * 60_000;
 
-/** The person's own choices over those of the plant. */
-export const choicesOf = (settings: PersonSettings, plant: PlantOfPerson): Choices => ({
-  theme: settings.theme ?? null,
-  units: unitSystemOf(settings.units ?? plant.displayUnits),
-});
+/** Notes now and then that somebody is here. */
+async function see(personId: string, lastSeenAt: Date | null): Promise<void> {
+  const at = now();
+  if (Math.abs(at.getTime() - (lastSeenAt?.getTime() ?? 0)) > SEEN_EVERY_MS) await touchPerson(personId, at);
+}
+
+/** What a request says of itself besides the session. */
+export interface Visit {
+  /** The token of the enrolled tablet that it comes from. */
+  readonly tabletToken: string | null;
+  /** Somebody's hand was on it: a page or a change, not a look from the background. */
+  readonly isTouch: boolean;
+}
 
 /** Who a session's cookie stands for; null where it has ended, or the person may no longer work at any plant. */
-export async function signedIn(sessionId: string): Promise<SignedIn | null> {
+export async function signedIn(sessionId: string, visit: Visit): Promise<SignedIn | null> {
   const { session, user } = await lucia.validateSession(sessionId);
   if (!session || !user.active) return null;
   const plants = await plantsOf(user.id);
+  if (session.tabletId) return signedInByBadge(session, user, plants, visit);
   const plant = plants.find(({ plantId }) => plantId === session.plantId) ?? plants[0];
   if (!plant) return null;
   if (plant.plantId !== session.plantId) await setPlant(sessionId, plant.plantId);
-  return { actor: actorAt(user, plant), session, choices: choicesOf(user.settings, plant) };
+  await see(user.id, user.lastSeenAt);
+  return { actor: actorAt(user, plant), session, choices: choicesOf(user.settings, plant), plants };
+}
+
+/** A session by badge: at its tablet's plant, from that tablet, for as long as it is touched, with floor roles. */
+async function signedInByBadge(
+  session: Session,
+  user: User,
+  plants: readonly PlantOfPerson[],
+  { tabletToken, isTouch }: Visit,
+): Promise<SignedIn | null> {
+  const plant = plants.find(({ plantId }) => plantId === session.plantId);
+  const roles = plant?.roles.filter((role) => FLOOR_ROLES.includes(role)) ?? [];
+  const tabletId = await tabletHolds(session, tabletToken);
+  if (!plant || roles.length === 0 || tabletId === null) {
+    await endSession(session.id);
+    return null;
+  }
+  if (isTouch) await touchTabletSession(session);
+  await see(user.id, user.lastSeenAt);
+  const actor = { ...actorAt(user, plant), roles, tabletId };
+  return { actor, session, choices: choicesOf(user.settings, plant), plants: [plant] };
 }
 
 async function setPlant(sessionId: string, plantId: string): Promise<void> {
@@ -82,4 +109,23 @@ export async function changePlant(
 export async function endSession(sessionId: string): Promise<void> {
   await lucia.invalidateSession(sessionId);
   await notifySessionEnd(db, hashSessionId(sessionId));
+}
+
+/** Opens a session at a plant; the one that the browser had ends with it. */
+export async function openSession(personId: string, plantId: string, oldSessionId: string | null): Promise<Session> {
+  if (oldSessionId) await endSession(oldSessionId);
+  const session = await lucia.createSession(personId, { plantId });
+  await touchPerson(personId, now());
+  return session;
+}
+
+/** Ends a person's sessions everywhere, but for the one named by its hash; gives how many. */
+export async function endSessionsOf(tx: Db, personId: string, exceptHash?: string): Promise<number> {
+  const all = eq(sessions.userId, personId);
+  const ended = await tx
+    .delete(sessions)
+    .where(exceptHash === undefined ? all : and(all, ne(sessions.id, exceptHash)))
+    .returning({ id: sessions.id });
+  for (const { id } of ended) await notifySessionEnd(tx, id);
+  return ended.length;
 }

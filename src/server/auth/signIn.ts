@@ -1,14 +1,13 @@
 import type { SignInRequest } from '@/contracts/account';
 import type { Session } from 'lucia';
 import { fail, ok, type Result } from '@/core/result';
-import { now } from '../clock';
 import type { HttpProblem } from '../http/problem';
-import { accountByEmail, plantsOf, touchPerson } from '../people/people.repo';
+import { accountByEmail, plantsOf } from '../people/people.repo';
 import { lucia } from './lucia';
 import { verifyPassword } from './password';
 import { countTry, forgiveTry, type RateLimit } from './rateLimit';
 import type { Actor } from './actor';
-import { actorAt, endSession } from './session';
+import { actorAt, openSession } from './session';
 
 export interface SignInAttempt extends SignInRequest {
   readonly address: string;
@@ -16,7 +15,7 @@ export interface SignInAttempt extends SignInRequest {
   readonly oldSessionId: string | null;
 }
 
-const tooMany: HttpProblem = {
+export const tooMany: HttpProblem = {
   status: 429,
   code: 'SIGN-IN-TOO-MANY',
   message: 'Too many tries. Wait a quarter of an hour, then try again.',
@@ -33,7 +32,7 @@ const noPlant: HttpProblem = {
 };
 
 /** One person's typing, an account under attack from many places, and a whole plant behind one address. */
-function limitsOf(email: string, address: string): RateLimit[] {
+export function limitsOf(email: string, address: string): RateLimit[] {
   const account = email.trim().toLowerCase();
   return [
     { key: `account ${account} from ${address}`, tries: 8 },
@@ -54,9 +53,7 @@ export async function signIn(
   await forgiveTry(limits);
   const [plant] = await plantsOf(person.id);
   if (!plant) return fail(noPlant);
-  if (attempt.oldSessionId) await endSession(attempt.oldSessionId);
-  const session = await lucia.createSession(person.id, { plantId: plant.plantId });
-  await touchPerson(person.id, now());
+  const session = await openSession(person.id, plant.plantId, attempt.oldSessionId);
   await lucia.deleteExpiredSessions();
   return ok({ actor: actorAt(person, plant), session });
 }

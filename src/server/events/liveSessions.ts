@@ -1,4 +1,4 @@
-import { and, eq, gt, inArray, sql } from 'drizzle-orm';
+import { and, eq, gt, inArray, isNull, sql } from 'drizzle-orm';
 import { db } from '@/db/client';
 import { memberships, people, sessions } from '@/db/schema/index';
 
@@ -14,7 +14,14 @@ export async function liveSessions<T extends Held>(held: readonly T[]): Promise<
     .select({ id: sessions.id, plantId: sessions.plantId })
     .from(sessions)
     .innerJoin(people, and(eq(people.id, sessions.userId), eq(people.active, true)))
-    .innerJoin(memberships, and(eq(memberships.personId, people.id), eq(memberships.plantId, sessions.plantId)))
+    .innerJoin(
+      memberships,
+      and(
+        eq(memberships.personId, people.id),
+        eq(memberships.plantId, sessions.plantId),
+        isNull(memberships.inactiveAt),
+      ),
+    )
     // Sessions are made and expire by the machines' clocks, never by a clock that was set.
     .where(and(inArray(sessions.id, ids), gt(sessions.expiresAt, sql`now()`)));
   const plantOf = new Map(rows.map((row) => [row.id, row.plantId]));

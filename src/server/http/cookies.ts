@@ -1,6 +1,9 @@
 /** The cookie that keeps the theme; written in the browser, read there before the first paint too. */
 export const THEME_COOKIE = 'theme';
 
+/** The cookie that an enrolled tablet keeps. */
+export const TABLET_COOKIE = 'steadmain_tablet';
+
 const THEMES = ['light', 'dark', 'system'] as const;
 
 /** A cookie's value out of the request's header; null where there is none. */

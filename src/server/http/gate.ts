@@ -1,5 +1,14 @@
 /** Pages that people see before they have signed in. */
-const OPEN_PAGES = new Set(['/sign-in', '/404', '/500']);
+const OPEN_PAGES = new Set([
+  '/sign-in',
+  '/first-run',
+  '/invitation/[token]',
+  '/reset',
+  '/reset/[token]',
+  '/tablet',
+  '/404',
+  '/500',
+]);
 
 const withoutSlash = (path: string): string => (path.length > 1 ? path.replace(/\/+$/, '') : path);
 

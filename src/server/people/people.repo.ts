@@ -1,4 +1,4 @@
-import { asc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import type { Role } from '@/contracts/account';
 import { db, type Db } from '@/db/client';
 import { memberships, people, plants } from '@/db/schema/index';
@@ -21,7 +21,7 @@ export async function accountByEmail(email: string) {
   return person ?? null;
 }
 
-/** The plants at which a person holds roles, by name. */
+/** The plants at which a person holds roles and may work, by name. */
 export async function plantsOf(personId: string): Promise<PlantOfPerson[]> {
   const rows = await db
     .select({
@@ -33,7 +33,7 @@ export async function plantsOf(personId: string): Promise<PlantOfPerson[]> {
     })
     .from(memberships)
     .innerJoin(plants, eq(memberships.plantId, plants.id))
-    .where(eq(memberships.personId, personId))
+    .where(and(eq(memberships.personId, personId), isNull(memberships.inactiveAt)))
     .orderBy(asc(plants.name), asc(plants.id), asc(memberships.role));
   const byPlant = new Map<string, PlantOfPerson & { roles: Role[] }>();
   for (const { role, ...plant } of rows) {
