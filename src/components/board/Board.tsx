@@ -49,6 +49,7 @@ export function Board({ me, initial }: Props) {
   const rowsRef = useRef<HTMLDivElement>(null);
   const [pointed] = useState(() => createStore<PointedAt | null>(null));
   const [issuing, setIssuing] = useState(false);
+  const [limitsOpen, setLimitsOpen] = useState(false);
   const [slipping, setSlipping] = useState<string | null>(null);
   const ticks = useMemo(
     () => ticksOf(clock, week.horizonMin, scale.pxPerMin),
@@ -132,13 +133,17 @@ export function Board({ me, initial }: Props) {
                   nowMin={model.nowMin}
                   corner={<KeyHelp />}
                 />
-                <Strips {...{ model, pointed }} />
+                <Strips {...{ model, pointed, limitsOpen }} onLimits={() => setLimitsOpen(!limitsOpen)} />
               </div>
               <BoardRows {...{ model, actions, ticks, pointed, rowsRef, onKeyDown }} onSlip={setSlipping} />
             </div>
           </div>
           <aside className="board-panel flex min-h-0 flex-col border-l border-rule bg-surface" aria-label="Week">
-            {model.levelling.open ? <LevelPanel {...{ model, actions }} /> : <Panel {...{ model, actions }} />}
+            {model.levelling.open ? (
+              <LevelPanel {...{ model, actions }} />
+            ) : (
+              <Panel {...{ model, actions, pointed, limitsOpen }} />
+            )}
           </aside>
         </div>
         <p className="sr-only" aria-live="assertive" data-testid="said">

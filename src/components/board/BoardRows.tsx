@@ -159,7 +159,7 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
         peak={model.peak}
         names={model.names}
       />
-      <Pointed {...{ pointed, week, evaluation, scale, clock }} />
+      <Pointed {...{ pointed, week, evaluation, scale, clock }} spread={model.spread} />
       {carriedId === null ? (
         <HoverCard
           {...{ hovered, rows, scale, clock, week }}

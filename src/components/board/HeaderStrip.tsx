@@ -5,11 +5,13 @@ import { toMinutes } from '../../core/time/stepFunction';
 import type { Clock } from '../time';
 import { useUnits } from '../ui/units';
 import type { Units } from '../units';
+import { Fold } from './Fold';
 import { StripFace } from './StripFace';
 import { greatestOf, rateMarks, stripTop, yOfRate, type StripScale } from './strip';
 import { useStore, type Store } from './store';
 import type { TimeScale } from './timeScale';
 import type { Carrying } from './useCarry';
+import type { SpreadShown } from './useStartSpread';
 import { markText, overWords } from './words';
 
 interface Props {
@@ -21,6 +23,8 @@ interface Props {
   readonly carried: Store<Carrying | null>;
   readonly scale: TimeScale;
   readonly clock: Clock;
+  /** Early and late starts, while they are shown. */
+  readonly spreads: Store<SpreadShown | null>;
   readonly open: boolean;
   /** Only headers that may be folded away. */
   readonly onToggle: (() => void) | null;
@@ -38,6 +42,8 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
   const heightPx = open ? (main ? 128 : 76) : 0;
   const live = useStore(carried, (c) => c?.preview?.evaluation.headers.find((h) => h.headerId === header.id)) ?? null;
   const shown = live ?? judgement;
+  const spread = useStore(props.spreads, (s) => s?.byHeader[header.id]) ?? null;
+  const spreadKgPerH = useStore(props.spreads, (s) => s?.greatestKgPerH[header.id]) ?? 0;
   const base = useMemo(
     () => (capacity ? toMinutes(capacity.baseLoadKgPerH, scale.horizonMin) : null),
     [capacity, scale.horizonMin],
@@ -45,8 +51,16 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
   const limit = useMemo(() => limitOf(judgement, header), [judgement, header]);
   const topKgPerH = useMemo(
     () =>
-      stripTop(Math.max(judgement.peak.kgPerH, props.before?.peak.kgPerH ?? 0, limit ? greatestOf(limit) : 0), units),
-    [judgement, props.before, limit, units],
+      stripTop(
+        Math.max(
+          greatestOf(judgement.drawnKgPerH),
+          props.before?.peak.kgPerH ?? 0,
+          limit ? greatestOf(limit) : 0,
+          spreadKgPerH,
+        ),
+        units,
+      ),
+    [judgement, props.before, limit, spreadKgPerH, units],
   );
   const strip: StripScale = { pxPerMin: scale.pxPerMin, topKgPerH, heightPx };
   const words = overWords(shown, clock, units);
@@ -81,7 +95,8 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
         )}
         {open ? (
           <StripFace
-            {...{ header, strip, scale, clock, base, limit, onPoint, pointedMin, carrying: live !== null }}
+            {...{ header, strip, scale, clock, base, limit, onPoint, pointedMin, spread, carrying: live !== null }}
+            carried={shown.carried}
             load={shown.loadKgPerH}
             before={live ? judgement.loadKgPerH : (props.before?.loadKgPerH ?? null)}
           />
@@ -107,25 +122,7 @@ function stateText(header: Header, units: Units): string {
 
 function StripTitle({ header, open, onToggle }: Pick<Props, 'header' | 'open' | 'onToggle'>) {
   if (!onToggle) return <h2 className="line-clamp-2 text-sm leading-5 font-semibold max-sm:text-xs">{header.name}</h2>;
-  return (
-    <h2 className="text-xs font-semibold">
-      <button
-        type="button"
-        aria-expanded={open}
-        onClick={onToggle}
-        className="-ml-1 flex max-w-full items-center gap-1 rounded-sm px-1 hover:bg-sunken"
-      >
-        <svg
-          viewBox="0 0 10 10"
-          className={`size-2.5 shrink-0 fill-ink-muted ${open ? 'rotate-90' : ''}`}
-          aria-hidden="true"
-        >
-          <path d="M3 1 8 5 3 9z" />
-        </svg>
-        <span className="truncate">{header.name}</span>
-      </button>
-    </h2>
-  );
+  return <Fold name={header.name} {...{ open, onToggle }} />;
 }
 
 function Marks({ strip, topKgPerH }: { readonly strip: StripScale; readonly topKgPerH: number }) {

@@ -1,5 +1,8 @@
 import { BreachList } from './BreachList';
+import { LimitTable } from './LimitTable';
+import type { PointedAt } from './Pointed';
 import { SelectedDetail } from './SelectedDetail';
+import type { Store } from './store';
 import { Unplaced } from './Unplaced';
 import type { BoardModel } from './useBoard';
 import type { BoardActions } from './useBoardActions';
@@ -7,17 +10,31 @@ import type { BoardActions } from './useBoardActions';
 interface Props {
   readonly model: BoardModel;
   readonly actions: BoardActions;
+  readonly pointed: Store<PointedAt | null>;
+  readonly limitsOpen: boolean;
 }
 
 /**
  * What is to put right and what waits for a place; docked below them what is selected, so that a line that is clicked stays
  * where it was.
  */
-export function Panel({ model, actions }: Props) {
+export function Panel({ model, actions, pointed, limitsOpen }: Props) {
   const { selected } = actions;
+  const { view } = model;
   return (
     <>
       <div className="min-h-0 flex-1 divide-y divide-rule overflow-y-auto">
+        {limitsOpen ? (
+          <div className="px-5 py-4">
+            <LimitTable
+              week={model.week}
+              evaluation={model.evaluation}
+              clock={model.clock}
+              pointed={pointed}
+              onGo={(minute) => view.reveal({ from: minute - 30, to: minute + 30 }, null)}
+            />
+          </div>
+        ) : null}
         <div className="px-5 py-4">
           <BreachList
             breaches={model.evaluation.breaches}

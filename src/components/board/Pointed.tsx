@@ -1,17 +1,21 @@
 import { useMemo } from 'react';
 import { whoDraws } from '../../core/header/whoDraws';
 import type { WeekEvaluation } from '../../core/pipeline';
-import type { Activity } from '../../core/plant/activity';
 import { valueAt } from '../../core/time/stepFunction';
 import type { Week } from '../../core/schedule/week';
 import type { Clock } from '../time';
 import { useUnits } from '../ui/units';
+import { CarriedLine, ChanceCard, ChanceLine, LimitCard } from './PointedCards';
 import { useStore, type Store } from './store';
 import { xOf, type TimeScale } from './timeScale';
+import type { SpreadControl } from './useStartSpread';
 import { unitName } from './words';
 
+/** A minute pointed at: on a header's load, on its row of chances, or on a shared limit. */
 export interface PointedAt {
-  readonly headerId: string;
+  readonly kind: 'header' | 'chance' | 'limit';
+  /** The header's or the limit's id. */
+  readonly id: string;
   readonly minute: number;
 }
 
@@ -21,14 +25,14 @@ interface Props {
   readonly evaluation: WeekEvaluation;
   readonly scale: TimeScale;
   readonly clock: Clock;
+  readonly spread: SpreadControl;
 }
 
 const SHOWN = 9;
 
-/** A hair line at the pointed minute, and who draws what at it. */
-export function Pointed({ pointed, week, evaluation, scale, clock }: Props) {
+/** A hair line at the pointed minute, and who draws or uses what at it. */
+export function Pointed({ pointed, week, evaluation, scale, clock, spread }: Props) {
   const at = useStore(pointed, (p) => p);
-  const drawn = useMemo(() => [...week.activities, ...evaluation.cleanings], [week, evaluation]);
   if (!at) return null;
   const x = xOf(scale, at.minute);
   const leftwards = x > scale.widthPx - 320;
@@ -40,26 +44,28 @@ export function Pointed({ pointed, week, evaluation, scale, clock }: Props) {
         style={leftwards ? { left: x - 10, transform: 'translateX(-100%)' } : { left: x + 10 }}
         data-testid="who-draws"
       >
-        <WhoDraws {...{ at, week, evaluation, drawn, clock }} />
+        {at.kind === 'header' ? <WhoDraws {...{ at, week, evaluation, clock, spread }} /> : null}
+        {at.kind === 'chance' ? <ChanceCard {...{ at, evaluation, clock, spread }} /> : null}
+        {at.kind === 'limit' ? <LimitCard {...{ at, week, evaluation, clock }} /> : null}
       </div>
     </div>
   );
 }
 
-interface WhoProps extends Pick<Props, 'week' | 'evaluation' | 'clock'> {
+interface WhoProps extends Pick<Props, 'week' | 'evaluation' | 'clock' | 'spread'> {
   readonly at: PointedAt;
-  readonly drawn: readonly Activity[];
 }
 
-function WhoDraws({ at, week, evaluation, drawn, clock }: WhoProps) {
+function WhoDraws({ at, week, evaluation, clock, spread }: WhoProps) {
+  const { drawn } = evaluation;
   const units = useUnits();
-  const header = evaluation.headers.find((h) => h.headerId === at.headerId);
+  const header = evaluation.headers.find((h) => h.headerId === at.id);
   const shares = useMemo(
-    () => whoDraws({ plant: week.plant, activities: drawn }, at.headerId, at.minute),
-    [week.plant, drawn, at.headerId, at.minute],
+    () => whoDraws({ plant: week.plant, activities: drawn }, at.id, at.minute),
+    [week.plant, drawn, at.id, at.minute],
   );
   const byId = useMemo(() => new Map(drawn.map((activity) => [activity.id, activity])), [drawn]);
-  const base = week.capacities.find((c) => c.headerId === at.headerId)?.baseLoadKgPerH;
+  const base = week.capacities.find((c) => c.headerId === at.id)?.baseLoadKgPerH;
   const baseKgPerH = base ? valueAt(base, at.minute) : 0;
   const rest = shares.slice(SHOWN);
   return (
@@ -69,6 +75,8 @@ function WhoDraws({ at, week, evaluation, drawn, clock }: WhoProps) {
         <span>{units.rate(header?.loadKgPerH[at.minute] ?? 0)}</span>
       </p>
       <LimitLine load={header?.loadKgPerH[at.minute] ?? 0} limit={header?.limitKgPerH?.[at.minute] ?? null} />
+      {header?.carried ? <CarriedLine carried={header.carried} minute={at.minute} /> : null}
+      {spread.on ? <ChanceLine {...{ at, spread }} /> : null}
       <ul className="mt-1.5 border-t border-rule pt-1.5 text-2xs leading-[17px]">
         {shares.slice(0, SHOWN).map((share) => (
           <li key={share.activityId} className="flex gap-2">

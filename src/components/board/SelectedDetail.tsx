@@ -5,10 +5,11 @@ import type { Week } from '../../core/schedule/week';
 import { Button } from '../ui/Button';
 import { spanText, type Clock } from '../time';
 import { useUnits } from '../ui/units';
-import { canCarry } from './carry';
+import { canCarry, isRun } from './carry';
 import { FixingMark } from './FixingMark';
+import { usesOf } from './limits';
 import { waitSinceClosing } from './threads';
-import { FIXING_WORDS, STAGE_WORDS, unitName } from './words';
+import { FIXING_WORDS, FOLLOWING_WORDS, STAGE_WORDS, unitName } from './words';
 
 interface Props {
   readonly activity: Activity;
@@ -25,7 +26,7 @@ export function SelectedDetail(props: Props) {
   const { activity, week, clock, mayEdit, moved, onFix, onTakeOff } = props;
   const units = useUnits();
   const mode = drawnMode(activity);
-  const isRun = activity.kind !== 'cleaning';
+  const run = isRun(activity);
   return (
     <section aria-label="Selected">
       <h2 className="text-base leading-5 font-semibold" data-testid="selected">
@@ -34,11 +35,8 @@ export function SelectedDetail(props: Props) {
       </h2>
       <p className="flex items-center gap-1.5 text-xs text-ink-muted">
         <FixingMark fixing={activity.fixing} className="size-3 fill-ink" />
-        {[
-          activity.stage ? STAGE_WORDS[activity.stage] : 'cleaning, follows from the sequence',
-          FIXING_WORDS[activity.fixing],
-        ]
-          .slice(0, isRun ? 2 : 1)
+        {[activity.stage ? STAGE_WORDS[activity.stage] : FOLLOWING_WORDS[activity.kind], FIXING_WORDS[activity.fixing]]
+          .slice(0, run ? 2 : 1)
           .join(', ')}
       </p>
       <dl className="mt-2 grid grid-cols-[6.5rem_1fr] gap-y-0.5 text-sm">
@@ -50,6 +48,11 @@ export function SelectedDetail(props: Props) {
               : 'none'}
           </Fact>
         ) : null}
+        {usesOf(activity, week.plant.sharedLimits, clock).map((use, i) => (
+          <Fact key={use} name={i === 0 ? 'Uses' : ''}>
+            {use}
+          </Fact>
+        ))}
         <Due {...{ activity, clock }} />
         <Closing {...{ activity, week }} />
         {moved ? (
@@ -58,7 +61,7 @@ export function SelectedDetail(props: Props) {
           </Fact>
         ) : null}
       </dl>
-      {isRun ? (
+      {run ? (
         <div className="mt-2.5 flex flex-wrap items-center gap-x-2 gap-y-2">
           {mayEdit && canCarry(activity) && activity.placement ? (
             <>

@@ -1,11 +1,15 @@
-import { memo, useMemo, type KeyboardEvent, type PointerEvent } from 'react';
+import { memo, useMemo } from 'react';
+import type { SampledSpread } from '../../core/header/spread/sampledLoads';
+import type { Carried } from '../../core/header/carry';
 import type { Header } from '../../core/plant/plant';
 import { fromMinutes } from '../../core/time/stepFunction';
 import type { Clock } from '../time';
 import { useUnits } from '../ui/units';
 import type { Units } from '../units';
+import { percentText } from './chance';
+import { minuteWalk } from './minuteWalk';
 import { areaPath, betweenPath, linePath, rateMarks, yOfRate, type StripScale } from './strip';
-import { minuteAt, xOf, type TimeScale } from './timeScale';
+import { xOf, type TimeScale } from './timeScale';
 
 const NO_LIMIT = 1e9;
 
@@ -18,6 +22,10 @@ interface Props {
   readonly before: Float64Array | null;
   readonly base: Float64Array | null;
   readonly limit: Float64Array | null;
+  /** Early and late starts; null where they are not shown. */
+  readonly spread: SampledSpread | null;
+  /** What accumulators carry here; null where none does. */
+  readonly carried: Carried | null;
   readonly carrying: boolean;
   readonly onPoint: (headerId: string, minute: number | null) => void;
   readonly pointedMin: number | null;
@@ -25,36 +33,16 @@ interface Props {
 
 /** The drawn load. It takes the focus: arrow keys walk along the minutes and say what is drawn there. */
 export const StripFace = memo(function StripFace(props: Props) {
-  const { header, strip, scale, clock, load, limit, onPoint, pointedMin } = props;
+  const { header, strip, scale, clock, limit, onPoint, pointedMin } = props;
   const units = useUnits();
-  const at = pointedMin ?? Math.floor(scale.horizonMin / 2);
-  const point = (event: PointerEvent<HTMLDivElement>): void => {
-    const x = event.clientX - event.currentTarget.getBoundingClientRect().left;
-    onPoint(header.id, Math.min(scale.horizonMin - 1, Math.floor(minuteAt(scale, x))));
-  };
-  const walk = (event: KeyboardEvent<HTMLDivElement>): void => {
-    const by = { ArrowLeft: -1, ArrowRight: 1, PageUp: -60, PageDown: 60 }[event.key];
-    if (event.key === 'Escape') return onPoint(header.id, null);
-    if (by === undefined) return;
-    event.preventDefault();
-    const step = event.shiftKey ? by : by * (Math.abs(by) === 1 ? 5 : 1);
-    onPoint(header.id, Math.max(0, Math.min(scale.horizonMin - 1, at + step)));
-  };
+  const { at, props: walking } = minuteWalk({ scale, pointedMin, onPoint: (minute) => onPoint(header.id, minute) });
   return (
     <div
-      role="slider"
-      tabIndex={0}
+      {...walking}
       aria-label={`${header.name}, minute of the week`}
-      aria-valuemin={0}
-      aria-valuemax={scale.horizonMin - 1}
-      aria-valuenow={at}
-      aria-valuetext={valueText(at, load, limit, clock, units)}
+      aria-valuetext={valueText(at, props, clock, units)}
       className="relative mt-1 mb-[3px] cursor-crosshair focus-visible:outline-offset-[-2px]"
       style={{ height: strip.heightPx }}
-      onPointerMove={point}
-      onPointerLeave={() => onPoint(header.id, null)}
-      onKeyDown={walk}
-      onBlur={() => onPoint(header.id, null)}
     >
       <Drawing {...props} />
       <LimitNames {...{ limit, strip, scale }} />
@@ -62,15 +50,17 @@ export const StripFace = memo(function StripFace(props: Props) {
   );
 });
 
-function valueText(minute: number, load: Float64Array, limit: Float64Array | null, clock: Clock, units: Units): string {
+function valueText(minute: number, { load, limit, spread }: Props, clock: Clock, units: Units): string {
   const rate = load[minute] ?? 0;
   const bound = limit?.[minute] ?? NO_LIMIT;
   const judged = bound < NO_LIMIT ? `limit ${units.rate(bound)}` : 'not judged';
   const over = bound < NO_LIMIT && rate > bound ? `, over by ${units.rate(rate - bound)}` : '';
-  return `${clock.dayTime(minute)}: ${units.rate(rate)}, ${judged}${over}`;
+  const chance = spread?.overChance?.[minute];
+  const going = chance === undefined ? '' : `, chance of going over ${percentText(chance)}`;
+  return `${clock.dayTime(minute)}: ${units.rate(rate)}, ${judged}${over}${going}`;
 }
 
-function Drawing({ strip, scale, load, before, base, limit, carrying }: Props) {
+function Drawing({ strip, scale, load, before, base, limit, carrying, spread, carried }: Props) {
   const units = useUnits();
   const view = { from: 0, to: scale.horizonMin };
   const { pxPerMin, topKgPerH, heightPx } = strip;
@@ -103,6 +93,8 @@ function Drawing({ strip, scale, load, before, base, limit, carrying }: Props) {
       {still.marks.map((y) => (
         <path key={y} d={`M0 ${y}H${scale.widthPx}`} className="stroke-rule" strokeDasharray="1 5" />
       ))}
+      {spread ? <Confident {...{ spread, load, view, strip }} /> : null}
+      {carried ? <CarriedFill {...{ carried, load, view, strip }} /> : null}
       <path d={areaPath(load, view, strip)} className="fill-steam" fillOpacity={0.55} />
       <path d={still.base} className="fill-steam" />
       {limit ? <path d={betweenPath(load, limit, view, strip)} fill="url(#board-hatch-over)" /> : null}
@@ -117,6 +109,41 @@ function Drawing({ strip, scale, load, before, base, limit, carrying }: Props) {
       ) : null}
       <path d={still.limit} className="fill-none stroke-room" strokeWidth={2} />
     </svg>
+  );
+}
+
+interface BesideLoad {
+  readonly load: Float64Array;
+  readonly view: { readonly from: number; readonly to: number };
+  readonly strip: StripScale;
+}
+
+/** How far the load goes in all but the few weeks that the confidence leaves out. */
+function Confident({ spread, load, view, strip }: BesideLoad & { readonly spread: SampledSpread }) {
+  return (
+    <path
+      d={betweenPath(spread.confidentKgPerH, load, view, strip)}
+      className="fill-steam"
+      fillOpacity={0.2}
+      data-testid="confident"
+    />
+  );
+}
+
+/** What accumulators give, on top of the load that is left to the boilers. */
+function CarriedFill({ carried, load, view, strip }: BesideLoad & { readonly carried: Carried }) {
+  const withCarried = useMemo(
+    () => load.map((kgPerH, t) => kgPerH + (carried.dischargeKgPerH[t] as number)),
+    [load, carried],
+  );
+  return (
+    <path
+      d={betweenPath(withCarried, load, view, strip)}
+      className="fill-room stroke-room"
+      fillOpacity={0.25}
+      strokeWidth={1}
+      data-testid="carried"
+    />
   );
 }
 

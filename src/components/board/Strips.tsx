@@ -1,30 +1,40 @@
-import { useCallback, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import { HeaderStrip } from './HeaderStrip';
+import { LimitStrips } from './LimitStrips';
 import type { PointedAt } from './Pointed';
+import { SpreadRow } from './SpreadRow';
 import { useStore, type Store } from './store';
 import type { BoardModel } from './useBoard';
 
 interface Props {
   readonly model: BoardModel;
   readonly pointed: Store<PointedAt | null>;
+  readonly limitsOpen: boolean;
+  readonly onLimits: () => void;
 }
 
-/** The headers above the rows: those that boilers feed always, those behind a letdown when unfolded. */
-export function Strips({ model, pointed }: Props) {
-  const { week, evaluation, before, carry, view, clock } = model;
+/**
+ * Above the rows: the headers that boilers feed always, each with its early and late starts; those behind a letdown and
+ * the shared limits when unfolded.
+ */
+export function Strips({ model, pointed, limitsOpen, onLimits }: Props) {
+  const { week, evaluation, before, carry, view, clock, spread } = model;
   const [open, setOpen] = useState<ReadonlySet<string>>(new Set());
   const at = useStore(pointed, (p) => p);
-  const point = useCallback(
-    (headerId: string, minute: number | null) => pointed.set(minute === null ? null : { headerId, minute }),
-    [pointed],
-  );
+  const point = useMemo(() => {
+    const of = (kind: PointedAt['kind']) => (id: string, minute: number | null) =>
+      pointed.set(minute === null ? null : { kind, id, minute });
+    return { header: of('header'), chance: of('chance'), limit: of('limit') };
+  }, [pointed]);
+  const minuteAt = (kind: PointedAt['kind'], id: string) => (at?.kind === kind && at.id === id ? at.minute : null);
+  const go = useCallback((minute: number) => view.reveal({ from: minute - 30, to: minute + 30 }, null), [view]);
   const toggle = (id: string): void =>
     setOpen((now) => (now.has(id) ? new Set([...now].filter((one) => one !== id)) : new Set([...now, id])));
-  return week.plant.headers.map((header) => {
+  const headers = week.plant.headers.map((header) => {
     const judgement = evaluation.headers.find((h) => h.headerId === header.id);
     if (!judgement) return null;
     const main = header.feed.kind === 'boilers';
-    return (
+    return [
       <HeaderStrip
         key={header.id}
         header={header}
@@ -32,14 +42,41 @@ export function Strips({ model, pointed }: Props) {
         judgement={judgement}
         before={before?.headers.find((h) => h.headerId === header.id) ?? null}
         carried={carry.store}
+        spreads={spread.store}
         scale={view.scale}
         clock={clock}
         open={main || open.has(header.id)}
         onToggle={main ? null : () => toggle(header.id)}
         main={main}
-        onPoint={point}
-        pointedMin={at?.headerId === header.id ? at.minute : null}
-      />
-    );
+        onPoint={point.header}
+        pointedMin={minuteAt('header', header.id)}
+      />,
+      main ? (
+        <SpreadRow
+          key={`${header.id} spread`}
+          header={header}
+          control={spread}
+          scale={view.scale}
+          clock={clock}
+          onPoint={point.chance}
+          pointedMin={minuteAt('chance', header.id)}
+          onGo={go}
+        />
+      ) : null,
+    ];
   });
+  return (
+    <>
+      {headers}
+      <LimitStrips
+        {...{ week, evaluation, clock }}
+        carried={carry.store}
+        scale={view.scale}
+        open={limitsOpen}
+        onToggle={onLimits}
+        onPoint={point.limit}
+        pointed={at?.kind === 'limit' ? at : null}
+      />
+    </>
+  );
 }

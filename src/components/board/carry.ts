@@ -20,9 +20,14 @@ export interface Carry {
   readonly target: Target | null;
 }
 
+/** A run of a batch; what is not, follows from the sequence on the units: cleanings, idle spells, warm-ups. */
+export function isRun(activity: Activity): boolean {
+  return activity.kind === 'stage';
+}
+
 /** An activity that the floor has started, or that is drawn only, stays where it is. */
 export function canCarry(activity: Activity): boolean {
-  return activity.kind !== 'cleaning' && (activity.fixing === 'free' || activity.fixing === 'fixed');
+  return isRun(activity) && (activity.fixing === 'free' || activity.fixing === 'fixed');
 }
 
 export function pickUp(activity: Activity, by: Carry['by'], heldAtMin = 0): Carry {

@@ -21,6 +21,7 @@ import { useFrozen } from './useFrozen';
 import { useLevelling } from './useLevelling';
 import { useNowMin } from './useNowMin';
 import { useSaves } from './useSaves';
+import { useStartSpread } from './useStartSpread';
 import { useWeek } from './useWeek';
 import { useBoardView } from './useBoardView';
 import { blockLabel } from './words';
@@ -44,6 +45,13 @@ export function useBoard(me: MeDto, initial: WeekDto) {
   const ground = useGround(dto);
   const firstMinute = ground.nowMin >= 0 && ground.nowMin < dto.week.horizonMin ? ground.nowMin : 720;
   const view = useBoardView(dto.week.horizonMin, firstMinute);
+  const spread = useStartSpread({
+    personId: me.personId,
+    week: dto.week,
+    startSpreads: dto.startSpreads,
+    carrying: store,
+    chosen: shown.chosen,
+  });
   const carry = useCarry(store, { week: dto.week, evaluator, rows: ground.rows, scale: view.scale });
 
   return {
@@ -55,6 +63,7 @@ export function useBoard(me: MeDto, initial: WeekDto) {
     levelling,
     carry,
     carryingBy,
+    spread,
     view,
     notices,
     tell,
@@ -76,20 +85,15 @@ type Chosen = ReturnType<typeof useLevelling>['chosen'];
 
 /** The week as drawn: the plan, or a proposal over it. */
 function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, chosen: Chosen) {
-  const preview = useMemo(
-    () =>
-      chosen.length === 0
-        ? null
-        : evaluator.preview(chosen.map((move) => ({ activityId: move.activityId, placement: move.to }))),
-    [evaluator, chosen],
-  );
+  const moves = useMemo(() => chosen.map((move) => ({ activityId: move.activityId, placement: move.to })), [chosen]);
+  const preview = useMemo(() => (moves.length === 0 ? null : evaluator.preview(moves)), [evaluator, moves]);
   const week = preview?.week ?? dto.week;
   const evaluation = preview?.evaluation ?? evaluator.evaluation;
   const { firstInstant, timeZone } = dto;
   const clock = useMemo(() => makeClock({ firstInstant, timeZone }), [firstInstant, timeZone]);
   const units = useUnits();
   const names = useMemo(() => namesOf(week, sayingIn(units.system)), [week, units]);
-  const drawn = useMemo(() => [...week.activities, ...evaluation.cleanings], [week, evaluation]);
+  const { drawn } = evaluation;
   const byUnit = useMemo(() => drawnByUnit(drawn), [drawn]);
   const breaches = useMemo(() => breachesByActivity(evaluation.breaches), [evaluation]);
   const labels = useMemo(() => {
@@ -107,7 +111,21 @@ function useShown(evaluator: ReturnType<typeof createEvaluator>, dto: WeekDto, c
   const waiting = useMemo(() => waitingGroups(notYetPlaced(week.activities), week.links), [week]);
   const isProposal = preview !== null;
   const before = isProposal ? evaluator.evaluation : null;
-  return { week, evaluation, before, isProposal, clock, names, drawn, byUnit, breaches, labels, over, waiting };
+  return {
+    week,
+    evaluation,
+    before,
+    isProposal,
+    chosen: moves,
+    clock,
+    names,
+    drawn,
+    byUnit,
+    breaches,
+    labels,
+    over,
+    waiting,
+  };
 }
 
 /** What the plant and the calendar give. */

@@ -11,7 +11,7 @@ import type { BoardModel } from './useBoard';
 import { useLatest } from './useLatest';
 import { activityName, placeText, unitName } from './words';
 import { verdictOf } from './verdict';
-import type { Carry } from './carry';
+import { isRun, type Carry } from './carry';
 
 /** Gives the focus to a block once it is drawn. */
 export function focusBlock(id: string): void {
@@ -134,13 +134,13 @@ export function useBoardActions(model: BoardModel) {
   };
 
   const toggleFix = (): void => {
-    if (!selected || !model.mayEdit || selected.kind === 'cleaning' || !selected.placement) return;
+    if (!selected || !model.mayEdit || !isRun(selected) || !selected.placement) return;
     const fixing = selected.fixing === 'fixed' ? 'free' : 'fixed';
     make(fixActivity(model.dto.week, selected.id, fixing), `${activityName(selected)} is ${fixing}.`);
   };
 
   const takeOff = (): void => {
-    if (!selected || !model.mayEdit || selected.kind === 'cleaning' || !selected.placement) return;
+    if (!selected || !model.mayEdit || !isRun(selected) || !selected.placement) return;
     make(takeOffActivity(model.dto.week, selected.id), `${activityName(selected)} is not yet placed.`);
   };
 

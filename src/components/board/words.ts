@@ -1,6 +1,13 @@
 import type { ActivityState, WeekDto } from '../../contracts/week';
 import type { ProposedMove } from '../../core/levelling/proposal';
-import { drawnMode, type Activity, type Fixing, type Placement, type Stage } from '../../core/plant/activity';
+import {
+  drawnMode,
+  type Activity,
+  type ActivityKind,
+  type Fixing,
+  type Placement,
+  type Stage,
+} from '../../core/plant/activity';
 import type { HeaderJudgement } from '../../core/header/judgement';
 import type { PlantModel } from '../../core/plant/plant';
 import { groupDigits, spanText, type Clock } from '../time';
@@ -14,6 +21,14 @@ export const STAGE_WORDS: Readonly<Record<Stage, string>> = {
   retort: 'retort',
   pasteurise: 'pasteurise',
   other: 'run',
+};
+
+/** What follows from the sequence on the units, by kind. */
+export const FOLLOWING_WORDS: Readonly<Record<ActivityKind, string>> = {
+  stage: 'run',
+  cleaning: 'cleaning, follows from the sequence',
+  idle: 'kept hot until the next run, follows from the gap',
+  warmUp: 'warm-up, follows from the gap',
 };
 
 export const FIXING_WORDS: Readonly<Record<Fixing, string>> = {
