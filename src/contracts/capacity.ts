@@ -1,5 +1,9 @@
 import { z } from 'zod';
+import type { FuelKey } from '../core/duty/fuel';
+import type { StartUpHeader } from '../core/house/headerNeeds';
+import type { Fire, ReadyTimes } from '../core/house/readiness';
 import type { HeaderCapacity } from '../core/plant/plant';
+import type { StepFunction } from '../core/time/stepFunction';
 
 const span = {
   /** Minutes since the week's first instant. */
@@ -22,7 +26,7 @@ export const limitRequestSchema = z
   .refine(ordered, orderedMessage);
 export type LimitRequest = z.infer<typeof limitRequestSchema>;
 
-export interface BoilerDto {
+export interface BoilerDto extends ReadyTimes {
   readonly id: string;
   readonly name: string;
   readonly headerId: string;
@@ -32,8 +36,31 @@ export interface BoilerDto {
   readonly pressureBarG: number;
   readonly turndown: number;
   readonly greatestRiseFractionPerMin: number;
-  /** share of full rating over the week: 0 shut, 1 lit. */
-  readonly share: readonly { readonly from: number; readonly value: number }[];
+  /** Heat into the water when fully lit. [kW] */
+  readonly heatToWaterKW: number;
+  readonly efficiency: number;
+  readonly fuel: FuelKey;
+  /** Share of full rating, 0 shut, 1 lit; from before the week, so far as that bears on it (negative minutes). */
+  readonly share: StepFunction;
+  /** Spells in fire, with when they are ready; the first may have begun before the week. */
+  readonly fires: readonly Fire[];
+}
+
+/** A header of the capacity desk. */
+export interface DeskHeaderDto extends StartUpHeader {
+  readonly name: string;
+  readonly pressureBarG: number;
+  readonly dryness: number | null;
+}
+
+/** Losses and users outside the plan, by hour of the week (0 is its first hour). */
+export interface BaseLoadDto {
+  readonly id: string;
+  readonly headerId: string;
+  readonly fromHour: number;
+  readonly toHour: number;
+  readonly kgPerH: number;
+  readonly note: string;
 }
 
 /** One line of the week's capacity record, newest first. */
@@ -60,11 +87,14 @@ export interface CapacityDto {
   readonly reserveFraction: number;
   readonly boilers: readonly BoilerDto[];
   readonly capacities: readonly HeaderCapacity[];
-  readonly headers: readonly {
-    readonly id: string;
-    readonly name: string;
-    readonly pressureBarG: number;
-    readonly dryness: number | null;
-  }[];
+  /** The same with, at each time, the boiler out that exports most. */
+  readonly largestOut: readonly HeaderCapacity[];
+  readonly headers: readonly DeskHeaderDto[];
+  readonly baseLoads: readonly BaseLoadDto[];
+  /** Price of a kWh of fuel; null: not set. */
+  readonly fuelPricePerKWh: number | null;
+  readonly currency: string;
+  /** Product of the orders that the week's plan has placed. [kg] */
+  readonly placedKg: number;
   readonly entries: readonly CapacityEntryDto[];
 }

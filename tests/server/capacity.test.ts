@@ -1,11 +1,13 @@
+import { eq } from 'drizzle-orm';
 import { beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { CapacityDto } from '@/contracts/capacity';
 import { valueAt } from '@/core/time/stepFunction';
 import { db } from '@/db/client';
-import { boilerFirings, record, steamLimits } from '@/db/schema/index';
+import { boilerFirings, plants, record, steamLimits } from '@/db/schema/index';
 import { GET } from '@/pages/api/weeks/[week]/capacity';
 import { POST as FIRE } from '@/pages/api/weeks/[week]/firings';
 import { POST as LIMIT } from '@/pages/api/weeks/[week]/limits';
+import { instantOf, weekTimeOf } from '@/server/weeks/weekTime';
 import { callApi, outcome } from '../support/api';
 import { nameOf, openWorld, sessionOf, WEEK } from '../support/world';
 
@@ -21,6 +23,7 @@ beforeEach(async () => {
 });
 
 const week = { week: WEEK };
+const NOVEMBER = weekTimeOf(WEEK, 'Europe/London');
 const firing = { boilerId: 'north-boiler-1', share: 1, fromMin: 240, toMin: 8_000, reason: 'week in fire' };
 const limit = {
   headerId: 'north-main',
@@ -53,15 +56,16 @@ describe('the boiler house over a week', () => {
     const dto = await set(FIRE, firing);
     // Worked boiler (invented plant), computed with an independent IAPWS-IF97 implementation: 3546.94 kg/h.
     expect(dto.boilers[0]?.netKgPerH).toBeCloseTo(3_546.94, 2);
-    expect([239, 240, 7_999, 8_000].map((minute) => limitAt(dto, minute) / 3_546.94)).toEqual([
+    // Lit at 240, cold: 5 min purge and 120 min to pressure.
+    expect([364, 365, 7_999, 8_000].map((minute) => limitAt(dto, minute) / 3_546.94)).toEqual([
       0,
       expect.closeTo(0.9, 5),
       expect.closeTo(0.9, 5),
       0,
     ]);
-    expect(valueAt(main(dto)?.greatestRiseKgPerHPerMin ?? [], 240)).toBeCloseTo(354.694, 3);
+    expect(valueAt(main(dto)?.greatestRiseKgPerHPerMin ?? [], 365)).toBeCloseTo(354.694, 3);
     // 8 t of water at 10 bar g, 8.876 kg per bar and tonne, computed with an independent IAPWS-IF97 implementation.
-    expect(valueAt(main(dto)?.storedKgPerBar ?? [], 240)).toBeCloseTo(8 * 8.876, 1);
+    expect(valueAt(main(dto)?.storedKgPerBar ?? [], 365)).toBeCloseTo(8 * 8.876, 1);
     expect(valueAt(main(dto)?.baseLoadKgPerH ?? [], 4 * 60)).toBe(240);
   });
 
@@ -86,7 +90,37 @@ describe('the boiler house over a week', () => {
       { from: 8_000, value: 0 },
     ]);
     expect(limitAt(dto, 1_000)).toBeCloseTo(0.45 * 3_546.94, 1);
-    expect(limitAt(dto, 1_050)).toBe(0);
+    // Relit at 1 200 after two hours and a half: warm, 5 min purge and 30 min to pressure.
+    expect([1_049, 1_050, 1_234, 1_235].map((minute) => limitAt(dto, minute) > 0)).toEqual([true, false, false, true]);
+    expect(dto.boilers[0]?.fires.map(({ litMin, readyMin, start }) => [litMin, readyMin, start])).toEqual([
+      [240, 365, 'cold'],
+      [1_200, 1_235, 'warm'],
+    ]);
+  });
+
+  it('knows from the week before how warm a boiler is, without listing that week', async () => {
+    const before = { fromAt: instantOf(NOVEMBER, -6_000), toAt: instantOf(NOVEMBER, -300) };
+    const row = { plantId: 'north', boilerId: 'north-boiler-1', share: 1, reason: 'last week', authorId: 'x' };
+    await db.insert(boilerFirings).values({ ...row, id: 'last-week', ...before });
+    expect(main(await read())).toMatchObject({ exportKgPerH: null });
+    const dto = await set(FIRE, firing);
+    // Out at -300, lit at 240: warm, 35 min.
+    expect(dto.boilers[0]?.fires.at(-1)).toMatchObject({ litMin: 240, readyMin: 275, start: 'warm' });
+    expect(dto.entries.map(({ reason }) => reason)).toEqual([firing.reason]);
+  });
+
+  it('is judged with the largest boiler out as well', async () => {
+    const out = (dto: CapacityDto) => valueAt(dto.largestOut[0]?.limitKgPerH ?? [], 1_000) / 3_546.94;
+    expect(out(await set(FIRE, firing))).toBe(0);
+    expect(out(await set(FIRE, { ...firing, boilerId: 'north-boiler-2', share: 0.5 }))).toBeCloseTo(0.45, 5);
+    expect(limitAt(await read(), 1_000)).toBeCloseTo(1.35 * 3_546.94, 1);
+  });
+
+  it('says what fuel costs, or that no price is set, and what product is placed', async () => {
+    expect(await read()).toMatchObject({ fuelPricePerKWh: null, placedKg: 0 });
+    await db.update(plants).set({ fuelPricePerKWh: 0.05 }).where(eq(plants.id, 'north'));
+    expect(await read()).toMatchObject({ fuelPricePerKWh: 0.05, currency: 'EUR' });
+    expect((await read()).baseLoads).toMatchObject([{ headerId: 'north-main', kgPerH: 240 }]);
   });
 
   it('holds a set limit where it is lower, until it is taken back', async () => {

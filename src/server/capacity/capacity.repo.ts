@@ -1,8 +1,19 @@
-import { and, asc, eq, gt, lt } from 'drizzle-orm';
+import { and, asc, eq, gt, isNotNull, lt, sql } from 'drizzle-orm';
+import { LOOK_BACK_MIN } from '@/core/house/readiness';
 import type { Db } from '@/db/client';
-import { baseLoads, boilerFirings, boilers, headers, plants, steamLimits } from '@/db/schema/index';
+import {
+  activities,
+  baseLoads,
+  boilerFirings,
+  boilers,
+  headers,
+  orders,
+  plans,
+  plants,
+  steamLimits,
+} from '@/db/schema/index';
 import { inUseIn } from '../weeks/inUse';
-import type { WeekTime } from '../weeks/weekTime';
+import { instantOf, type WeekTime } from '../weeks/weekTime';
 
 export type CapacityRows = Awaited<ReturnType<typeof capacityRows>>;
 export type BoilerRow = CapacityRows['boilers'][number];
@@ -11,15 +22,22 @@ export type LimitRow = CapacityRows['limits'][number];
 
 async function plantRow(tx: Db, plantId: string) {
   const [plant] = await tx
-    .select({ altitudeM: plants.altitudeM, reserveFraction: plants.reserveFraction })
+    .select({
+      altitudeM: plants.altitudeM,
+      reserveFraction: plants.reserveFraction,
+      fuelPricePerKWh: plants.fuelPricePerKWh,
+      currency: plants.currency,
+    })
     .from(plants)
     .where(eq(plants.id, plantId));
   if (!plant) throw new Error(`no plant ${plantId}`);
   return plant;
 }
 
+/** Firings of the week, and those before it that say how warm a boiler is. */
 function firingsOf(tx: Db, plantId: string, time: WeekTime) {
-  const touches = and(lt(boilerFirings.fromAt, time.endInstant), gt(boilerFirings.toAt, time.firstInstant));
+  const lookBack = instantOf(time, -LOOK_BACK_MIN);
+  const touches = and(lt(boilerFirings.fromAt, time.endInstant), gt(boilerFirings.toAt, lookBack));
   return tx
     .select()
     .from(boilerFirings)
@@ -34,6 +52,20 @@ function limitsOf(tx: Db, plantId: string, time: WeekTime) {
     .from(steamLimits)
     .where(and(eq(steamLimits.plantId, plantId), touches))
     .orderBy(asc(steamLimits.sequence));
+}
+
+/** Product of the orders of which anything is placed in the week. [kg] */
+export async function placedKg(tx: Db, plantId: string, time: WeekTime): Promise<number> {
+  const placed = tx
+    .selectDistinct({ orderId: activities.orderId })
+    .from(activities)
+    .innerJoin(plans, eq(plans.id, activities.planId))
+    .where(and(eq(plans.plantId, plantId), eq(plans.weekStart, time.weekStart), isNotNull(activities.startAt)));
+  const [sum] = await tx
+    .select({ kg: sql<number>`coalesce(sum(${orders.quantityKg}), 0)`.mapWith(Number) })
+    .from(orders)
+    .where(and(eq(orders.plantId, plantId), sql`${orders.id} in ${placed}`));
+  return sum?.kg ?? 0;
 }
 
 /** All that the capacity of a plant's week is made of; what was said later comes later. */

@@ -1,11 +1,12 @@
 import { buildHeaderCapacity, NOT_JUDGED_KG_PER_H, type BoilerInForce } from '@/core/header/capacity';
+import { withoutLargest } from '@/core/house/largestOut';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { stepsFromSpans, type ValuedSpan } from '@/core/time/stepMath';
 import type { Db } from '@/db/client';
 import { sumByHour } from '../weeks/weeklySteps';
 import type { WeekTime } from '../weeks/weekTime';
 import { capacityRows, type CapacityRows } from './capacity.repo';
-import { boilerInForce, spanInWeek, spansOf } from './inForce';
+import { boilerInForce, spanInWeek, spansOf, touchesWeek } from './inForce';
 
 /** Limits in force on a header: what was said later holds, and a row without a limit takes earlier ones back. */
 function setLimits(rows: CapacityRows, headerId: string, time: WeekTime): ValuedSpan[] {
@@ -17,16 +18,18 @@ function setLimits(rows: CapacityRows, headerId: string, time: WeekTime): Valued
 /** Boilers that feed a header; none where nothing was said of any of them for the week: then they are not known. */
 function boilersOf(rows: CapacityRows, headerId: string, time: WeekTime): BoilerInForce[] {
   const own = rows.boilers.filter((boiler) => boiler.headerId === headerId);
-  const said = rows.firings.some((firing) => own.some((boiler) => boiler.id === firing.boilerId));
+  const ids = new Set(own.map((boiler) => boiler.id));
+  const said = rows.firings.some((firing) => ids.has(firing.boilerId) && touchesWeek(time, firing));
   return said ? own.map((boiler) => boilerInForce(rows, boiler, time)) : [];
 }
 
-/** Every header's capacity over a week, from rows. */
-export function headerCapacities(rows: CapacityRows, time: WeekTime): HeaderCapacity[] {
-  return rows.headers.map((header) =>
-    buildHeaderCapacity({
+/** Every header's capacity over a week, from rows; with all boilers, or with the largest one of each header out. */
+export function headerCapacities(rows: CapacityRows, time: WeekTime, largestOut = false): HeaderCapacity[] {
+  return rows.headers.map((header) => {
+    const boilers = boilersOf(rows, header.id, time);
+    return buildHeaderCapacity({
       headerId: header.id,
-      boilers: boilersOf(rows, header.id, time),
+      boilers: largestOut ? withoutLargest(boilers) : boilers,
       reserveFraction: rows.plant.reserveFraction,
       setLimits: setLimits(rows, header.id, time),
       baseLoadKgPerH: sumByHour(
@@ -35,8 +38,8 @@ export function headerCapacities(rows: CapacityRows, time: WeekTime): HeaderCapa
           .filter((load) => load.headerId === header.id)
           .map(({ fromHour, toHour, kgPerH }) => ({ fromHour, toHour, value: kgPerH })),
       ),
-    }),
-  );
+    });
+  });
 }
 
 /** Every header's capacity over a plant's week, in the plant's order of headers. */

@@ -1,11 +1,13 @@
 /** The demo week as the naive hand leaves it: invented, the same for every week start. Minutes from Monday 00:00. */
 import { boilerExport } from '../../core/duty/boilerExport';
 import { buildHeaderCapacity, type BoilerInForce } from '../../core/header/capacity';
+import { firesOf, readySpans } from '../../core/house/readiness';
 import type { HeaderCapacity, PlantModel } from '../../core/plant/plant';
 import { barAbsolute, barGauge } from '../../core/quantity/units';
 import { toAbsolute } from '../../core/quantity/pressure';
 import type { Week } from '../../core/schedule/week';
 import { storedSteamKgPerBar } from '../../core/steam/flash';
+import { stepsFromSpans } from '../../core/time/stepMath';
 import { demoCleaning, demoModes, supplyOf } from './duties';
 import { NaiveHand } from './naiveHand';
 import { buildNet, type DemoNet, type NetParts } from './nets';
@@ -133,18 +135,18 @@ function boilerInForce(boiler: plant.DemoBoiler): BoilerInForce {
   const pressure = toAbsolute(barGauge(boiler.pressureBarG), barAbsolute(plant.DEMO_PLANT.ambientBarA));
   const stored = storedSteamKgPerBar(pressure, 1_000);
   if (!exported.ok || !stored.ok) throw new Error(`demo ${boiler.name} can't be worked out`);
-  const firings: readonly { from: number; to: number; share: number }[] = plant.DEMO_FIRINGS.filter(
-    (f) => f.boilerId === boiler.id,
-  );
+  const firings = plant.DEMO_FIRINGS.filter((f) => f.boilerId === boiler.id).map(({ from, to, share }) => {
+    return { from, to, value: share };
+  });
   return {
     id: boiler.id,
     exportKgPerH: exported.value.netKgPerH,
     greatestRisePerMin: boiler.greatestRiseFractionPerMin,
     waterTonnes: boiler.waterTonnes,
     storedKgPerBarAndTonne: stored.value,
-    lit: firings.filter((f) => f.share > 0),
-    outages: firings.filter((f) => f.share === 0),
-    deratings: firings.map((f) => ({ from: f.from, to: f.to, value: f.share })),
+    lit: readySpans(firesOf(stepsFromSpans(firings, 0), boiler, 7 * DAY)),
+    outages: [],
+    deratings: firings,
   };
 }
 

@@ -1,4 +1,5 @@
 /** The demo plant: invented from end to end, and marked as demo wherever it is shown. */
+import type { FuelKey } from '../../core/duty/fuel';
 import type { CleaningRule, Header, Line, PlantRules, Unit, UnitKind, VentGroup } from '../../core/plant/plant';
 
 export const DEMO_PLANT = {
@@ -7,6 +8,9 @@ export const DEMO_PLANT = {
   timeZone: 'Europe/London',
   altitudeM: 0,
   ambientBarA: 1.01325,
+  /** Invented. */
+  fuelPricePerKWh: 0.052,
+  currency: 'GBP',
 } as const;
 
 export const DEMO_RULES: PlantRules = { snapMinutes: 5, reserveFraction: 0.1, sagToleranceBar: 0.5 };
@@ -111,6 +115,11 @@ export interface DemoBoiler {
   readonly turndown: number;
   readonly greatestRiseFractionPerMin: number;
   readonly waterTonnes: number;
+  readonly efficiency: number;
+  readonly fuel: FuelKey;
+  readonly purgeMinutes: number;
+  readonly warmReadyMinutes: number;
+  readonly coldReadyMinutes: number;
 }
 
 const boilerHouse = {
@@ -123,6 +132,11 @@ const boilerHouse = {
   turndown: 4,
   greatestRiseFractionPerMin: 0.3,
   waterTonnes: 10,
+  efficiency: 0.82,
+  fuel: 'naturalGasUs' as const,
+  purgeMinutes: 5,
+  warmReadyMinutes: 30,
+  coldReadyMinutes: 120,
 };
 
 export const DEMO_BOILERS: readonly DemoBoiler[] = [
@@ -130,10 +144,10 @@ export const DEMO_BOILERS: readonly DemoBoiler[] = [
   { id: 'demo-boiler-2', name: 'Boiler 2', ratingFromAndAtKgPerH: 2_150, ...boilerHouse },
 ];
 
-/** What the boiler house says of the week: minutes from Monday 00:00. */
+/** What the boiler house says of the week: minutes from Monday 00:00. Fires are lit then; steam can leave 125 min later. */
 export const DEMO_FIRINGS = [
-  { boilerId: 'demo-boiler-1', from: 240, to: 8_160, share: 1, reason: 'Week in fire, demo' },
-  { boilerId: 'demo-boiler-2', from: 300, to: 8_160, share: 1, reason: 'Week in fire, demo' },
+  { boilerId: 'demo-boiler-1', from: 115, to: 8_160, share: 1, reason: 'Week in fire, demo' },
+  { boilerId: 'demo-boiler-2', from: 175, to: 8_160, share: 1, reason: 'Week in fire, demo' },
   { boilerId: 'demo-boiler-2', from: 3_600, to: 3_840, share: 0.75, reason: 'Burner on low fire for service, demo' },
 ] as const;
 
