@@ -1,8 +1,27 @@
 const YEAR_S = 31_536_000;
 
-function keepTheme(theme: string): void {
+/** Shows a theme and keeps it on this device. */
+export function keepTheme(theme: string): void {
   document.documentElement.dataset.theme = theme;
   document.cookie = `theme=${theme}; path=/; max-age=${YEAR_S}; samesite=lax`;
+}
+
+/** Keeps a theme for the account too, so that a new device begins with it; this device has it already. */
+function keepForAccount(theme: string): void {
+  void post('/api/settings/own', { theme }).catch(() => undefined);
+}
+
+const post = (path: string, body: unknown): Promise<Response> =>
+  fetch(path, {
+    method: 'POST',
+    headers: { accept: 'application/json', 'content-type': 'application/json' },
+    body: JSON.stringify(body),
+  });
+
+async function workAt(plantId: string): Promise<void> {
+  const answer = await post('/api/session/plant', { plantId }).catch(() => null);
+  if (answer?.ok) location.assign('/');
+  else location.reload();
 }
 
 async function signOut(): Promise<void> {
@@ -13,12 +32,18 @@ async function signOut(): Promise<void> {
   }
 }
 
-/** Lets the person menu of the header keep the theme and sign out. */
+/** Lets the person menu of the header keep the theme, go to another plant and sign out. */
 export function followPersonMenu(): void {
   const menu = document.getElementById('person-menu');
   menu?.addEventListener('change', (event) => {
     const input = event.target;
-    if (input instanceof HTMLInputElement && input.name === 'theme') keepTheme(input.value);
+    if (input instanceof HTMLInputElement && input.name === 'theme') {
+      keepTheme(input.value);
+      keepForAccount(input.value);
+    }
+  });
+  menu?.querySelectorAll<HTMLElement>('[data-plant]').forEach((button) => {
+    button.addEventListener('click', () => void workAt(button.dataset.plant ?? ''));
   });
   menu?.querySelector('[data-sign-out]')?.addEventListener('click', () => void signOut());
 }

@@ -33,11 +33,15 @@ function showProblem<Values extends FieldValues, Output>(
 ): string[] {
   const values = form.getValues();
   const fields = error.problem.fields ?? [];
-  const known = fields.filter(({ path }) => get(values, path) !== undefined);
+  const placed = fields.map(({ path, message }) => ({
+    message,
+    path: [path, path.replace(/^values\./, '')].find((name) => name !== '' && get(values, name) !== undefined),
+  }));
+  const known = placed.filter(({ path }) => path !== undefined);
   known.forEach(({ path, message }, index) =>
     form.setError(path as FieldPath<Values>, { type: 'server', message }, { shouldFocus: index === 0 }),
   );
-  return fields.filter((field) => !known.includes(field)).map(({ message }) => message);
+  return placed.filter((field) => !known.includes(field)).map(({ message }) => message);
 }
 
 /**
