@@ -194,6 +194,19 @@ interface Tank {
   readonly steamH: number;
 }
 
+function net(sheet: WorkingSheet, grossKgPerH: number, feedTankSteamKgPerH: number): number {
+  sheet.section('Net export');
+  return sheet.step({
+    symbol: 'ṁ_n',
+    name: 'What leaves for the plant: the feed tank’s steam is drawn from the same header',
+    formula: 'ṁ_g − ṁ_ft',
+    unit: 'kg/h',
+    source: 'Mass balance',
+    inputs: { ṁ_g: [grossKgPerH, 'kg/h'], ṁ_ft: [feedTankSteamKgPerH, 'kg/h'] },
+    value: ({ ṁ_g, ṁ_ft }) => ṁ_g - ṁ_ft,
+  });
+}
+
 function heatToWater(sheet: WorkingSheet, grossKgPerH: number, feedKgPerH: number, at: Enthalpies): number {
   sheet.section('Fire');
   return sheet.step({
@@ -228,7 +241,7 @@ export function boilerExport(house: BoilerHouseInputs, supply: SteamSupply): Res
   const mixH = mixEnthalpy(sheet, house, at.value);
   const tank = { tank: at.value.feedTank, steamH: supply.header.h };
   const feedTankSteamKgPerH = feedTankSteam(sheet, house, feedKgPerH, mixH, tank);
+  const netKgPerH = sheet.total('Net export', net(sheet, grossKgPerH, feedTankSteamKgPerH), 'kg/h');
   const heatToWaterKW = heatToWater(sheet, grossKgPerH, feedKgPerH, at.value);
-  const netKgPerH = sheet.total('Net export', grossKgPerH - feedTankSteamKgPerH, 'kg/h');
   return ok({ grossKgPerH, feedKgPerH, feedTankSteamKgPerH, netKgPerH, heatToWaterKW, working: sheet.finish() });
 }

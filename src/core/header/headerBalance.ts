@@ -1,6 +1,5 @@
 /** Mass and heat into and out of every header at a moment: what the feeds bring is what is drawn, lost and put aside. */
 import type { Header, PlantModel } from '../plant/plant';
-import type { SteamState } from '../steam/steamState';
 import { placedAccumulators } from './accumulator';
 import { flashCredits } from './condensate';
 import { headerSteam } from './headerSteam';
@@ -29,27 +28,27 @@ export interface HeaderBalance {
 }
 
 /**
- * The balance of every header at a minute. `boilerSteam` is what the boilers send into a header that they feed. In mass
- * each header closes by itself; in heat, with what its mains lose. Headers whose steam cannot be worked out are left out.
+ * The balance of every header at a minute. `boilerH` is the enthalpy of what boilers send into a header that they feed
+ * [kJ/kg]. In mass each header closes by itself; in heat, with what its mains lose. Headers whose steam cannot be worked out are left out.
  */
 export function headerBalances(
   plant: PlantModel,
   flows: ReadonlyMap<string, HeaderFlows>,
   minute: number,
-  boilerSteam: (headerId: string) => SteamState | null,
+  boilerH: (headerId: string) => number | null,
 ): HeaderBalance[] {
   const at = (values: Float64Array | null | undefined) => values?.[minute] ?? 0;
   const credits = flashCredits(plant);
   return plant.headers.flatMap((header) => {
     const own = headerSteam(header, plant.ambientBarA);
-    const feed = feedSteam(plant, header, boilerSteam);
-    if (!own.ok || !feed) return [];
+    const feedH = feedEnthalpy(plant, header, boilerH);
+    if (!own.ok || feedH === null) return [];
     const lower = plant.headers.filter(({ feed: f }) => f.kind === 'letdown' && f.fromHeaderId === header.id);
     const straight = (of: (flows: HeaderFlows) => Float64Array | null | undefined) =>
       at(read(flows, header, of)) - lower.reduce((sum, below) => sum + at(read(flows, below, of)), 0);
     const fedFrom = header.feed.kind === 'letdown' ? header.feed.fromHeaderId : null;
     const into = [
-      stream('feed', fedFrom, at(read(flows, header, (f) => f.loadKgPerH)), feed.h),
+      stream('feed', fedFrom, at(read(flows, header, (f) => f.loadKgPerH)), feedH),
       stream(
         'flash',
         header.flash?.fromHeaderId ?? null,
@@ -98,12 +97,12 @@ function read(
   return (its && of(its)) ?? null;
 }
 
-function feedSteam(plant: PlantModel, header: Header, boilerSteam: (headerId: string) => SteamState | null) {
+function feedEnthalpy(plant: PlantModel, header: Header, boilerH: (headerId: string) => number | null) {
   const { feed } = header;
-  if (feed.kind === 'boilers') return boilerSteam(header.id);
+  if (feed.kind === 'boilers') return boilerH(header.id);
   const above = plant.headers.find(({ id }) => id === feed.fromHeaderId);
   const steam = above && headerSteam(above, plant.ambientBarA);
-  return steam?.ok ? steam.value : null;
+  return steam?.ok ? steam.value.h : null;
 }
 
 /** What the accumulators that feed a header give up, several by what they hold. [kJ/kg] */

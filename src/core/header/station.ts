@@ -61,7 +61,9 @@ export function headerStateFrom(feed: SteamState, pressureBarG: number, ambient:
 export function stateWords(steam: SteamState, ambient: BarAbsolute): string {
   const pressure = `${shortNumber(toGauge(steam.pressure, ambient))} bar g`;
   if (steam.kind === 'superheated') return `${pressure}, ${steam.superheatK.toFixed(1)} K above saturation`;
-  return steam.dryness === 1 ? `${pressure}, dry saturated` : `${pressure}, dryness ${steam.dryness.toFixed(4)}`;
+  return steam.dryness === 1
+    ? `${pressure}, dry saturated`
+    : `${pressure}, dryness ${Number(steam.dryness.toFixed(4))}`;
 }
 
 /**
@@ -203,7 +205,7 @@ type Figures = Omit<Station, 'says' | 'working'>;
 
 function sentences({ upstreamName, upstream, headerName, stated, ambient }: StationInput, station: Figures): string[] {
   const { afterValve, lostKJPerKg, upstreamNeeded } = station;
-  const arrives = `By the valve alone ${upstreamName} (${stateWords(upstream, ambient)}) arrives with ${stateWords(afterValve, ambient)}.`;
+  const arrives = `By the valve alone, steam of ${upstreamName} (${stateWords(upstream, ambient)}) arrives with ${stateWords(afterValve, ambient)}.`;
   if (Math.abs(lostKJPerKg) <= STATED_AS_IT_ARRIVES_KJ_PER_KG) return [arrives, `${headerName} is stated so.`];
   const stands = `${headerName} is stated with ${stateWords(stated, ambient)}: ${lostKJPerKg.toFixed(1)} kJ/kg less.`;
   return [
@@ -223,7 +225,7 @@ function mainsSentence({ kgPerH, lostKW, condensedFraction, condensedKgPerH }: F
 
 function carrySentence(upstreamName: string, needed: SteamState, waterKgPerH: number): string {
   if (needed.kind === 'superheated')
-    return `Or ${upstreamName} sends it out with ${needed.superheatK.toFixed(1)} K of superheat only.`;
+    return `Or it leaves ${upstreamName} with ${needed.superheatK.toFixed(1)} K of superheat only.`;
   const water = `water carried over, ${waterKgPerH.toFixed(0)} kg/h`;
-  return `Or ${upstreamName} sends it out with dryness ${needed.dryness.toFixed(4)}: ${water}.`;
+  return `Or it leaves ${upstreamName} with dryness ${needed.dryness.toFixed(4)}: ${water}.`;
 }
