@@ -17,7 +17,7 @@ const seen = z.string().min(1).max(80);
 /** What is typed from experience: every minute from so early to so late equally likely. */
 export const experienceSchema = z.object({ earlyMin: minutes('early'), lateMin: minutes('late') });
 
-/** PUT /api/units/:unit/spread */
+/** POST /api/units/:unit/spread */
 export const spreadRequestSchema = z.discriminatedUnion('kind', [
   experienceSchema.extend({ kind: z.literal('experience'), seen }),
   /** The recorded starts as the server counts them. */

@@ -3,7 +3,7 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { SpreadListDto, SpreadStaleResponse, UnitSpreadDto } from '@/contracts/spread';
 import { db } from '@/db/client';
 import * as t from '@/db/schema/index';
-import { PUT } from '@/pages/api/units/[unit]/spread';
+import { POST } from '@/pages/api/units/[unit]/spread';
 import { GET } from '@/pages/api/units/spread';
 import { loadWeek } from '@/server/weeks/loadWeek';
 import { instantOf } from '@/server/weeks/weekTime';
@@ -34,7 +34,7 @@ async function unitOf(unitId: string, person: Person = 'uli'): Promise<UnitSprea
   return found;
 }
 const put = (unitId: string, body: unknown, person: Person = 'uli') =>
-  callApi(PUT, { session: sessions[person], method: 'PUT', params: { unit: unitId }, body });
+  callApi(POST, { session: sessions[person], params: { unit: unitId }, body });
 async function set(unitId: string, request: Record<string, unknown>, person: Person = 'uli'): Promise<Response> {
   const { seen } = await unitOf(unitId, person);
   return put(unitId, { ...request, seen }, person);
