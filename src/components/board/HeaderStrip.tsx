@@ -81,7 +81,7 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
             >
               {words.figure}
             </p>
-            <p className="text-2xs leading-4 text-ink-muted">{words.line}</p>
+            <p className="text-2xs leading-4 text-ink-muted md:pr-9">{words.line}</p>
             <Marks {...{ strip, topKgPerH }} />
           </>
         ) : null}

@@ -92,7 +92,7 @@ function Place({ form, timeZone }: { readonly form: Form; readonly timeZone: str
 
 function Judging({ form: { control } }: { readonly form: Form }) {
   return (
-    <fieldset className="border-t border-rule pt-4">
+    <fieldset className="mt-3 border-t border-rule pt-4">
       <legend className="label float-left mb-2 w-full">How a plan is judged</legend>
       <div className="clear-both grid gap-x-5 sm:grid-cols-3">
         <NumberField
@@ -126,7 +126,7 @@ function Judging({ form: { control } }: { readonly form: Form }) {
 
 function Fuel({ form: { control } }: { readonly form: Form }) {
   return (
-    <fieldset className="border-t border-rule pt-4">
+    <fieldset className="mt-3 border-t border-rule pt-4">
       <legend className="label float-left mb-2 w-full">Fuel</legend>
       <div className="clear-both grid gap-x-5 sm:grid-cols-3">
         <TextInput control={control} name="currency" label="Currency" maxLength={3} hint="Three letters." />

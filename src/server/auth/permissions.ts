@@ -66,5 +66,7 @@ export function authorize<P extends Permission>(actor: Actor, permission: P): Re
     return fail(problem('TABLET', 'This is not done at a shared tablet. Sign in with your e-mail address elsewhere.'));
   }
   const names = PERMISSIONS[permission].map((role) => ROLE_NAMES[role]).join(' or ');
-  return fail(problem('ROLE', `Only a ${names} of ${actor.plantName} may do this.`));
+  return fail(
+    problem('ROLE', `Only ${names.startsWith('a') ? 'an' : 'a'} ${names} of ${actor.plantName} may do this.`),
+  );
 }

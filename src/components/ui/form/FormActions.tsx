@@ -20,8 +20,8 @@ export function FormActions(props: Props) {
   const { state, save = 'Save', saved = 'Saved.', onCancel, cancel = 'Leave it', disabled = false, children } = props;
   const units = useUnits();
   return (
-    <div className="mt-2 border-t border-rule pt-4">
-      <div className="mb-3 min-h-6" aria-live="polite">
+    <div className="mt-3 flex flex-wrap items-start justify-end gap-x-4 gap-y-3 border-t border-rule pt-4">
+      <div className="min-h-9 min-w-40 flex-1" aria-live="polite">
         {state.kind === 'saved' ? <Notice look="good">{saved}</Notice> : null}
         {state.kind === 'failed' ? (
           <Notice look="over" live>
@@ -29,7 +29,7 @@ export function FormActions(props: Props) {
           </Notice>
         ) : null}
       </div>
-      <div className="flex flex-wrap items-center justify-end gap-2">
+      <div className="flex flex-wrap justify-end gap-2">
         {children}
         {onCancel ? <Button onClick={onCancel}>{cancel}</Button> : null}
         <Button type="submit" look="main" busy={state.kind === 'saving'} disabled={disabled}>
