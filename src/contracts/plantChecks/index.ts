@@ -1,3 +1,5 @@
+export { ambientOf, inUse, steamOfHeader } from './context';
+export { exportOf } from './boiler';
 import { z } from 'zod';
 import { THING_SCHEMAS, type ThingKind, type ThingValues } from '../plantLibrary';
 import { accumulatorFaults } from './accumulator';
