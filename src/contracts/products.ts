@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { DutyModel } from '../core/duty/model';
 import type { SpecificHeatBasis } from '../core/duty/specificHeat';
 import type { LimitUse, Mode, Stage } from '../core/plant/activity';
 import type { CleaningRule, UnitKind } from '../core/plant/plant';
@@ -203,7 +204,13 @@ export interface RouteChoicesDto {
     readonly lineName: string;
     readonly headerId: string | null;
   }[];
-  readonly duties: readonly { readonly id: string; readonly name: string; readonly title: string }[];
+  readonly duties: readonly {
+    readonly id: string;
+    readonly name: string;
+    readonly title: string;
+    /** null: what is stored no longer fits its model. */
+    readonly duty: DutyModel | null;
+  }[];
   readonly limits: readonly { readonly id: string; readonly name: string; readonly unit: string }[];
   readonly headers: readonly DutyHeaderDto[];
   readonly altitudeM: number;

@@ -23,7 +23,7 @@ export function ListField({ control, model, field, list }: Props) {
       <legend className="label px-1">{list.name}</legend>
       <ol>
         {rows.fields.map((row, index) => (
-          <li key={row.id} className="grid grid-cols-[1fr_1fr_auto] items-start gap-x-3">
+          <li key={row.id} className="grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] items-start gap-x-3">
             {columns.map(([column, range]) => (
               <NumberField
                 key={column}

@@ -22,7 +22,10 @@ export function TypedFields({ control }: { readonly control: Control<DutyFormVal
       <legend className="mb-3 text-md font-semibold">Phases, in order</legend>
       <ol>
         {rows.fields.map((row, index) => (
-          <li key={row.id} className="grid grid-cols-2 items-start gap-x-3 sm:grid-cols-[1.2fr_1fr_1fr_auto]">
+          <li
+            key={row.id}
+            className="grid grid-cols-2 items-start gap-x-3 sm:grid-cols-[minmax(0,1.2fr)_repeat(2,minmax(0,1fr))_auto]"
+          >
             <SelectInput control={control} name={`${NAME}.${index}.kind` as never} label="Phase" options={KINDS} />
             <NumberField
               {...{ control, name: `${NAME}.${index}.minutes` as never, label: 'Length', unit: minutes.unit }}

@@ -1,4 +1,5 @@
 import type { CleaningRuleDto, ProductDto, ProductsDto, RouteStageDto } from '@/contracts/products';
+import { parseDuty } from '@/contracts/dutyInputs';
 import { DUTY_CATALOGUE, type WorkedModel } from '@/core/duty/catalogue';
 import { steamOfPhases } from '@/core/duty/duty';
 import type { DutyModel } from '@/core/duty/model';
@@ -45,7 +46,10 @@ async function choicesOf(tx: Db, plantId: string, altitudeM: number): Promise<Pr
   return {
     altitudeM,
     units: units.map(({ unit: { id, name, kind, headerId }, lineName }) => ({ id, name, kind, lineName, headerId })),
-    duties: duties.map(({ id, name, model }) => ({ id, name, title: titleOf(model) })),
+    duties: duties.map(({ id, name, model, inputs }) => {
+      const parsed = parseDuty(model, inputs);
+      return { id, name, title: titleOf(model), duty: parsed.ok ? parsed.value : null };
+    }),
     limits: await repo.limitRows(tx, plantId),
     headers: headers.map(({ id, name, pressureBarG, dryness, superheatK }) => {
       return { id, name, pressureBarG, dryness, superheatK };
