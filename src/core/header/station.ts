@@ -145,7 +145,11 @@ function writeValve(sheet: WorkingSheet, { upstream, stated }: StationInput, aft
 }
 
 function writeLoss(sheet: WorkingSheet, { stated, kgPerH }: StationInput, after: SteamState) {
-  sheet.section('Either the mains lose the difference');
+  sheet.section(
+    arrivesAsStated(after.h - stated.h)
+      ? 'What is left is rounding of what is entered'
+      : 'Either the mains lose the difference',
+  );
   const lostKJPerKg = sheet.step({
     symbol: 'Δh',
     name: 'Heat lost between valve and users',
@@ -178,8 +182,12 @@ function writeLoss(sheet: WorkingSheet, { stated, kgPerH }: StationInput, after:
 
 const drynessOf = (steam: SteamState): number => (steam.kind === 'wet' ? steam.dryness : 1);
 
-function writeCarryOver(sheet: WorkingSheet, { stated, kgPerH }: StationInput, needed: SteamState): number {
+const arrivesAsStated = (differenceKJPerKg: number): boolean =>
+  Math.abs(differenceKJPerKg) <= STATED_AS_IT_ARRIVES_KJ_PER_KG;
+
+function writeCarryOver(sheet: WorkingSheet, { upstream, stated, kgPerH }: StationInput, needed: SteamState): number {
   if (needed.kind === 'superheated') return 0;
+  if (arrivesAsStated(upstream.h - stated.h)) return (1 - needed.dryness) * kgPerH;
   sheet.section('Or water comes over the valve already');
   const dryness = sheet.step({
     symbol: 'x_1',
@@ -206,7 +214,7 @@ type Figures = Omit<Station, 'says' | 'working'>;
 function sentences({ upstreamName, upstream, headerName, stated, ambient }: StationInput, station: Figures): string[] {
   const { afterValve, lostKJPerKg, upstreamNeeded } = station;
   const arrives = `By the valve alone, steam of ${upstreamName} (${stateWords(upstream, ambient)}) arrives with ${stateWords(afterValve, ambient)}.`;
-  if (Math.abs(lostKJPerKg) <= STATED_AS_IT_ARRIVES_KJ_PER_KG) return [arrives, `${headerName} is stated so.`];
+  if (arrivesAsStated(lostKJPerKg)) return [arrives, `${headerName} is stated so.`];
   const stands = `${headerName} is stated with ${stateWords(stated, ambient)}: ${lostKJPerKg.toFixed(1)} kJ/kg less.`;
   return [
     arrives,

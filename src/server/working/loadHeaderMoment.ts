@@ -1,4 +1,5 @@
 import { and, eq, isNull } from 'drizzle-orm';
+import { zonedText } from '@/calendar/dates';
 import { headerBalances, type HeaderBalance } from '@/core/header/headerBalance';
 import { boilerOutlet } from '@/core/header/headerSteam';
 import type { HeaderJudgement } from '@/core/header/judgement';
@@ -34,6 +35,8 @@ export interface SpanText {
 /** A header's flows at one minute of a week. */
 export interface HeaderMoment {
   readonly weekStart: string;
+  /** "30 November" */
+  readonly weekText: string;
   readonly minute: number;
   /** "Tue 06:40" */
   readonly clock: string;
@@ -73,11 +76,13 @@ export async function loadHeaderMoment(
   const minute = asked ?? judged.peak.minute;
   const balance = await balanceAt(week, evaluation, headerId, minute);
   if (!balance) return ok(null);
-  const clock = weekClock(found.value.time);
+  const { time } = found.value;
+  const clock = weekClock(time);
   const runs = runsAt(week, evaluation, headerId, minute);
   const users = balance.out.find(({ kind }) => kind === 'users')?.kgPerH ?? 0;
   return ok({
-    weekStart: found.value.time.weekStart,
+    weekStart: time.weekStart,
+    weekText: zonedText(time.firstInstant, time.timeZone, 'd MMMM'),
     minute,
     clock: clock(minute),
     isPeak: minute === judged.peak.minute,
