@@ -10,6 +10,12 @@ const UNITS = ['r1', 'r2', 'r3', 'k1', 'k2', 'low1'];
 export const SHORT_WEEK_MIN = 1440;
 
 const smallPlant: PlantModel = plant({
+  rules: {
+    snapMinutes: 5,
+    reserveFraction: 0,
+    sagToleranceBar: 0.5,
+    practice: { greatestRunningMin: 90, greatestStandingDirtyMin: 300, allergenReleaseMin: 200 },
+  },
   units: [
     ...['r1', 'r2', 'r3'].map((id) => unit(id, { kind: 'retort', ventGroupId: 'group' })),
     ...['k1', 'k2'].map((id) => unit(id, { kind: 'kettle', lineId: 'line2' })),
@@ -17,7 +23,7 @@ const smallPlant: PlantModel = plant({
   ],
   lines: [1, 2].map((n) => ({ id: `line${n}`, name: `Line ${n}` })),
   headers: [header('main'), header('low', { feed: { kind: 'letdown', fromHeaderId: 'main', greatestKgPerH: 400 } })],
-  ventGroups: [ventGroup('group', { marginMinutes: 1, steamOnsAtOnce: 1, steamOnMinutes: 2 })],
+  ventGroups: [ventGroup('group', { marginMinutes: 1, steamOnsAtOnce: 1, steamOnMinutes: 2, leastHeaderBarG: 6.5 })],
   sharedLimits: [{ id: 'crates', name: 'Crates', unit: 'crates', capacity: [{ from: 0, value: 4 }] }],
   cleaning: [['A', 'B', 15] as const, ['B', 'A', 30] as const].map(([fromFamilyId, toFamilyId, minutes]) => ({
     unitKind: 'kettle',
@@ -41,7 +47,7 @@ export const dutyPhases: fc.Arbitrary<DutyPhase[]> = fc.array(
 
 /** Idling and warming up between runs, and a machine still warm after a short gap; often neither. */
 const beforeRun: fc.Arbitrary<Pick<Mode, 'between' | 'warm'>> = fc
-  .tuple(fc.boolean(), fc.boolean(), rate, fc.integer({ min: 1, max: 30 }), fc.integer({ min: 0, max: 200 }))
+  .tuple(fc.boolean(), fc.boolean(), rate, fc.integer({ min: 1, max: 30 }), fc.integer({ min: 0, max: 600 }))
   .map(([idles, cools, kgPerH, minutes, idleUpToMin]) => ({
     ...(idles
       ? {
@@ -56,7 +62,7 @@ const beforeRun: fc.Arbitrary<Pick<Mode, 'between' | 'warm'>> = fc
       ? {
           warm: [
             { gapUpToMin: 20, phases: [phase(0, 3, kgPerH / 4, 'vent'), phase(3, 2, kgPerH / 5)] },
-            { gapUpToMin: 90, phases: [phase(1, 4, kgPerH / 3, 'vent')] },
+            { gapUpToMin: 240, phases: [phase(1, 4, kgPerH / 3, 'vent')] },
           ],
         }
       : {}),

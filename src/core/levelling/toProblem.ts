@@ -1,4 +1,4 @@
-import { drawnMode, type Activity, type Link, type LinkEnd, type Mode } from '../plant/activity';
+import { drawnMode, isNeverMoved, type Activity, type Link, type LinkEnd, type Mode } from '../plant/activity';
 import type { PlantModel, Unit } from '../plant/plant';
 import type { Week } from '../schedule/week';
 import { mergeIntervals } from '../time/interval';
@@ -47,7 +47,10 @@ function toUnits(week: Week): ProblemUnit[] {
   }));
 }
 
-/** Cleaning draws on the header of its unit: a rule is stated once for the units of its kind on each header. */
+/**
+ * Cleaning draws on the header of its unit: a rule is stated once for the units of its kind on each header. The release
+ * after an allergen clean is time that the unit is not free.
+ */
 function toCleaning(plant: PlantModel): ProblemCleaning[] {
   const stated = plant.cleaning.flatMap((rule) => {
     const units = [...plant.units].filter((u) => u.kind === rule.unitKind).sort(byId);
@@ -55,7 +58,7 @@ function toCleaning(plant: PlantModel): ProblemCleaning[] {
       unitIds: units.filter((u) => u.headerId === headerId).map((u) => u.id),
       fromFamilyId: rule.fromFamilyId,
       toFamilyId: rule.toFamilyId,
-      minutes: rule.minutes,
+      minutes: rule.minutes + (rule.kind === 'allergen' ? (plant.rules.practice?.allergenReleaseMin ?? 0) : 0),
       uses: [...steamUses(rule.phases, steamResources(plant, headerId)), ...limitUses(rule.uses)],
     }));
   });
@@ -89,8 +92,7 @@ function toActivity(a: Activity, week: Week, options: FullOptions, linkIds: Read
 function isMovable(a: Activity, options: FullOptions, horizonMin: number): boolean {
   const start = a.placement?.start ?? -1;
   const minutes = drawnMode(a)?.minutes ?? 0;
-  if (a.fixing !== 'free' || a.modes.some((mode) => mode.neverMoved) || start < 0 || start + minutes > horizonMin)
-    return false;
+  if (a.fixing !== 'free' || isNeverMoved(a) || start < 0 || start + minutes > horizonMin) return false;
   return options.span === null || (start >= options.span.from && start < options.span.to);
 }
 

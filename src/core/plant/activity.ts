@@ -136,3 +136,8 @@ export function placedMode(activity: Activity): Mode | undefined {
 export function drawnMode(activity: Activity): Mode | undefined {
   return placedMode(activity) ?? activity.modes[0];
 }
+
+/** True where levelling and slipping leave the activity where the planner has put it. */
+export function isNeverMoved(activity: Activity): boolean {
+  return drawnMode(activity)?.neverMoved === true;
+}

@@ -8,6 +8,8 @@ export interface Saying {
   mass(kg: number): string;
   /** How far a pressure falls [bar]: one digit after the point. */
   pressureFall(bar: number): string;
+  /** A gauge pressure [bar g]: one digit after the point. */
+  pressure(barG: number): string;
 }
 
 const RATE_STEPS: Readonly<Record<UnitSystem, number>> = { si: 10, usCustomary: 25 };
@@ -26,6 +28,8 @@ export function sayingIn(system: UnitSystem): Saying {
       const whole = Math.max(1, Math.round(toDisplay('mass', kg, system)));
       return `${spaced(whole)} ${displaySymbol('mass', system)}`;
     },
+    pressure: (barG) =>
+      `${toDisplay('gaugePressure', barG, system).toFixed(1)} ${displaySymbol('gaugePressure', system)}`,
     pressureFall: (bar) =>
       `${toDisplay('pressureDifference', bar, system).toFixed(1)} ${displaySymbol('pressureDifference', system)}`,
   };

@@ -32,8 +32,12 @@ export interface ProcessBreach extends SpanBreach {
     | 'initialTemperature'
     | 'waitTooLong'
     | 'unreleasedData'
-    | 'allergenCleaning';
-  /** Vents or steam ons counted, minutes waited, minutes of cleaning there is; null where it is not a number. */
+    | 'allergenCleaning'
+    | 'allergenRelease'
+    | 'runningTooLong'
+    | 'standingDirty'
+    | 'ventPressure';
+  /** Vents or steam ons counted, minutes waited, run or of cleaning, header pressure [bar g]; null where there is none. */
   readonly found: number | null;
   readonly limit: number | null;
   readonly ventGroupId: string | null;

@@ -6,11 +6,16 @@ import { processBreaches } from './processBreaches';
 import { sharedBreaches } from './sharedBreaches';
 import { steamBreaches } from './steamBreaches';
 import { timeBreaches } from './timeBreaches';
+import { ventPressureBreaches } from './ventPressure';
 
 /** Every limit that a week passes: process limits first, then steam, shared limits and time, each in order of time. */
 export function weekBreaches(judged: JudgedWeek, headers: readonly HeaderJudgement[]): Breach[] {
   const drawn = { plant: judged.week.plant, activities: judged.drawn };
-  const found: Breach[] = [...steamBreaches(headers, drawn), ...plainBreaches(judged)];
+  const found: Breach[] = [
+    ...steamBreaches(headers, drawn),
+    ...ventPressureBreaches(judged, headers),
+    ...plainBreaches(judged),
+  ];
   return found.sort(inOrder);
 }
 

@@ -24,11 +24,31 @@ export interface Changeover {
  * allergen clean that the next family asks for after any family since the last allergen clean is asked for here, even
  * where others ran between. A stored cleaning between the runs of at least the rule's length stands in for it.
  */
-export function changeovers(
-  week: Week,
-  byUnit: ReadonlyMap<string, readonly Occupation[]> = occupationsByUnit(week.activities, week),
-): Changeover[] {
-  return [...byUnit.keys()].sort().flatMap((unitId) => unitChangeovers(byUnit.get(unitId) ?? [], week));
+export function changeovers(week: Week): readonly Changeover[] {
+  return cleaningsOf(week, occupationsByUnit(week.activities, week)).changeovers;
+}
+
+/** The same with the allergen cleans that there are, for occupations worked out before. */
+export function cleaningsOf(week: Week, byUnit: ReadonlyMap<string, readonly Occupation[]>): Cleanings {
+  const units = [...byUnit.keys()].sort().map((unitId) => unitCleanings(byUnit.get(unitId) ?? [], week));
+  return {
+    changeovers: units.flatMap((unit) => unit.changeovers),
+    allergenCleans: units.flatMap((unit) => unit.allergenCleans),
+  };
+}
+
+/** An allergen clean before a run: one that follows from the sequence, or a stored one that stands in for it. */
+export interface AllergenClean {
+  readonly cleaningId: string;
+  readonly nextId: string;
+  readonly doneAt: number;
+  readonly nextFrom: number;
+}
+
+/** What a week's sequences ask for: see {@link changeovers}; and its allergen cleans, those that are stored included. */
+export interface Cleanings {
+  readonly changeovers: readonly Changeover[];
+  readonly allergenCleans: readonly AllergenClean[];
 }
 
 /** The rule for a change of family on a kind of unit; undefined where nothing has to be done. */
@@ -47,32 +67,52 @@ interface UnitState {
   previous: { readonly run: Activity; readonly taken: Occupation } | null;
   /** Families run since the last allergen clean. */
   families: Set<string>;
-  /** Stored cleanings since the previous run. [min] */
-  longestCleaningMin: number;
+  /** The longest stored cleaning since the previous run. */
+  longest: Occupation | null;
 }
 
-function unitChangeovers(taken: readonly Occupation[], week: Week): Changeover[] {
+const lengthOf = (span: Occupation | null): number => (span ? span.to - span.from : 0);
+
+function unitCleanings(taken: readonly Occupation[], week: Week): Cleanings {
   const index = indexOf(week);
+  const found: { changeovers: Changeover[]; allergenCleans: AllergenClean[] } = { changeovers: [], allergenCleans: [] };
   const kind = index.units.get(taken[0]?.unitId ?? '')?.kind;
-  if (!kind) return [];
-  const state: UnitState = { previous: null, families: new Set(), longestCleaningMin: 0 };
-  const found: Changeover[] = [];
+  if (!kind) return found;
+  const state: UnitState = { previous: null, families: new Set(), longest: null };
   for (const span of taken) {
     const activity = index.activities.get(span.activityId) as Activity;
     if (activity.kind === 'cleaning') {
-      state.longestCleaningMin = Math.max(state.longestCleaningMin, span.to - span.from);
+      if (lengthOf(span) > lengthOf(state.longest)) state.longest = span;
     } else if (activity.kind === 'stage' && activity.familyId !== null) {
       const rule = requiredRule(week.plant.cleaning, kind, state, activity.familyId);
-      if (rule && state.previous && state.longestCleaningMin < rule.minutes) {
-        found.push(changeover(rule, state.previous.run, state.previous.taken, activity, span));
-      }
+      if (rule) addCleaning(found, rule, state, activity, span);
       if (rule?.kind === 'allergen') state.families.clear();
       state.families.add(activity.familyId);
       state.previous = { run: activity, taken: span };
-      state.longestCleaningMin = 0;
+      state.longest = null;
     }
   }
   return found;
+}
+
+/** A cleaning that follows from the sequence, unless a stored one of its length stands in for it. */
+function addCleaning(
+  found: { changeovers: Changeover[]; allergenCleans: AllergenClean[] },
+  rule: CleaningRule,
+  { previous, longest }: UnitState,
+  next: Activity,
+  span: Occupation,
+): void {
+  const allergen = (cleaningId: string, doneAt: number): void => {
+    if (rule.kind !== 'allergen') return;
+    found.allergenCleans.push({ cleaningId, nextId: next.id, doneAt, nextFrom: span.from });
+  };
+  if (longest && lengthOf(longest) >= rule.minutes) allergen(longest.activityId, longest.to);
+  else if (previous) {
+    const follows = changeover(rule, previous.run, previous.taken, next, span);
+    found.changeovers.push(follows);
+    allergen(follows.cleaning.id, follows.from + rule.minutes);
+  }
 }
 
 function requiredRule(

@@ -3,6 +3,7 @@
  * as the first of the week; and a run that takes less because its machine is still warm.
  */
 import { drawnMode, type Activity, type BetweenDraws, type Mode, type Phase } from '../plant/activity';
+import type { CleaningRule } from '../plant/plant';
 import type { Changeover } from './changeovers';
 import { derivedActivity } from './derived';
 import type { Occupation } from './occupation';
@@ -17,7 +18,7 @@ export interface RunGap {
   readonly start: number;
   /** Since the unit was free of the run before; null: the first run of the week. */
   readonly sinceRunMin: number | null;
-  /** Since it was free and clean: the cleaning between the two done, whether it follows or is stored. */
+  /** Since it was free and clean: the cleaning between the two done and released, whether it follows or is stored. */
   readonly sinceReadyMin: number;
 }
 
@@ -33,7 +34,11 @@ export function runGaps(
   occupations: ReadonlyMap<string, readonly Occupation[]>,
   found: readonly Changeover[],
 ): RunGap[] {
-  const cleanAt = new Map(found.map(({ nextId, from, rule }) => [nextId, from + rule.minutes]));
+  const { practice } = week.plant.rules;
+  const released = (kind: CleaningRule['kind']) => (kind === 'allergen' ? (practice?.allergenReleaseMin ?? 0) : 0);
+  const cleanAt = new Map(
+    found.map(({ nextId, from, rule }) => [nextId, from + rule.minutes + released(rule.kind)] as const),
+  );
   return [...occupations.keys()].sort().flatMap((unitId) => unitGaps(week, occupations.get(unitId) ?? [], cleanAt));
 }
 
@@ -47,7 +52,8 @@ function unitGaps(week: Week, taken: readonly Occupation[], cleanAt: ReadonlyMap
     const mode = drawnMode(run);
     if (mode && (mode.between || mode.warm)) {
       const sinceRunMin = freeOfRun === null ? null : from - freeOfRun;
-      gaps.push({ run, unitId, mode, start: from, sinceRunMin, sinceReadyMin: from - (cleanAt.get(run.id) ?? free) });
+      const ready = Math.max(free, cleanAt.get(run.id) ?? free);
+      gaps.push({ run, unitId, mode, start: from, sinceRunMin, sinceReadyMin: from - ready });
     }
     if (run.kind !== 'cleaning') freeOfRun = to;
     free = to;

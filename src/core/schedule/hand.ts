@@ -1,4 +1,4 @@
-import type { Activity, Fixing, Placement } from '../plant/activity';
+import { isNeverMoved, type Activity, type Fixing, type Placement } from '../plant/activity';
 import { fail, ok, problem, type Result } from '../result';
 import type { Edit } from './edit';
 import { changeOf, editOf } from './edits';
@@ -7,13 +7,13 @@ import { indexOf } from './weekIndex';
 
 /**
  * Slips a line: every free activity on its units that starts at or after a time moves by so many minutes. Fixed and
- * running ones stay, and so do linked activities on other lines.
+ * running ones stay, machines that are never moved too, and so do linked activities on other lines.
  */
 export function slipLine(week: Week, lineId: string, fromMinute: number, byMinutes: number): Edit {
   const { units } = indexOf(week);
   const slipped = week.activities.filter((activity) => {
     const { placement, fixing } = activity;
-    if (!placement || fixing !== 'free') return false;
+    if (!placement || fixing !== 'free' || isNeverMoved(activity)) return false;
     return units.get(placement.unitId)?.lineId === lineId && placement.start >= fromMinute;
   });
   return editOf(

@@ -1,13 +1,12 @@
 import type { Activity } from '../plant/activity';
-import { changeovers, type Changeover } from './changeovers';
+import { cleaningsOf, type Cleanings } from './changeovers';
 import { gapDraws, runGaps, warmRuns, type GapDraw } from './gapDraws';
 import { occupationsByUnit, type Occupation } from './occupation';
 import type { Week } from './week';
 
 /** A week with what follows from it, worked out once for all judging. */
-export interface JudgedWeek {
+export interface JudgedWeek extends Cleanings {
   readonly week: Week;
-  readonly changeovers: readonly Changeover[];
   /** Idle spells and warm-ups between the runs. */
   readonly gapDraws: readonly GapDraw[];
   /**
@@ -22,16 +21,16 @@ export interface JudgedWeek {
 /** Works out what follows from a week's sequence on the units. */
 export function prepareWeek(week: Week): JudgedWeek {
   const occupations = occupationsByUnit(week.activities, week);
-  const found = changeovers(week, occupations);
-  const gaps = runGaps(week, occupations, found);
+  const cleanings = cleaningsOf(week, occupations);
+  const gaps = runGaps(week, occupations, cleanings.changeovers);
   const between = gapDraws(gaps);
   const warm = warmRuns(gaps);
   const drawn = [
     ...week.activities.map((activity) => warm.get(activity.id) ?? activity),
-    ...found.map(({ cleaning }) => cleaning),
+    ...cleanings.changeovers.map(({ cleaning }) => cleaning),
     ...between.map(({ activity }) => activity),
   ];
-  return { week, changeovers: found, gapDraws: between, drawn, occupations };
+  return { week, ...cleanings, gapDraws: between, drawn, occupations };
 }
 
 /** A week's activities with what follows from its sequence: what draws steam and uses limits. */

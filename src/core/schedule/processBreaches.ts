@@ -5,12 +5,18 @@ import { mergeIntervals, type Interval } from '../time/interval';
 import type { ProcessBreach } from './breach';
 import type { JudgedWeek } from './judged';
 import { occupation } from './occupation';
+import { practiceBreaches } from './practiceBreaches';
 import { usageOver, type Use } from './usage';
 import { indexOf } from './weekIndex';
 
-/** Vents and steam ons at once, unreleased process data and allergen cleaning; waits are judged with the links. */
+/** Vents and steam ons at once, unreleased process data, cleaning and practice rules; waits are judged with the links. */
 export function processBreaches(judged: JudgedWeek): ProcessBreach[] {
-  return [...groupBreaches(judged), ...unreleasedData(judged), ...allergenCleaning(judged)];
+  return [
+    ...groupBreaches(judged),
+    ...unreleasedData(judged),
+    ...allergenCleaning(judged),
+    ...practiceBreaches(judged),
+  ];
 }
 
 /** When an activity vents, its margin not included; equal to no span where it does not vent or is not placed. */

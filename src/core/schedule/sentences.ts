@@ -148,6 +148,45 @@ function processSentence(breach: ProcessBreach, names: Names, clock: Clock): Bre
         title: `Allergen clean too short before ${first}`,
         detail: `${waited} are left after ${names.activity(breach.activityIds[1] ?? '')}; the clean takes ${allowed}.`,
       };
+    default:
+      return practiceSentence({ ...breach, code: breach.code }, names, clock);
+  }
+}
+
+type PracticeCode = 'allergenRelease' | 'runningTooLong' | 'standingDirty' | 'ventPressure';
+
+function practiceSentence(
+  breach: ProcessBreach & { readonly code: PracticeCode },
+  names: Names,
+  clock: Clock,
+): BreachSentence {
+  const first = names.activity(breach.activityIds[0] ?? '');
+  const unit = names.unitOf(breach.activityIds[0] ?? '');
+  const found = minutesText(breach.found ?? 0);
+  const allowed = minutesText(breach.limit ?? 0);
+  switch (breach.code) {
+    case 'allergenRelease':
+      return {
+        title: `${unit} not yet released after the allergen clean: ${first}`,
+        detail: `${found} after the clean; the release takes ${allowed}, until ${clock(breach.to)}.`,
+      };
+    case 'runningTooLong':
+      return {
+        title: `${unit} runs too long without a full clean`,
+        detail: `${found} between two full cleans; at most ${allowed}, until ${clock(breach.from)}. A rinse is no full clean.`,
+      };
+    case 'standingDirty':
+      return {
+        title: `${unit} stands dirty too long after ${first}`,
+        detail: `${found} until ${clock(breach.to)}; at most ${allowed}, until ${clock(breach.from)}.`,
+      };
+    case 'ventPressure': {
+      const group = names.ventGroup(breach.ventGroupId ?? '');
+      return {
+        title: `Header too low to vent: ${names.say.pressure(breach.found ?? 0)}, ${clock(breach.from)} to ${clock(breach.to)}`,
+        detail: `${unit}: ${group} was validated at ${names.say.pressure(breach.limit ?? 0)} or more.`,
+      };
+    }
   }
 }
 

@@ -97,4 +97,19 @@ describe('toProblem', () => {
       ],
     ]);
   });
+
+  it('keeps a unit from the next run until an allergen clean is released', () => {
+    const rule = { unitKind: 'kettle', fromFamilyId: 'nut', toFamilyId: 'nutFree', phases: [], uses: [] } as const;
+    const cleaning = [
+      { ...rule, minutes: 30, kind: 'allergen' } as const,
+      { ...rule, fromFamilyId: 'soup', minutes: 20, kind: 'wash' } as const,
+    ];
+    const practice = { greatestRunningMin: null, greatestStandingDirtyMin: null, allergenReleaseMin: 45 };
+    const rules = { ...plan.plant.rules, practice };
+    const stated = toProblem({ ...plan, plant: { ...plan.plant, cleaning, rules } }).cleaning;
+    expect(stated.map(({ fromFamilyId, minutes }) => [fromFamilyId, minutes])).toEqual([
+      ['nut', 75],
+      ['soup', 20],
+    ]);
+  });
 });

@@ -78,6 +78,14 @@ describe('a line slipped from a time', () => {
     expect(slipLine(source, 'line1', 0, 0).changes).toEqual([]);
     expect(slipLine(source, 'line1', 100, 15).kind).toBe('slip');
   });
+
+  it('leaves a cooker that takes hours to heat up; the hand may still move it', () => {
+    const mode = { ...flatMode('unit1', 60, 100), neverMoved: true };
+    const cooker = placedAt(activity('cooker', { modes: [mode] }), 300);
+    const both = week({ plant: lines, activities: [placedAt(activity('three'), 200), cooker] });
+    expect(start(slipLine(both, 'line1', 100, 15))).toEqual([['three', 215]]);
+    expect(moveActivity(both, 'cooker', { unitId: 'unit1', start: 400 }).ok).toBe(true);
+  });
 });
 
 describe('moves by hand', () => {
