@@ -34,7 +34,7 @@ function Words({ activity, mode, peak, pxPerMin }: InsideProps & { readonly mode
     const spells = spellsOf(mode.phases, mode.minutes);
     const slot = titleSlot(spells, (peak * (OUTLINE_PX - WORDS_PX)) / OUTLINE_PX, pxPerMin);
     if (!slot) return null;
-    const room = slot.widthPx - 8 - (activity.fixing === 'free' ? 0 : 12);
+    const room = slot.widthPx - 8 - (activity.fixing === 'free' && !mode.neverMoved ? 0 : 12);
     const code = isRun(activity) ? activity.code : activity.title;
     const text = fittingWords(activity.title, code, room);
     return text === '' ? null : { text, left: slot.leftPx + 4, width: room + 2 };
@@ -78,7 +78,7 @@ const Inside = memo(function Inside({ drawn, breaches, events, ...inside }: Omit
       )}
       <EdgeMark breaches={breaches ?? []} />
       {width > NARROW_PX * 1.5 ? <Words {...{ activity, mode, peak, pxPerMin }} /> : null}
-      {width > NARROW_PX ? <FixingMark fixing={activity.fixing} /> : null}
+      {width > NARROW_PX ? <FixingMark fixing={activity.fixing} neverMoved={mode.neverMoved === true} /> : null}
       {(width > NARROW_PX ? (events ?? []) : []).map((event) => (
         <svg
           key={event.id}

@@ -162,7 +162,7 @@ export function BoardRows({ model, actions, ticks, pointed, rowsRef, onKeyDown, 
       <Pointed {...{ pointed, week, evaluation, scale, clock }} spread={model.spread} />
       {carriedId === null ? (
         <HoverCard
-          {...{ hovered, rows, scale, clock, week }}
+          {...{ hovered, rows, scale, clock, week, evaluation }}
           drawn={model.drawn}
           breaches={model.breaches}
           names={model.names}

@@ -9,18 +9,23 @@ const SHAPES: Readonly<Record<Exclude<Fixing, 'free'>, string>> = {
   done: 'M1.2 6.2 2.8 4.6 4.9 6.7 9.4 2.2 11 3.8 4.9 9.9z',
 };
 
-/** Fixed, started and done told apart by shape. */
+/** A steady draw: levelling and slipping leave it where it is. */
+const STEADY = 'M1 2.8h10v2.2H1zM1 7h10v2.2H1z';
+
+/** Fixed, started, done and never moved told apart by shape. */
 export function FixingMark({
   fixing,
+  neverMoved = false,
   className = 'batch-mark',
 }: {
   readonly fixing: Fixing;
+  readonly neverMoved?: boolean;
   readonly className?: string;
 }) {
-  if (fixing === 'free') return null;
+  if (fixing === 'free' && !neverMoved) return null;
   return (
     <svg className={className} viewBox="0 0 12 12" aria-hidden="true" focusable="false">
-      <path d={SHAPES[fixing]} />
+      <path d={fixing === 'free' ? STEADY : SHAPES[fixing]} />
     </svg>
   );
 }

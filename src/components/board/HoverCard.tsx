@@ -3,18 +3,21 @@ import { phasesKg, phasesPeakKgPerH } from '../../core/demand/activityLoad';
 import { drawnMode, type Activity } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
 import { breachSentence, type Names } from '../../core/schedule/sentences';
+import type { WeekEvaluation } from '../../core/pipeline';
 import type { Week } from '../../core/schedule/week';
 import type { Clock } from '../time';
 import { useUnits } from '../ui/units';
+import { gapReason, warmWords } from './gapWords';
 import { ROW_PX, type Rows } from './rows';
 import { useStore, type Store } from './store';
 import { xOf, type TimeScale } from './timeScale';
-import { FIXING_WORDS, placeText } from './words';
+import { FIXING_WORDS, NEVER_MOVED, placeText } from './words';
 
 interface Props {
   readonly hovered: Store<string | null>;
   readonly drawn: readonly Activity[];
   readonly week: Week;
+  readonly evaluation: WeekEvaluation;
   readonly rows: Rows;
   readonly scale: TimeScale;
   readonly clock: Clock;
@@ -23,7 +26,7 @@ interface Props {
 }
 
 /** All about a block that the pointer rests on or the keys have reached, where its own width leaves no room. */
-export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, names }: Props) {
+export function HoverCard({ hovered, drawn, week, evaluation, rows, scale, clock, breaches, names }: Props) {
   const id = useStore(hovered, (h) => h);
   const units = useUnits();
   const card = useRef<HTMLDivElement>(null);
@@ -36,6 +39,7 @@ export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, 
   const above = top > 150;
   const peak = phasesPeakKgPerH(mode.phases);
   const wrong = breaches.get(activity.id) ?? [];
+  const why = gapReason(activity, evaluation.gapDraws, drawn, week.plant) ?? warmWords(activity, week.activities);
   return (
     <div
       ref={card}
@@ -57,6 +61,8 @@ export function HoverCard({ hovered, drawn, week, rows, scale, clock, breaches, 
         {peak > 0 ? `${units.mass(phasesKg(mode.phases))} of steam, peak ${units.rate(peak)}` : 'draws no steam'}
         {activity.fixing === 'free' ? '' : `, ${FIXING_WORDS[activity.fixing]}`}
       </p>
+      {why ? <p className="mt-0.5 leading-4">{why}</p> : null}
+      {mode.neverMoved ? <p className="text-ink-muted">moved {NEVER_MOVED}</p> : null}
       {wrong.slice(0, 2).map((breach) => (
         <p key={breach.id} className="mt-0.5 flex gap-1.5 leading-4 text-over">
           <span className="hatch-over w-1 shrink-0 rounded-sm" />

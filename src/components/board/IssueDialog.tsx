@@ -20,6 +20,7 @@ interface Props {
 
 /** What stands between the plan and the floor, who can do what about it, and putting it there. */
 export function IssueDialog({ model, onClose, onGo }: Props) {
+  const units = useUnits();
   const { dto, evaluator, saves, mayPlan, mayAgree, tell } = model;
   const standing = standingOf(evaluator.evaluation.breaches, dto.week.activities, dto.agreement, dto.planRevision);
   const [comment, setComment] = useState('');
@@ -71,7 +72,7 @@ export function IssueDialog({ model, onClose, onGo }: Props) {
       }
     >
       <div className="flex flex-col gap-4">
-        {issuing.problem ? <Notice look="over" title={issuing.problem} live /> : null}
+        {issuing.problem ? <Notice look="over" title={units.message(issuing.problem)} live /> : null}
         <ProcessPart standing={standing} model={model} onGo={go} />
         <SteamPart standing={standing} model={model} onGo={go} />
         {standing.mayGo && standing.steam.length === 0 ? (

@@ -17,6 +17,7 @@ interface Props {
 /** Levelling, from the question to the answer. */
 export function LevelPanel({ model, actions }: Props) {
   const { levelling, me } = model;
+  const units = useUnits();
   const { run } = levelling;
   return (
     <section aria-labelledby="levelling" className="flex min-h-0 flex-1 flex-col overflow-y-auto">
@@ -30,7 +31,7 @@ export function LevelPanel({ model, actions }: Props) {
       </header>
       <div className="flex flex-1 flex-col gap-4 px-5 py-3">
         {levelling.problem ? (
-          <Notice look="over" title={levelling.problem} live />
+          <Notice look="over" title={units.message(levelling.problem)} live />
         ) : run?.state === 'failed' ? (
           <Notice look="over" title="Levelling stopped." live>
             {run.failure ?? 'The worker gave no reason. Start it again.'}

@@ -35,10 +35,10 @@ export function LimitTable({ week, evaluation, clock, pointed, onGo }: Props) {
         <thead>
           <tr className="label text-left [&>th]:py-1 [&>th]:font-medium">
             <th scope="col">Limit</th>
-            <th scope="col" className="text-right">
+            <th scope="col" className="pl-3 text-right">
               there is
             </th>
-            <th scope="col" className="text-right">
+            <th scope="col" className="pl-3 text-right whitespace-nowrap">
               most used
             </th>
             <th scope="col" className="pl-3">

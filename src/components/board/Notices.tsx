@@ -1,4 +1,5 @@
 import { Notice } from '../ui/Notice';
+import { useUnits } from '../ui/units';
 import type { BoardNotice } from './notices';
 
 interface Props {
@@ -8,6 +9,7 @@ interface Props {
 
 /** What a person has to know stays until it is put away. */
 export function Notices({ notices, onDismiss }: Props) {
+  const units = useUnits();
   return (
     <div
       className="pointer-events-none fixed bottom-4 left-4 z-50 flex w-96 max-w-[calc(100vw-2rem)] flex-col gap-2"
@@ -15,9 +17,9 @@ export function Notices({ notices, onDismiss }: Props) {
     >
       {notices.map((notice) => (
         <div key={notice.id} className="float pointer-events-auto flex items-start gap-2 p-3">
-          <Notice look={notice.look} title={notice.title} live className="flex-1">
+          <Notice look={notice.look} title={units.message(notice.title)} live className="flex-1">
             {notice.lines.map((line) => (
-              <p key={line}>{line}</p>
+              <p key={line}>{units.message(line)}</p>
             ))}
           </Notice>
           <button

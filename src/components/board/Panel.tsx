@@ -1,6 +1,7 @@
 import { BreachList } from './BreachList';
 import { LimitTable } from './LimitTable';
 import type { PointedAt } from './Pointed';
+import { ReworkNotice } from './ReworkNotice';
 import { SelectedDetail } from './SelectedDetail';
 import type { Store } from './store';
 import { Unplaced } from './Unplaced';
@@ -44,6 +45,7 @@ export function Panel({ model, actions, pointed, limitsOpen }: Props) {
             onGo={actions.goTo}
           />
         </div>
+        <ReworkNotice weekStart={model.dto.weekStart} readAt={model.dto.now} mayEdit={model.mayEdit} />
         <div className="px-5 py-4">
           <Unplaced
             groups={model.waiting}
@@ -63,6 +65,7 @@ export function Panel({ model, actions, pointed, limitsOpen }: Props) {
           <SelectedDetail
             activity={selected}
             week={model.week}
+            evaluation={model.evaluation}
             clock={model.clock}
             mayEdit={model.mayEdit}
             moved={model.dto.moved[selected.id]}

@@ -105,7 +105,7 @@ function Unresolved({ proposal, model }: Omit<Props, 'actions'>) {
                 <span className="block font-medium">
                   {clock.dayTime(rest.from)} to {endText(clock, rest.from, rest.to)}, {units.mass(rest.kg)}
                 </span>
-                <span className="text-ink-muted">{units.sentence(rest.why)}</span>
+                <span className="text-ink-muted">{units.message(rest.why)}</span>
               </span>
             </button>
           </li>

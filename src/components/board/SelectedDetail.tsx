@@ -1,19 +1,22 @@
 import type { ReactNode } from 'react';
 import { phasesKg, phasesPeakKgPerH } from '../../core/demand/activityLoad';
 import { drawnMode, type Activity } from '../../core/plant/activity';
+import type { WeekEvaluation } from '../../core/pipeline';
 import type { Week } from '../../core/schedule/week';
 import { Button } from '../ui/Button';
 import { spanText, type Clock } from '../time';
 import { useUnits } from '../ui/units';
 import { canCarry, isRun } from './carry';
 import { FixingMark } from './FixingMark';
+import { gapReason, warmWords } from './gapWords';
 import { usesOf } from './limits';
 import { waitSinceClosing } from './threads';
-import { FIXING_WORDS, FOLLOWING_WORDS, STAGE_WORDS, unitName } from './words';
+import { FIXING_WORDS, FOLLOWING_WORDS, NEVER_MOVED, STAGE_WORDS, unitName } from './words';
 
 interface Props {
   readonly activity: Activity;
   readonly week: Week;
+  readonly evaluation: WeekEvaluation;
   readonly clock: Clock;
   readonly mayEdit: boolean;
   readonly moved: { readonly by: string; readonly at: string } | undefined;
@@ -23,10 +26,12 @@ interface Props {
 
 /** The selected activity: where and when, its steam, its due time, its wait. */
 export function SelectedDetail(props: Props) {
-  const { activity, week, clock, mayEdit, moved, onFix, onTakeOff } = props;
+  const { activity, week, evaluation, clock, mayEdit, moved, onFix, onTakeOff } = props;
   const units = useUnits();
   const mode = drawnMode(activity);
   const run = isRun(activity);
+  const why = gapReason(activity, evaluation.gapDraws, evaluation.drawn, week.plant);
+  const warm = warmWords(activity, week.activities);
   return (
     <section aria-label="Selected">
       <h2 className="text-base leading-5 font-semibold" data-testid="selected">
@@ -46,8 +51,11 @@ export function SelectedDetail(props: Props) {
             {phasesPeakKgPerH(mode.phases) > 0
               ? `${units.mass(phasesKg(mode.phases))}, peak ${units.rate(phasesPeakKgPerH(mode.phases))}`
               : 'none'}
+            {warm ? <span className="block text-xs text-ink-muted">{warm}</span> : null}
           </Fact>
         ) : null}
+        {why ? <Fact name="Why">{why}</Fact> : null}
+        {mode?.neverMoved ? <Fact name="Moving">{NEVER_MOVED}</Fact> : null}
         {usesOf(activity, week.plant.sharedLimits, clock).map((use, i) => (
           <Fact key={use} name={i === 0 ? 'Uses' : ''}>
             {use}

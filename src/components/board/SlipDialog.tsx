@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { isNeverMoved, type Activity } from '../../core/plant/activity';
 import type { Line } from '../../core/plant/plant';
 import { slipLine } from '../../core/schedule/hand';
 import type { Week } from '../../core/schedule/week';
@@ -6,6 +7,7 @@ import { Button } from '../ui/Button';
 import { Dialog } from '../ui/Dialog';
 import { Field, SelectField } from '../ui/Field';
 import type { Clock } from '../time';
+import { activityName } from './words';
 
 interface Props {
   readonly lines: readonly Line[];
@@ -36,6 +38,7 @@ export function SlipDialog({ lines, lineId, week, clock, nowMin, onClose, onSlip
   const minutes = Number(by);
   const valid = from !== null && Number.isInteger(minutes) && minutes !== 0 && Math.abs(minutes) <= 2880;
   const count = valid ? slipLine(week, line, from, minutes).changes.length : 0;
+  const steady = from === null ? [] : neverMovedOn(week, line, from);
   const submit = (): void => {
     if (!valid || count === 0) return;
     onSlip(line, from, minutes);
@@ -91,9 +94,23 @@ export function SlipDialog({ lines, lineId, week, clock, nowMin, onClose, onSlip
           }
           error={valid ? undefined : 'Whole minutes, less than 0 for earlier.'}
         />
+        {steady.length > 0 ? (
+          <p className="col-span-2 text-sm" data-testid="never-moved">
+            {steady.map((one) => activityName(one)).join(', ')} {steady.length === 1 ? 'stays' : 'stay'} where the
+            planner put {steady.length === 1 ? 'it' : 'them'}: hours of heating up, then a steady draw.
+          </p>
+        ) : null}
         <button type="submit" hidden />
       </form>
     </Dialog>
+  );
+}
+
+/** What a line's slip would take along but for its being never moved. */
+function neverMovedOn(week: Week, lineId: string, fromMinute: number): Activity[] {
+  const units = new Set(week.plant.units.filter((unit) => unit.lineId === lineId).map(({ id }) => id));
+  return week.activities.filter(
+    (one) => isNeverMoved(one) && one.placement && units.has(one.placement.unitId) && one.placement.start >= fromMinute,
   );
 }
 

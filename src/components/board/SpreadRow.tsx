@@ -17,6 +17,8 @@ interface Props {
   readonly control: SpreadControl;
   readonly scale: TimeScale;
   readonly clock: Clock;
+  /** What is past is no chance any more. */
+  readonly nowMin: number;
   readonly pointedMin: number | null;
   readonly onPoint: (headerId: string, minute: number | null) => void;
   readonly onGo: (minute: number) => void;
@@ -24,14 +26,17 @@ interface Props {
 
 /** The chance of going over the limit when starts are early or late, minute by minute, below the header's load. */
 export const SpreadRow = memo(function SpreadRow(props: Props) {
-  const { header, control, scale, clock, onGo } = props;
+  const { header, control, scale, clock, nowMin, onGo } = props;
   const { on, choose } = control;
   const spread = useStore(control.store, (s) => s?.byHeader[header.id]) ?? null;
   return (
     <section className="flex border-b border-rule bg-surface" aria-label={`${header.name}: early and late starts`}>
-      <div className="board-label !bg-surface px-4 py-1.5 max-sm:px-2" style={{ minHeight: on ? FACE_PX + 18 : 30 }}>
+      <div
+        className="board-label !bg-surface py-1.5 pr-2 pl-4 max-sm:px-2"
+        style={{ minHeight: on ? FACE_PX + 18 : 30 }}
+      >
         <Fold name="Early and late starts" open={on} onToggle={() => choose({ on: !on })} />
-        {on && control.known ? <Head {...{ header, control, spread, clock, onGo }} /> : null}
+        {on && control.known ? <Head {...{ header, control, spread, clock, nowMin, onGo }} /> : null}
       </div>
       <div className="board-track" style={{ width: scale.widthPx }}>
         {on && spread?.overChance ? (
@@ -47,7 +52,16 @@ export const SpreadRow = memo(function SpreadRow(props: Props) {
 });
 
 function Words({ control, spread }: { readonly control: SpreadControl; readonly spread: SampledSpread | null }) {
-  if (!control.on) return 'the chance of going over, when starts are not on the minute';
+  if (!control.on) {
+    return (
+      <>
+        the chance of going over when starts are not on the minute;{' '}
+        <a href="/plant/spread" className="link">
+          how early and late they are
+        </a>
+      </>
+    );
+  }
   if (!control.known) {
     return (
       <>
@@ -62,13 +76,14 @@ function Words({ control, spread }: { readonly control: SpreadControl; readonly 
   return spread ? 'not judged: no steam limit is set' : `working out ${SAMPLES} weeks…`;
 }
 
-interface HeadProps extends Pick<Props, 'header' | 'control' | 'clock' | 'onGo'> {
+interface HeadProps extends Pick<Props, 'header' | 'control' | 'clock' | 'nowMin' | 'onGo'> {
   readonly spread: SampledSpread | null;
 }
 
-function Head({ header, control, spread, clock, onGo }: HeadProps) {
+function Head({ header, control, spread, clock, nowMin, onGo }: HeadProps) {
   const { confidence, choose } = control;
-  const greatest = useMemo(() => (spread?.overChance ? greatestChance(spread.overChance) : null), [spread]);
+  const from = nowMin >= 0 && nowMin < (spread?.confidentKgPerH.length ?? 0) ? Math.floor(nowMin) : 0;
+  const greatest = useMemo(() => (spread?.overChance ? greatestChance(spread.overChance, from) : null), [spread, from]);
   const tooMuch = greatest !== null && greatest.chance > 1 - confidence;
   return (
     <div className="mt-0.5 flex flex-wrap items-center justify-between gap-x-1.5 text-2xs leading-4">
@@ -81,7 +96,7 @@ function Head({ header, control, spread, clock, onGo }: HeadProps) {
             <span className="text-ink-muted">{clock.dayTime(greatest.minute)}</span>
           </button>
         ) : spread?.overChance ? (
-          <span className="font-semibold text-room">never over</span>
+          <span className="font-semibold text-room">never over{from > 0 ? ' from now' : ''}</span>
         ) : null}
       </span>
       <select

@@ -58,6 +58,7 @@ export function Strips({ model, pointed, limitsOpen, onLimits }: Props) {
           control={spread}
           scale={view.scale}
           clock={clock}
+          nowMin={model.nowMin}
           onPoint={point.chance}
           pointedMin={minuteAt('chance', header.id)}
           onGo={go}

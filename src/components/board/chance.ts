@@ -5,12 +5,13 @@ export type Confidence = (typeof CONFIDENCES)[number];
 /** Chances closer than this are one: counts of sampled weeks. */
 const SAME = 1e-9;
 
-/** Where a chance is greatest, the first such minute; null where it is 0 all along. */
+/** Where a chance is greatest from a minute on, the first such minute; null where it is 0 all along. */
 export function greatestChance(
   chances: ArrayLike<number>,
+  fromMin = 0,
 ): { readonly chance: number; readonly minute: number } | null {
-  let at = 0;
-  for (let t = 1; t < chances.length; t++) if ((chances[t] as number) > (chances[at] as number)) at = t;
+  let at = fromMin;
+  for (let t = fromMin; t < chances.length; t++) if ((chances[t] as number) > (chances[at] as number)) at = t;
   const chance = chances[at] ?? 0;
   return chance > 0 ? { chance, minute: at } : null;
 }

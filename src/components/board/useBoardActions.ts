@@ -91,7 +91,11 @@ export function useBoardActions(model: BoardModel) {
     if (!activity || !model.mayEdit) return;
     const at = Math.max(0, model.nowMin);
     if (!model.carry.lift(activity, 'keys', { atMinute: at })) {
-      setSaid(`${activityName(activity)} has started on the floor and stays where it is.`);
+      setSaid(
+        isRun(activity)
+          ? `${activityName(activity)} has started on the floor and stays where it is.`
+          : `${activityName(activity)} follows from the sequence on its unit and moves with the runs.`,
+      );
       return;
     }
     sayCarry(model.carry.store.get()?.carry ?? null, `Picked up ${activityName(activity)}. `);

@@ -31,6 +31,9 @@ export const FOLLOWING_WORDS: Readonly<Record<ActivityKind, string>> = {
   warmUp: 'warm-up, follows from the gap',
 };
 
+/** Of machines that take hours to heat up and then draw steadily. */
+export const NEVER_MOVED = 'only by hand: levelling and slipping leave it where it is';
+
 export const FIXING_WORDS: Readonly<Record<Fixing, string>> = {
   free: 'free to move',
   fixed: 'fixed',
@@ -70,6 +73,7 @@ export function blockLabel(
     placement && mode ? `to ${clock.time(placement.start + mode.minutes)}` : '',
     peak > 0 ? `steam up to ${units.rate(peak)}` : 'no steam',
     activity.fixing === 'free' ? '' : FIXING_WORDS[activity.fixing],
+    mode?.neverMoved ? 'never moved by levelling or slipping' : '',
     ...breachTitles,
   ];
   return parts.filter((part) => part !== '').join(', ');

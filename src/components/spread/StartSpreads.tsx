@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import type { SpreadListDto, UnitSpreadDto } from '../../contracts/spread';
 import type { UnitSystem } from '../../core/quantity/display';
 import { UnitsProvider } from '../ui/units';
@@ -18,6 +18,12 @@ interface Props {
 export function StartSpreads({ list, mayEdit, whoMay, units: system }: Props) {
   const [units, setUnits] = useState(list.units);
   const [chosenId, setChosenId] = useState(list.units[0]?.unitId ?? null);
+  const formRef = useRef<HTMLDivElement>(null);
+  const choose = (unitId: string): void => {
+    setChosenId(unitId);
+    // Below each other the form is out of sight.
+    if (window.matchMedia('(max-width: 1023px)').matches) formRef.current?.scrollIntoView({ block: 'start' });
+  };
   const chosen = units.find(({ unitId }) => unitId === chosenId);
   const span = spanOf(units.flatMap(({ spread }) => (spread ? [spread.outcomes] : [])));
   const lines = [...new Set(units.map(({ lineName }) => lineName))];
@@ -38,14 +44,14 @@ export function StartSpreads({ list, mayEdit, whoMay, units: system }: Props) {
                       key={unit.unitId}
                       {...{ unit, span }}
                       chosen={unit.unitId === chosenId}
-                      onChoose={() => setChosenId(unit.unitId)}
+                      onChoose={() => choose(unit.unitId)}
                     />
                   ))}
               </ul>
             </section>
           ))}
         </div>
-        <div className="lg:sticky lg:top-20 lg:self-start">
+        <div ref={formRef} className="scroll-mt-20 lg:sticky lg:top-20 lg:self-start">
           {chosen ? (
             <SpreadForm key={chosen.unitId} unit={chosen} onSaved={saved} {...{ list, mayEdit, whoMay }} />
           ) : (

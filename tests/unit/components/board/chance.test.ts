@@ -8,6 +8,12 @@ describe('the greatest chance', () => {
     expect(greatestChance([])).toBeNull();
     expect(greatestChance([1])).toEqual({ chance: 1, minute: 0 });
   });
+
+  it('is looked for from a minute on: what is past is no chance any more', () => {
+    expect(greatestChance([0.9, 0.2, 0.4], 1)).toEqual({ chance: 0.4, minute: 2 });
+    expect(greatestChance([0.9, 0, 0], 1)).toBeNull();
+    expect(greatestChance([0.9], 5)).toBeNull();
+  });
 });
 
 describe('the row of chances', () => {
