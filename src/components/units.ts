@@ -30,6 +30,8 @@ export interface Units {
   readonly inside: (quantity: DisplayQuantity, shown: number) => number;
   /** A sentence with figures in SI units, spoken in the units shown. */
   readonly sentence: (text: string) => string;
+  /** The same for a message that may name products: '2.5 kg' in a name stays. */
+  readonly message: (text: string) => string;
 }
 
 /** How screens round: to so many digits after the point, or to the nearest step. */
@@ -142,6 +144,7 @@ function makeUnits(system: UnitSystem): Units {
     text,
     parse: (quantity, text) => parseTyped(quantity, text, system),
     sentence: (text) => sentenceIn(system, text),
+    message: (text) => sentenceIn(system, text, ['mass']),
   };
 }
 

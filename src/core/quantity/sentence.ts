@@ -1,4 +1,11 @@
-import { DISPLAY_QUANTITIES, displaySymbol, quantityOfUnit, toDisplay, type UnitSystem } from './display';
+import {
+  DISPLAY_QUANTITIES,
+  displaySymbol,
+  quantityOfUnit,
+  toDisplay,
+  type DisplayQuantity,
+  type UnitSystem,
+} from './display';
 import { shortEnd, shortNumber } from './range';
 
 const NUMBER = String.raw`[-\u2212]?\d+(?:[ \u2009\u00a0]\d{3})*(?:\.\d+)?`;
@@ -10,7 +17,7 @@ const UNITS = DISPLAY_QUANTITIES.map((quantity) => displaySymbol(quantity, 'si')
   .join('|');
 /** "5.5 bar g", "at least 60 °C", "0 to 50000 kg/h", "0 or 1 to 480 kW": numbers that share the unit after the last. */
 const FIGURES = new RegExp(
-  String.raw`(?<![\w.])(at least |at most )?(${NUMBER}(?:(?: to | or | and )${NUMBER})*)([ \u00a0])(${UNITS})(?![\p{L}\p{N}²³/])`,
+  String.raw`(?<![\w.])([Aa]t least |[Aa]t most )?(${NUMBER}(?:(?: to | or | and )${NUMBER})*)([ \u00a0])(${UNITS})(?![\p{L}\p{N}²³/])`,
   'gu',
 );
 
@@ -27,20 +34,20 @@ type End = 'least' | 'most' | null;
 
 /** Which end of a range each figure of a list is; null for a figure that is only told. */
 function endsOf(before: string, count: number, isSpan: boolean): End[] {
-  if (before !== '') return Array.from({ length: count }, () => (before === 'at least ' ? 'least' : 'most'));
+  if (before !== '') return Array.from({ length: count }, () => (before.endsWith('least ') ? 'least' : 'most'));
   return Array.from({ length: count }, (_, i) => (!isSpan ? null : i === count - 1 ? 'most' : 'least'));
 }
 
 /**
  * A sentence whose figures are in SI units, with each figure in the units of the system: "Product rate is 60000 kg/h; it
  * must be 0 to 50000 kg/h." becomes "Product rate is 132000 lb/h; it must be 0 to 110231 lb/h." Ends of ranges are
- * rounded into the range.
+ * rounded into the range; quantities in `left` stay as they are.
  */
-export function sentenceIn(system: UnitSystem, sentence: string): string {
+export function sentenceIn(system: UnitSystem, sentence: string, left: readonly DisplayQuantity[] = []): string {
   if (system === 'si') return sentence;
   return sentence.replace(FIGURES, (whole, before: string | undefined, figures: string, gap: string, unit: string) => {
     const quantity = quantityOfUnit(unit);
-    if (!quantity) return whole;
+    if (!quantity || left.includes(quantity)) return whole;
     const numbers = figures.match(new RegExp(NUMBER, 'gu')) ?? [];
     const ends = endsOf(before ?? '', numbers.length, figures.includes(' to '));
     let index = 0;

@@ -56,3 +56,12 @@ describe('what is typed', () => {
     expect(si.parse('steamRate', '1500 kg')).toBeNull();
   });
 });
+
+describe('a message', () => {
+  it('should be told in the units shown, names of products as they are', () => {
+    const text = 'Carrot dice 2.5 kg: over the steam limit by 1 550 kg/h at 7 bar g.';
+    expect(us.message(text)).toBe('Carrot dice 2.5 kg: over the steam limit by 3420 lb/h at 102 psig.');
+    expect(us.sentence('At least 2 kg.')).toBe('At least 4.40925 lb.');
+    expect(si.message(text)).toBe(text);
+  });
+});

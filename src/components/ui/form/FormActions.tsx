@@ -25,7 +25,7 @@ export function FormActions(props: Props) {
         {state.kind === 'saved' ? <Notice look="good">{saved}</Notice> : null}
         {state.kind === 'failed' ? (
           <Notice look="over" live>
-            {units.sentence(state.message)}
+            {units.message(state.message)}
           </Notice>
         ) : null}
       </div>
