@@ -38,9 +38,9 @@ export function withStates(dto: WeekDto, planRevision: number, states: readonly 
   };
 }
 
-/** The request that saves an edit. Levelled plans are saved by accepting them instead. */
+/** The request that saves an edit. Levelled plans are saved by accepting them, reworked ones by the server. */
 export function requestOf(edit: Edit): EditRequest {
-  const kind = edit.kind === 'level' ? 'move' : edit.kind;
+  const kind = edit.kind === 'level' || edit.kind === 'rework' ? 'move' : edit.kind;
   return {
     kind,
     changes: edit.changes.map(({ activityId, revision, before, after }) => ({

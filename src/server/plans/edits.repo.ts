@@ -26,6 +26,16 @@ export async function writeStates(
      where a.id = v.id and a.plan_id = ${plan.id} and a.plant_id = ${plan.plantId}`);
 }
 
+/** Writes the modes of activities that were worked out anew, and each one's next revision. */
+export async function writeModes(tx: Db, plan: PlanRow, changes: readonly Change[]): Promise<void> {
+  const rows = changes.flatMap(({ activityId, modes }) => (modes ? [{ id: activityId, modes: modes.after }] : []));
+  await tx.execute(sql`
+    update activities a
+       set modes = v.modes, revision = a.revision + 1
+      from jsonb_to_recordset(${JSON.stringify(rows)}::jsonb) as v(id text, modes jsonb)
+     where a.id = v.id and a.plan_id = ${plan.id} and a.plant_id = ${plan.plantId}`);
+}
+
 /** Appends an edit to the plan's history under the revision that it makes. */
 export async function insertEdit(tx: Db, plan: PlanRow, edit: Edit, actor: Actor, at: Date, revision: number) {
   await tx.insert(edits).values({
