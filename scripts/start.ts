@@ -1,7 +1,7 @@
 import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { buildInto, startDist } from './support/build';
-import { demoPeople, migrate, seedDemo } from './support/data';
+import { demoPeople, firstRunCode, migrate, seedDemo } from './support/data';
 import { atEnd, runCommand } from './support/finish';
 import { keepAlive } from './support/keepAlive';
 import { ownMail } from './support/localMail';
@@ -15,6 +15,8 @@ import { waitUntilServing } from './support/waitUntilServing';
 
 const DATABASE = 'steadmain';
 const addressFile = statePath('address');
+/** STEADMAIN_DEMO=none starts an installation of one's own. */
+const withDemo = process.env['STEADMAIN_DEMO'] !== 'none';
 
 /** One start a project folder: two would share a build and a database, and stop each other's. */
 async function takeTheOnlyStart(): Promise<void> {
@@ -39,8 +41,10 @@ async function openDatabase(): Promise<string> {
   const url = server.url(DATABASE);
   say('Bringing the tables up to date');
   await migrate(url);
-  say('Making sure the demo plant is there');
-  await seedDemo(url);
+  if (withDemo) {
+    say('Making sure the demo plant is there');
+    await seedDemo(url);
+  }
   return url;
 }
 
@@ -72,6 +76,14 @@ async function serve(databaseUrl: string): Promise<string> {
   return address;
 }
 
+/** The demo people, or the code that makes the first administrator; nothing where there are people of one's own. */
+async function whoMaySignIn(databaseUrl: string, address: string): Promise<string> {
+  if (withDemo) return `\n${(await demoPeople(databaseUrl)).trimEnd()}\n`;
+  const code = await firstRunCode(databaseUrl);
+  if (code === '') return '';
+  return `\n  Nobody has an account yet. Make the first at ${address}/first-run with this code, once:\n\n    ${code}\n`;
+}
+
 await runCommand(async () => {
   if (process.env['DATABASE_URL'])
     say('DATABASE_URL is set, but npm start keeps a database of its own; leaving it alone');
@@ -82,8 +94,8 @@ await runCommand(async () => {
   const databaseUrl = await openDatabase();
   await building;
   const address = await serve(databaseUrl);
-  const people = await demoPeople(databaseUrl);
+  const people = await whoMaySignIn(databaseUrl, address);
   say('Ready');
-  console.log(`\n  Steadmain is at ${address}\n\n${people.trimEnd()}\n\n  Ctrl-C stops it.\n`);
+  console.log(`\n  Steadmain is at ${address}\n${people}\n  Ctrl-C stops it.\n`);
   return new Promise<number>(() => undefined);
 });

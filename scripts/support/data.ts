@@ -3,6 +3,7 @@ import { cleanEnv, runTs } from './run';
 
 const MIGRATE = 'src/db/migrate.ts';
 const SEED = 'scripts/seed.ts';
+const FIRST_RUN = 'scripts/firstRun.ts';
 
 async function onDatabase(file: string, args: string[], env: Record<string, string | undefined>): Promise<string> {
   if (!hasFile(file)) return '';
@@ -21,3 +22,7 @@ export const seedDemo = (databaseUrl: string, now?: string): Promise<string> =>
 /** The demo people and their password, as the seed prints them. */
 export const demoPeople = (databaseUrl: string): Promise<string> =>
   onDatabase(SEED, ['--print-people'], { DATABASE_URL: databaseUrl });
+
+/** The one-time code of the first administrator; empty where somebody has an account. */
+export const firstRunCode = async (databaseUrl: string): Promise<string> =>
+  (await onDatabase(FIRST_RUN, [], { DATABASE_URL: databaseUrl })).trim();

@@ -85,7 +85,7 @@ export const noticesRequestSchema = z.object({ issue: z.boolean() });
 export const resetRequestSchema = z.object({ email: emailSchema });
 
 /** POST /api/reset/use */
-export const useResetRequestSchema = z.object({ token: tokenSchema, password: newPasswordSchema });
+export const setPasswordRequestSchema = z.object({ token: tokenSchema, password: newPasswordSchema });
 
 /** POST /api/people/first-run */
 export const firstRunRequestSchema = z.object({

@@ -2,6 +2,7 @@ import { and, eq, isNull } from 'drizzle-orm';
 import type { Session } from 'lucia';
 import { db } from '@/db/client';
 import { sessions, tablets } from '@/db/schema/index';
+import { now } from '../clock';
 import { hashSessionId } from './hashedSessions';
 import { hashToken } from './token';
 
@@ -20,8 +21,7 @@ export async function tabletByToken(token: string | null) {
 
 /** The id of the tablet that a session by badge holds on; null where it holds no more: elsewhere, untouched, over. */
 export async function tabletHolds(session: Session, token: string | null): Promise<string | null> {
-  // Like every session's expiry these are the machine's own times, never a clock that was set.
-  const at = Date.now();
+  const at = now().getTime();
   if (!session.touchedAt || at - session.touchedAt.getTime() > IDLE_MINUTES * 60_000) return null;
   if (!session.endsAt || at > session.endsAt.getTime()) return null;
   const tablet = await tabletByToken(token);
@@ -30,9 +30,9 @@ export async function tabletHolds(session: Session, token: string | null): Promi
 
 /** Notes that somebody touched the tablet. */
 export async function touchTabletSession(session: Session): Promise<void> {
-  if (Date.now() - (session.touchedAt?.getTime() ?? 0) < NOTED_EVERY_MS) return;
+  if (now().getTime() - (session.touchedAt?.getTime() ?? 0) < NOTED_EVERY_MS) return;
   await db
     .update(sessions)
-    .set({ touchedAt: new Date() })
+    .set({ touchedAt: now() })
     .where(eq(sessions.id, hashSessionId(session.id)));
 }

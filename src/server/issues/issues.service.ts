@@ -8,6 +8,7 @@ import { notify } from '../events/notify';
 import { conflict, type HttpProblem } from '../http/problem';
 import { newId } from '../id';
 import { namesOf } from '../people/people.repo';
+import { tellOfIssue } from '../people/tellOfIssue';
 import { latestIssueRow, type PlanRow } from '../plans/plans.repo';
 import { someOf } from '../plans/words';
 import { record } from '../record/record';
@@ -86,6 +87,7 @@ export async function issuePlan(
     const row = { id: newId(), ...ownerOf(plan), number, week, comment, agreementId, ...author };
     await insertIssue(tx, row);
     await notify(tx, plan.plantId, { kind: 'issue', planId: plan.id, revision: plan.revision });
+    await tellOfIssue(tx, actor, { number, weekStart, comment, week });
     await record(tx, actor, 'plan.issue', row.id, { number, revision: plan.revision, comment, agreementId });
     const names = await namesOf(tx, [actor.personId, ...(agreement ? [agreement.authorId] : [])]);
     return ok(issueDto(row, agreement, names));

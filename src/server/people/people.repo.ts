@@ -13,17 +13,23 @@ export interface PlantOfPerson {
 }
 
 /** What signing in needs of an account; addresses are compared without case. */
-export async function accountByEmail(email: string) {
-  const [person] = await db
-    .select({ id: people.id, name: people.name, passwordHash: people.passwordHash, active: people.active })
+export async function accountByEmail(email: string, tx: Db = db) {
+  const [person] = await tx
+    .select({
+      id: people.id,
+      name: people.name,
+      email: people.email,
+      passwordHash: people.passwordHash,
+      active: people.active,
+    })
     .from(people)
     .where(eq(sql`lower(${people.email})`, email.trim().toLowerCase()));
   return person ?? null;
 }
 
 /** The plants at which a person holds roles and may work, by name. */
-export async function plantsOf(personId: string): Promise<PlantOfPerson[]> {
-  const rows = await db
+export async function plantsOf(personId: string, tx: Db = db): Promise<PlantOfPerson[]> {
+  const rows = await tx
     .select({
       plantId: plants.id,
       plantName: plants.name,
