@@ -34,6 +34,10 @@ export interface BoilerFigures {
   readonly working: Working;
 }
 
+/** How long a boiler fires in each hour where the load is under its least: it goes out and is lit again. [min] */
+export const firingMinPerHour = (loadKgPerH: number, leastKgPerH: number): number =>
+  leastKgPerH > 0 ? 60 * Math.min(1, loadKgPerH / leastKgPerH) : 60;
+
 /** @returns rise, least fire and stored steam of a boiler; DUTY-RANGE naming field, value and range; STEAM-RANGE. */
 export function boilerFigures(
   input: BoilerFiguresInput,
@@ -61,6 +65,15 @@ export function boilerFigures(
     source: 'Turndown as entered for the boiler',
     inputs: { ṁ_n: [input.netKgPerH, 'kg/h'], t: [input.turndown, ''] },
     value: ({ ṁ_n, t }) => ṁ_n / t,
+  });
+  sheet.step({
+    symbol: 't_f',
+    name: 'Fires in each hour at a tenth of its export',
+    formula: '60 · min(1, 0.1 · ṁ_n / ṁ_min)',
+    unit: 'min',
+    source: 'Mass balance over the hour',
+    inputs: { ṁ_n: [input.netKgPerH, 'kg/h'], ṁ_min: [leastKgPerH, 'kg/h'] },
+    value: ({ ṁ_n, ṁ_min }) => firingMinPerHour(ṁ_n / 10, ṁ_min),
   });
   const storedKgPerBar = sheet.step({
     symbol: 'm_bar',

@@ -3,6 +3,7 @@ import { boilerHouseChecks } from './boilerHouse';
 import type { Check } from './check';
 import { dutyChecks } from './duties';
 import { furtherBatchChecks } from './furtherBatches';
+import { networkChecks } from './network';
 import { openingChecks } from './openings';
 import { ratingChecks } from './rating';
 import { releaseChecks } from './release';
@@ -19,6 +20,7 @@ export const ALL_CHECKS: readonly Check[] = [
   ...specificHeatChecks,
   ...ratingChecks,
   ...boilerHouseChecks,
+  ...networkChecks,
   ...dutyChecks,
   ...workedBatchChecks,
   ...furtherBatchChecks,
