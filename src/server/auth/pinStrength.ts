@@ -1,5 +1,5 @@
-const UP = '01234567890';
-const DOWN = '09876543210';
+const UP = '01234567890123456789';
+const DOWN = '98765432109876543210';
 /** Columns, rows, diagonals and the cross of a keypad. */
 const KEYPAD = ['1470', '2580', '3690', '0741', '0852', '0963', '1590', '3570', '7530', '1478', '3698', '2468', '1357'];
 /** Years of birth and of now, as four digits or after a day: 1931 to 2039. */
