@@ -3,6 +3,7 @@ import type { Week } from '../schedule/week';
 import { judge, type Judgement } from './evaluate';
 import { MEETING_EVERY, type Exchange } from './exchange';
 import { figuresOf } from './figures';
+import { keepRules } from './keepRules';
 import type { Key } from './key';
 import { toModel } from './model';
 import { fullOptions, type FullOptions, type LevellingOptions } from './options';
@@ -63,7 +64,10 @@ const DEFAULT_MS = 15_000;
 export function levelWeek(week: Week, options: LevellingOptions, env: LevellingEnv): LevellingResult {
   const problem = toProblem(week, options);
   const solved = solveProblem(problem, fullOptions(options), env);
-  return { ...solved, proposal: toProposal(week, problem, solved.plan, env.solveLp) };
+  const kept = keepRules(week, problem, solved.plan);
+  const worse = isWorse(judge(problem, kept), judge(problem, planOf(problem)));
+  const plan = worse ? planOf(problem) : kept;
+  return { ...solved, plan, proposal: toProposal(week, problem, plan, env.solveLp) };
 }
 
 export interface Solved {
