@@ -69,23 +69,21 @@ export function SelectedDetail(props: Props) {
           </Fact>
         ) : null}
       </dl>
-      {run ? (
-        <div className="mt-2.5 flex flex-wrap items-center gap-x-2 gap-y-2">
-          {mayEdit && canCarry(activity) && activity.placement ? (
-            <>
-              <Button size="small" onClick={onFix}>
-                {activity.fixing === 'fixed' ? 'Free it' : 'Fix it here'}
-              </Button>
-              <Button size="small" look="quiet" onClick={onTakeOff}>
-                Take off
-              </Button>
-            </>
-          ) : null}
-          <a className="link text-sm" href={`/working/${encodeURIComponent(activity.id)}`}>
-            Show the working
-          </a>
-        </div>
-      ) : null}
+      <div className="mt-2.5 flex flex-wrap items-center gap-x-2 gap-y-2">
+        {mayEdit && canCarry(activity) && activity.placement ? (
+          <>
+            <Button size="small" onClick={onFix}>
+              {activity.fixing === 'fixed' ? 'Free it' : 'Fix it here'}
+            </Button>
+            <Button size="small" look="quiet" onClick={onTakeOff}>
+              Take off
+            </Button>
+          </>
+        ) : null}
+        <a className="link text-sm" href={`/working/${encodeURIComponent(activity.id)}`}>
+          Show the working
+        </a>
+      </div>
     </section>
   );
 }
