@@ -1,9 +1,11 @@
-import type { PointerEvent } from 'react';
+import { useId, type PointerEvent } from 'react';
 import type { BoilerDto } from '@/contracts/capacity';
 import { valueAt } from '@/core/time/stepFunction';
+import { Hatch } from '../ui/Hatch';
+import { partsOf, type BoilerPart } from './boilerParts';
 import type { DeskPart } from './deskPart';
 import { Grips } from './Grips';
-import { minuteAtX, segments, xOf } from './scale';
+import { minuteAtX, xOf } from './scale';
 
 /** The scale runs across as that of the strip above; its height is this row's. */
 interface Props extends DeskPart {
@@ -18,10 +20,16 @@ export function shareText(share: number): string {
   return share >= 1 ? 'lit' : `at ${Math.round(share * 100)} %`;
 }
 
-/** A boiler over the week as a bar: full where it is lit, lower where it is derated, a gap where it is shut. */
+const partText = (part: BoilerPart): string => (part.isComingUp ? 'coming up' : shareText(part.value));
+
+/**
+ * A boiler over the week as a bar: full where it is ready, lower where it is derated, hatched while it comes up, a gap
+ * where it is shut.
+ */
 export function BoilerRow(props: Props) {
   const { boiler, scale, days, clock, draft, canSet } = props;
-  const parts = segments(boiler.share, scale.from, scale.to);
+  const hatch = useId();
+  const parts = partsOf(boiler, scale.from, scale.to);
   const inner = scale.height - 2 * PAD;
   const shown = draft?.subject.kind === 'firing' && draft.subject.boilerId === boiler.id ? draft : null;
 
@@ -43,11 +51,14 @@ export function BoilerRow(props: Props) {
       height={scale.height}
       className={`block touch-pan-y select-none ${canSet ? 'cursor-crosshair' : ''}`}
       role="group"
-      aria-label={`${boiler.name}: ${parts.map((p) => `${shareText(p.value)} ${clock.dayTime(p.from)} to ${clock.dayTime(p.to)}`).join(', ')}`}
+      aria-label={`${boiler.name}: ${parts.map((p) => `${partText(p)} ${clock.dayTime(p.from)} to ${clock.dayTime(p.to)}`).join(', ')}`}
       onPointerMove={props.onMove}
       onPointerUp={props.onRelease}
       onPointerCancel={props.onRelease}
     >
+      <defs>
+        <Hatch id={hatch} look="quiet" />
+      </defs>
       {days.map((day) => (
         <line
           key={day.date}
@@ -65,13 +76,16 @@ export function BoilerRow(props: Props) {
           <g key={part.from} aria-hidden="true">
             <rect x={x} y={PAD} width={width} height={inner} className="fill-sunken stroke-rule" />
             <rect x={x} y={PAD + inner - height} width={width} height={height} className="fill-room opacity-75" />
+            {part.isComingUp ? (
+              <rect x={x} y={PAD} width={width} height={inner} fill={`url(#${hatch})`} className="stroke-room" />
+            ) : null}
             {width > 62 ? (
               <text
                 x={x + 8}
                 y={scale.height / 2 + 4}
                 className={`text-2xs font-medium ${part.value > 0.55 ? 'fill-on-room' : 'fill-ink'}`}
               >
-                {shareText(part.value)}
+                {partText(part)}
               </text>
             ) : null}
           </g>

@@ -11,6 +11,7 @@ import { DeskPanel, spanSummary } from './DeskPanel';
 import { Duration } from './Duration';
 import type { Draft } from './draft';
 import { Figures } from './Figures';
+import { HouseSections } from './HouseSections';
 import { Legend } from './Legend';
 import { capacityOf } from './preview';
 import { RecordTable } from './RecordTable';
@@ -37,13 +38,17 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
   const { firstInstant, timeZone } = dto;
   const clock = useMemo(() => makeClock({ firstInstant, timeZone }), [firstInstant, timeZone]);
   const days = useMemo(() => daysOf(clock, dto.horizonMin), [clock, dto.horizonMin]);
-  const judged = useMemo(
-    () => evaluateWeek({ ...week.week, capacities: dto.capacities }).headers,
+  const evaluation = useMemo(
+    () => evaluateWeek({ ...week.week, capacities: dto.capacities }),
     [week.week, dto.capacities],
+  );
+  const largestOut = useMemo(
+    () => evaluateWeek({ ...week.week, capacities: dto.largestOut }).headers,
+    [week.week, dto.largestOut],
   );
   const units = useUnits();
   const capacity = capacityOf(dto, headerId);
-  const header = judged.find((h) => h.headerId === headerId);
+  const header = evaluation.headers.find((h) => h.headerId === headerId);
   const nowMin = clock.minuteOf(dto.now);
 
   const change = (next: Draft | null): void => {
@@ -89,10 +94,13 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
             </div>
           ) : null}
         </div>
-        <Figures {...{ dto, capacity, judged: header, clock, nowMin }} />
+        <Figures
+          {...{ dto, capacity, judged: header, clock, nowMin }}
+          largestOut={largestOut.find((h) => h.headerId === headerId)}
+        />
         <section aria-label="The week">
           <div className="mb-2 flex flex-wrap items-center justify-between gap-2">
-            <Legend />
+            <Legend hasLargestOut={Boolean(capacity?.exportKgPerH)} hasCarried={Boolean(header?.carried)} />
             <div className="-ml-2 flex flex-wrap gap-0.5" role="group" aria-label="What is shown">
               {[{ date: null, text: 'Week' }, ...days.map((d) => ({ date: d.date, text: d.label.slice(0, 3) }))].map(
                 ({ date, text }) => (
@@ -113,12 +121,16 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
           {header ? (
             <DeskChart
               {...{ dto, headerId, capacity, judged: header, days, clock, nowMin, draft, canSet }}
+              largestOut={dto.largestOut.find((one) => one.headerId === headerId)}
               day={days.find((d) => d.date === dayDate) ?? null}
               onDraft={change}
             />
           ) : null}
         </section>
-        <div className="grid gap-8 xl:grid-cols-2">
+        <div className="grid items-start gap-x-8 gap-y-10 xl:grid-cols-2">
+          {header ? (
+            <HouseSections {...{ dto, days, clock }} plant={week.week.plant} drawn={evaluation.drawn} judged={header} />
+          ) : null}
           {header ? <Duration loadKgPerH={header.loadKgPerH} limitKgPerH={header.limitKgPerH} /> : null}
           <section aria-labelledby="record-heading">
             <h2 id="record-heading" className="mb-3 text-md font-semibold">
@@ -132,6 +144,7 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
         <div className="space-y-5 lg:sticky lg:top-[calc(var(--header-height)+1.25rem)]">
           <DeskPanel
             {...{ dto, headerId, capacity, judged: header, days, clock, nowMin, draft, canSet, whoMay, saved }}
+            plant={week.week.plant}
             busy={save.isPending}
             error={save.error}
             onDraft={change}

@@ -7,6 +7,7 @@ import { useWidth } from '../ui/useWidth';
 import { useUnits } from '../ui/units';
 import { Axis } from './Axis';
 import { BoilerRow } from './BoilerRow';
+import { StoreStrip } from './StoreStrip';
 import type { Draft } from './draft';
 import { LoadStrip, RateLabels } from './LoadStrip';
 import { limitSnap, roundTop, type DeskScale } from './scale';
@@ -17,6 +18,8 @@ interface Props {
   readonly dto: CapacityDto;
   readonly headerId: string;
   readonly capacity: HeaderCapacity | undefined;
+  /** The same header with the largest boiler out. */
+  readonly largestOut: HeaderCapacity | undefined;
   readonly judged: HeaderJudgement;
   /** The day shown; null: the week. */
   readonly day: DayOfWeek | null;
@@ -30,6 +33,7 @@ interface Props {
 
 const STRIP_HEIGHT = 300;
 const BOILER_HEIGHT = 52;
+const STORE_HEIGHT = 44;
 
 /** Load, limit and boilers on one time axis. */
 export function DeskChart(props: Props) {
@@ -38,7 +42,8 @@ export function DeskChart(props: Props) {
   const [ref, width] = useWidth<HTMLDivElement>(720);
   const topKgPerH = useMemo(() => {
     const sent = Math.max(0, ...(capacity?.exportKgPerH ?? []).map((step) => step.value));
-    return roundTop(Math.max(sent, judged.peak.kgPerH), units);
+    const drawn = judged.carried ? judged.drawnKgPerH.reduce((most, rate) => Math.max(most, rate), 0) : 0;
+    return roundTop(Math.max(sent, judged.peak.kgPerH, drawn), units);
   }, [capacity, judged, units]);
   const scale = useMemo<DeskScale>(
     () => ({ from: day?.from ?? 0, to: day?.to ?? dto.horizonMin, width, height: STRIP_HEIGHT, topKgPerH }),
@@ -75,12 +80,29 @@ export function DeskChart(props: Props) {
         <RateLabels scale={scale} />
       </div>
       <div className="border-l border-rule">
-        <LoadStrip scale={scale} capacity={capacity} loadKgPerH={judged.loadKgPerH} {...shared} />
+        <LoadStrip
+          {...{ scale, capacity, judged }}
+          largestOutLimit={props.largestOut?.exportKgPerH ? props.largestOut.limitKgPerH : null}
+          {...shared}
+        />
       </div>
+      {judged.carried ? (
+        <>
+          <div className="border-t border-rule py-2 pr-2">
+            <p className="text-sm leading-4 font-semibold">In store</p>
+            <p className="mt-1 text-2xs text-ink-muted max-sm:hidden">up to {units.mass(judged.carried.capacityKg)}</p>
+          </div>
+          <div className="border-t border-l border-rule">
+            <StoreStrip scale={{ ...scale, height: STORE_HEIGHT }} carried={judged.carried} />
+          </div>
+        </>
+      ) : null}
       {boilers.map((boiler) => (
         <div key={boiler.id} className="contents">
           <div className="border-t border-rule py-2 pr-2">
-            <p className="text-sm leading-4 font-semibold">{boiler.name}</p>
+            <a className="text-sm leading-4 font-semibold hover:underline" href={`/working/boiler/${boiler.id}`}>
+              {boiler.name}
+            </a>
             <p className="mt-1 text-2xs text-ink-muted max-sm:hidden">{units.rate(boiler.netKgPerH)} net</p>
           </div>
           <div className="border-t border-l border-rule">

@@ -1,7 +1,9 @@
 import { useMemo } from 'react';
 import type { CapacityDto } from '@/contracts/capacity';
 import type { HeaderJudgement } from '@/core/header/judgement';
-import type { HeaderCapacity } from '@/core/plant/plant';
+import type { HeaderCapacity, PlantModel } from '@/core/plant/plant';
+import { sayingIn } from '@/core/quantity/saying';
+import { limitAboveStudy } from '@/core/schedule/limitAboveStudy';
 import { valueAt } from '@/core/time/stepFunction';
 import { Button } from '../ui/Button';
 import { Notice } from '../ui/Notice';
@@ -17,6 +19,7 @@ import type { DayOfWeek } from './wallTime';
 interface Props {
   readonly dto: CapacityDto;
   readonly headerId: string;
+  readonly plant: PlantModel;
   readonly capacity: HeaderCapacity | undefined;
   readonly judged: HeaderJudgement | undefined;
   readonly days: readonly DayOfWeek[];
@@ -63,6 +66,12 @@ function keptOver(draft: Draft, capacity: HeaderCapacity | undefined, reserveFra
   return Math.min(...parts.map((part) => part.value)) * (1 - reserveFraction);
 }
 
+/** A limit above what the studies of vent groups on the header saw. */
+function cautionOf({ subject, value }: Draft, plant: PlantModel, units: Units): string | null {
+  if (subject.kind !== 'limit' || value === null) return null;
+  return limitAboveStudy(plant, subject.headerId, value, sayingIn(units.system));
+}
+
 /** The side of the desk: what can be set, the span being set, or who may. */
 export function DeskPanel(props: Props) {
   const { dto, headerId, capacity, judged, draft, clock, nowMin } = props;
@@ -84,6 +93,7 @@ export function DeskPanel(props: Props) {
         name={nameOf(draft.subject, dto)}
         keptKgPerH={keptOver(draft, capacity, dto.reserveFraction)}
         outcome={outcomeOf(before, after, units)}
+        caution={cautionOf(draft, props.plant, units)}
         isWorse={(after?.kg ?? 0) > (before?.kg ?? 0) + 0.5}
         onChange={props.onDraft}
         onCancel={() => props.onDraft(null)}

@@ -11,6 +11,8 @@ interface Props {
   readonly dto: CapacityDto;
   readonly capacity: HeaderCapacity | undefined;
   readonly judged: HeaderJudgement | undefined;
+  /** Judged with the largest boiler out. */
+  readonly largestOut: HeaderJudgement | undefined;
   readonly clock: Clock;
   readonly nowMin: number;
 }
@@ -23,9 +25,8 @@ interface Figure {
   readonly look?: 'over';
 }
 
-function overFigure(judged: HeaderJudgement | undefined, units: Units): Figure {
+function overFigure(name: string, judged: HeaderJudgement | undefined, units: Units): Figure {
   const over = judged?.over;
-  const name = 'Plan over the limit';
   if (!over) return { name, value: 'not judged', unit: '', note: 'no limit is set' };
   if (over.kg < 0.5) return { name, value: 'nothing', unit: '', note: 'the whole week fits' };
   const places = over.spans.length === 1 ? 'one place' : `${over.spans.length} places`;
@@ -33,12 +34,12 @@ function overFigure(judged: HeaderJudgement | undefined, units: Units): Figure {
     name,
     value: units.number('mass', over.kg),
     unit: units.symbol('mass'),
-    note: `${spanText(over.minutes)} in ${places}`,
+    note: `by up to ${units.rate(over.peakOverKgPerH)}, ${spanText(over.minutes)} in ${places}`,
     look: 'over',
   };
 }
 
-function figures({ dto, capacity, judged, clock, nowMin }: Props, units: Units): Figure[] {
+function figures({ dto, capacity, judged, largestOut, clock, nowMin }: Props, units: Units): Figure[] {
   const round = (kgPerH: number): string => units.number('steamRate', kgPerH);
   const perHour = units.symbol('steamRate');
   const inWeek = nowMin >= 0 && nowMin < dto.horizonMin;
@@ -74,15 +75,16 @@ function figures({ dto, capacity, judged, clock, nowMin }: Props, units: Units):
       unit: perHour,
       note: judged ? clock.dayTime(judged.peak.minute) : '',
     },
-    overFigure(judged, units),
+    overFigure('Plan over the limit', judged, units),
+    ...(capacity?.exportKgPerH ? [overFigure('With the largest boiler out', largestOut, units)] : []),
   ];
 }
 
-/** The week in five numbers. */
+/** The week in six numbers. */
 export function Figures(props: Props) {
   const units = useUnits();
   return (
-    <dl className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3 xl:grid-cols-5">
+    <dl className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3 2xl:grid-cols-6">
       {figures(props, units).map(({ name, value, unit, note, look }) => (
         <div key={name} className="flex min-w-0 gap-3">
           {look === 'over' ? <span className="hatch-over w-1 shrink-0 rounded-sm" aria-hidden="true" /> : null}

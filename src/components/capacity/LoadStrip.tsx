@@ -1,9 +1,12 @@
 import { useMemo, type PointerEvent } from 'react';
+import type { HeaderJudgement } from '@/core/header/judgement';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { fromMinutes, valueAt, type StepFunction } from '@/core/time/stepFunction';
 import { Hatch } from '../ui/Hatch';
 import { groupDigits } from '../time';
 import { useUnits } from '../ui/units';
+import { betweenPath } from './chartPaths';
+import { Dots } from './Dots';
 import type { Draft } from './draft';
 import type { DeskPart } from './deskPart';
 import { Grips } from './Grips';
@@ -11,33 +14,25 @@ import { areaPath, limitSnap, linePath, minuteAtX, rateTicks, xOf, yOf, type Des
 
 interface Props extends DeskPart {
   readonly capacity: HeaderCapacity | undefined;
-  readonly loadKgPerH: Float64Array;
+  readonly judged: HeaderJudgement;
+  /** The limit with the largest boiler out; null: not known. */
+  readonly largestOutLimit: StepFunction | null;
 }
 
 const NONE: StepFunction = [];
 
-/** What stands over the limit, as rectangles from the limit up to the load. */
-function overPath(scale: DeskScale, load: StepFunction, limit: StepFunction): string {
-  const edges = [...new Set([...load, ...limit].map((step) => step.from).concat(scale.from, scale.to))]
-    .filter((minute) => minute >= scale.from && minute <= scale.to)
-    .sort((a, b) => a - b);
-  return edges
-    .slice(0, -1)
-    .map((from, i) => {
-      const to = edges[i + 1] ?? scale.to;
-      const [asked, may] = [valueAt(load, from), valueAt(limit, from)];
-      if (asked <= may) return '';
-      const [left, right] = [xOf(scale, from), Math.max(xOf(scale, to), xOf(scale, from) + 0.75)];
-      return `M${left.toFixed(1)} ${yOf(scale, asked).toFixed(1)}H${right.toFixed(1)}V${yOf(scale, may).toFixed(1)}H${left.toFixed(1)}Z`;
-    })
-    .join('');
+/** The load with what accumulators carry put back on top; null where none does. */
+function withCarried({ loadKgPerH, carried }: HeaderJudgement): StepFunction | null {
+  if (!carried) return null;
+  return fromMinutes(loadKgPerH.map((kgPerH, t) => kgPerH + (carried.dischargeKgPerH[t] ?? 0)));
 }
 
 /** The plan's load under its limit; the limit is a line that one can take hold of. */
 export function LoadStrip(props: Props) {
-  const { scale, days, clock, capacity, nowMin, draft, canSet, horizonMin } = props;
+  const { scale, days, clock, capacity, nowMin, draft, canSet, horizonMin, judged, largestOutLimit } = props;
   const units = useUnits();
-  const load = useMemo(() => fromMinutes(props.loadKgPerH), [props.loadKgPerH]);
+  const load = useMemo(() => fromMinutes(judged.loadKgPerH), [judged.loadKgPerH]);
+  const carried = useMemo(() => withCarried(judged), [judged]);
   const limit = capacity?.limitKgPerH ?? null;
   const base = capacity?.baseLoadKgPerH ?? NONE;
   const sent = capacity?.exportKgPerH ?? null;
@@ -49,9 +44,11 @@ export function LoadStrip(props: Props) {
       room: limit && areaPath(scale, limit),
       limit: limit && linePath(scale, limit),
       sent: sent && linePath(scale, sent),
-      over: limit && overPath(scale, load, limit),
+      over: limit && betweenPath(scale, load, limit),
+      carried: carried && betweenPath(scale, carried, load),
+      largestOut: largestOutLimit && linePath(scale, largestOutLimit),
     }),
-    [scale, load, base, limit, sent],
+    [scale, load, base, limit, sent, carried, largestOutLimit],
   );
   const shown = draft?.subject.kind === 'limit' && draft.subject.headerId === capacity?.headerId ? draft : null;
 
@@ -79,6 +76,7 @@ export function LoadStrip(props: Props) {
     >
       <defs>
         <Hatch id="desk-over" />
+        <Dots id="desk-carried" />
       </defs>
       <rect width={scale.width} height={scale.height} className="fill-surface" />
       {paths.room ? <path d={paths.room} className="fill-room-soft" /> : null}
@@ -108,7 +106,13 @@ export function LoadStrip(props: Props) {
         className="fill-none stroke-steam"
         strokeWidth={scale.to - scale.from > 2_000 ? 0.75 : 1.25}
       />
+      {paths.carried ? (
+        <path d={paths.carried} fill="url(#desk-carried)" className="stroke-steam-deep" strokeWidth={0.5} />
+      ) : null}
       {paths.over ? <path d={paths.over} fill="url(#desk-over)" /> : null}
+      {paths.largestOut ? (
+        <path d={paths.largestOut} className="fill-none stroke-ink-muted" strokeWidth={1.25} strokeDasharray="1 3" />
+      ) : null}
       {paths.sent ? (
         <path d={paths.sent} className="fill-none stroke-room" strokeWidth={1.25} strokeDasharray="5 4" />
       ) : null}

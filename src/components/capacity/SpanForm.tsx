@@ -22,6 +22,8 @@ interface Props {
   /** What it would do to the plan. */
   readonly outcome: string;
   readonly isWorse: boolean;
+  /** What else is to be thought of; null: nothing. */
+  readonly caution: string | null;
   readonly error: unknown;
   readonly busy: boolean;
   readonly onChange: (draft: Draft) => void;
@@ -98,6 +100,11 @@ export function SpanForm(props: Props) {
       <Notice look={props.isWorse ? 'over' : 'good'} className="mb-4 min-h-11">
         {props.outcome}
       </Notice>
+      {props.caution ? (
+        <Notice look="caution" className="mb-4">
+          {props.caution}
+        </Notice>
+      ) : null}
       <div className="grid gap-2">
         <Button type="submit" look="main" busy={props.busy} disabled={isBackwards}>
           {actionText(draft, name, units)}

@@ -1,8 +1,10 @@
 import type { BoilerDto, CapacityDto } from '@/contracts/capacity';
 import { capacityMinutes } from '@/core/header/judgement';
 import { overLimit, type OverSummary } from '@/core/header/over';
+import { firesOf, readyShare } from '@/core/house/readiness';
 import type { HeaderCapacity } from '@/core/plant/plant';
-import { toMinutes } from '@/core/time/stepFunction';
+import { stepsFromSpans } from '@/core/time/stepMath';
+import { toMinutes, type StepFunction } from '@/core/time/stepFunction';
 import type { Draft } from './draft';
 
 interface PreviewInput {
@@ -36,16 +38,31 @@ function limitWithFiring(
   const { subject } = draft;
   const boiler = subject.kind === 'firing' ? input.boilers.find((b) => b.id === subject.boilerId) : undefined;
   if (!boiler || !limitNow || !exportNow) return limitNow;
-  const share = toMinutes(boiler.share, limitNow.length);
+  const before = toMinutes(readyShare(boiler.share, boiler.fires), limitNow.length);
+  const after = toMinutes(readyWith(draft, boiler, limitNow.length), limitNow.length);
   const limit = limitNow.slice();
-  for (let t = draft.fromMin; t < draft.toMin; t++) {
+  for (let t = 0; t < limit.length; t++) {
+    const change = (after[t] ?? 0) - (before[t] ?? 0);
+    if (change === 0) continue;
     const now = exportNow[t] ?? 0;
     const kept = now * (1 - input.reserveFraction);
-    const then = (now + boiler.netKgPerH * ((draft.value ?? 0) - (share[t] ?? 0))) * (1 - input.reserveFraction);
+    const then = (now + boiler.netKgPerH * change) * (1 - input.reserveFraction);
     const set = limitNow[t] ?? 0;
     limit[t] = sameRate(set, kept) ? then : Math.min(set, then);
   }
   return limit;
+}
+
+/** What of a boiler's export can leave with the draft in force: where it is lit anew, once it is at pressure. */
+function readyWith(draft: Draft, boiler: BoilerDto, horizonMin: number): StepFunction {
+  const share = stepsFromSpans(
+    [
+      ...boiler.share.map((step, i) => ({ ...step, to: boiler.share[i + 1]?.from ?? horizonMin })),
+      { from: draft.fromMin, to: draft.toMin, value: draft.value ?? 0 },
+    ],
+    0,
+  );
+  return readyShare(share, firesOf(share, boiler, horizonMin));
 }
 
 /** What the plan would be over with the draft in force. */

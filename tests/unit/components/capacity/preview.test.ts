@@ -3,10 +3,16 @@ import type { Draft } from '@/components/capacity/draft';
 import { durationCurve, hoursAbove } from '@/components/capacity/durationCurve';
 import { limitWith, overWith } from '@/components/capacity/preview';
 import type { BoilerDto } from '@/contracts/capacity';
+import { firesOf, LOOK_BACK_MIN } from '@/core/house/readiness';
 import type { HeaderCapacity } from '@/core/plant/plant';
 
 const HORIZON = 240;
-const boiler = { id: 'b2', headerId: 'h', netKgPerH: 1_000, share: [{ from: 0, value: 1 }] } as unknown as BoilerDto;
+const times = { purgeMinutes: 5, warmReadyMinutes: 30, coldReadyMinutes: 120 };
+const share = [{ from: -LOOK_BACK_MIN, value: 1 }];
+const boiler = {
+  ...{ id: 'b2', headerId: 'h', netKgPerH: 1_000, ...times },
+  ...{ share, fires: firesOf(share, times, HORIZON) },
+} as unknown as BoilerDto;
 /** Two boilers of 1,000 kg/h, a tenth kept back; the lead has set 1,500 from 120 on. */
 const capacity: HeaderCapacity = {
   headerId: 'h',
@@ -53,7 +59,9 @@ describe('limitWith', () => {
   });
 
   it('lowers the limit by a boiler that is shut, and no further where a set limit is lower already', () => {
-    expect(limitWith(firing(60, 90, 0), input)?.[60]).toBe(900);
+    // It is lit again at 90: warm, 5 min purge and 30 min to pressure.
+    const shut = limitWith(firing(60, 90, 0), input);
+    expect([59, 60, 89, 90, 124, 125].map((t) => shut?.[t])).toEqual([1_800, 900, 900, 900, 900, 1_500]);
     // Two boilers at 75 % and 100 %: 1,750 less a tenth is 1,575, above the 1,500 that is set.
     expect(limitWith(firing(130, 140, 0.75), input)?.[130]).toBe(1_500);
   });
