@@ -1,7 +1,14 @@
 /** Schemas of every duty model's inputs, made from core's catalogue: the same ranges, the same sentences. */
 import { z } from 'zod';
 import { DUTY_CATALOGUE, type InputsOf, type WorkedModel } from '../core/duty/catalogue';
-import { DUTY_BASES, DUTY_CHOICES, DUTY_LISTS, DUTY_OPTIONAL, type DutyList } from '../core/duty/dutyFields';
+import {
+  DUTY_BASES,
+  DUTY_CHOICES,
+  DUTY_LISTS,
+  DUTY_OPTIONAL,
+  DUTY_WHOLE,
+  type DutyList,
+} from '../core/duty/dutyFields';
 import { checkNumber } from '../core/duty/inputs';
 import { TYPED_RANGES, type DutyModel } from '../core/duty/model';
 import { COMPONENTS, FRACTIONS, FRACTIONS_SUM, GIVEN_SPECIFIC_HEAT, sumOfFractions } from '../core/duty/specificHeat';
@@ -74,7 +81,9 @@ const listSchema = ({ name, count, ranges }: DutyList) =>
     .max(count.max, { error: `${name}: at most ${count.max} rows.` });
 
 function shapeOf(model: WorkedModel): z.ZodRawShape {
-  const shape: Record<string, z.ZodType> = numbersIn(DUTY_CATALOGUE[model].ranges);
+  const ranges: Readonly<Record<string, Range>> = DUTY_CATALOGUE[model].ranges;
+  const shape: Record<string, z.ZodType> = numbersIn(ranges);
+  for (const field of DUTY_WHOLE[model] ?? []) if (ranges[field]) shape[field] = wholeIn(ranges[field]);
   for (const [field, { name, options }] of Object.entries(DUTY_CHOICES[model] ?? {})) {
     shape[field] = z.enum(options.map(({ value }) => value) as [string, ...string[]], {
       error: `${name}: choose one.`,

@@ -71,6 +71,9 @@ export const DUTY_OPTIONAL: Readonly<Partial<Record<WorkedModel, Readonly<Record
   stillRetort: { ventSteps: VENT_STEPS },
 };
 
+/** Numbers of things: no part of one. */
+export const DUTY_WHOLE: Readonly<Partial<Record<WorkedModel, readonly string[]>>> = { evaporator: ['effects'] };
+
 const meanOf = (a: string, b: string) => (inputs: Readonly<Record<string, unknown>>) =>
   (Number(inputs[a] ?? Number.NaN) + Number(inputs[b] ?? Number.NaN)) / 2;
 const asEntered = (inputs: Readonly<Record<string, unknown>>) => Number(inputs.specificHeatAtC ?? Number.NaN);
