@@ -56,7 +56,8 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
 
   useEffect(() => putInAddress(selected), [selected]);
   useEffect(() => {
-    if (selected !== null) panel.current?.scrollIntoView({ block: 'nearest' });
+    const isBelow = matchMedia('(width < 64rem)').matches;
+    if (selected !== null && isBelow) panel.current?.scrollIntoView({ block: 'start' });
   }, [selected]);
 
   const open = (id: string | null): void => {
@@ -64,10 +65,12 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
     setSelected(id);
   };
   return (
-    <div className={`mt-5 grid items-start gap-8 ${isOpen ? 'lg:grid-cols-[minmax(0,1fr)_minmax(0,30rem)]' : ''}`}>
+    <div
+      className={`mt-5 grid items-start gap-8 ${isOpen ? 'lg:grid-cols-[minmax(0,17rem)_minmax(0,1fr)] 2xl:grid-cols-[minmax(0,24rem)_minmax(0,1fr)]' : ''}`}
+    >
       <div className="min-w-0">
         <div className="mb-1 flex flex-wrap items-center justify-between gap-3">
-          <p className="text-md text-ink-muted">{wordsOf(kind).says}</p>
+          {isOpen ? null : <p className="text-md text-ink-muted">{wordsOf(kind).says}</p>}
           {canEdit ? <Button onClick={() => open(NEW)}>Add a {wordsOf(kind).one}</Button> : null}
         </div>
         {canEdit ? null : <p className="text-sm text-ink-muted">{whoMay}</p>}
@@ -78,7 +81,7 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
             </Notice>
           ) : null}
         </div>
-        <ThingList {...{ kind, library, selected }} onSelect={open} />
+        <ThingList {...{ kind, library, selected }} isNarrow={isOpen} onSelect={open} />
       </div>
       {isOpen ? (
         <div ref={panel} className="min-w-0 scroll-mt-16 rounded-md border border-rule bg-surface p-5">

@@ -61,7 +61,7 @@ export function StepsEditor({ control, name, weekStartsOn, unit, typed }: Props)
           );
         })}
       </ol>
-      <Button size="small" onClick={() => append({ fromHour: nextHour(typed), value: null } as never)}>
+      <Button size="small" onClick={() => append({ fromHour: nextHour(typed), value: null })}>
         One more step
       </Button>
     </div>

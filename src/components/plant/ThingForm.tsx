@@ -38,8 +38,9 @@ export function ThingForm(props: ThingFormProps) {
   const [filled] = useState<Raw>(() => (thing ? (thing.values as Raw) : blankOf(kind)));
   const id = thing?.id ?? null;
   const schema = useMemo(() => thingSchema(kind, { library, id }), [kind, library, id]);
-  const form = useZodForm(schema, filled as Record<string, never>);
-  const context: FormContext = { library, id, typed: form.watch() as Raw };
+  const form = useZodForm(schema, filled);
+  const typed: Raw = form.watch();
+  const context: FormContext = { library, id, typed };
   const save = useSave(
     form,
     () =>
@@ -63,20 +64,22 @@ export function ThingForm(props: ThingFormProps) {
         </Button>
       </div>
       {isBehind ? <Behind onRenew={props.onRenew} /> : null}
-      <fieldset disabled={!canEdit} className="mt-4 min-w-0">
-        <legend className="sr-only">{wordsOf(kind).one}</legend>
-        {SECTIONS[kind].map(({ title, fields }) => (
-          <fieldset key={title} className="mb-4 min-w-0">
-            <legend className="mb-2 w-full border-b border-rule pb-1 text-base font-semibold">{title}</legend>
-            <div className="grid gap-x-4 gap-y-1 sm:grid-cols-2">
-              {fields.map((spec) => (
-                <FormField key={spec.name} {...{ spec, control, context }} />
-              ))}
-            </div>
-          </fieldset>
-        ))}
-      </fieldset>
-      <Follows {...{ kind }} {...context} />
+      <div className="mt-4 grid items-start gap-6 xl:grid-cols-[minmax(0,1fr)_17rem]">
+        <fieldset disabled={!canEdit} className="min-w-0">
+          <legend className="sr-only">{wordsOf(kind).one}</legend>
+          {SECTIONS[kind].map(({ title, fields }) => (
+            <fieldset key={title} className="mb-4 min-w-0">
+              <legend className="mb-2 w-full border-b border-rule pb-1 text-base font-semibold">{title}</legend>
+              <div className="grid gap-x-4 gap-y-1 sm:grid-cols-2">
+                {fields.map((spec) => (
+                  <FormField key={spec.name} {...{ spec, control, context }} />
+                ))}
+              </div>
+            </fieldset>
+          ))}
+        </fieldset>
+        <Follows {...{ kind }} {...context} />
+      </div>
       {canEdit ? (
         <FormActions state={save.state} save={thing ? 'Save' : `Add the ${wordsOf(kind).one}`}>
           {thing ? <PlaceButtons {...{ kind, library }} id={thing.id} onChanged={props.onChanged} /> : null}

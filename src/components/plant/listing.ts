@@ -8,6 +8,8 @@ import { UNIT_KIND_WORDS } from './kinds';
 export interface Column {
   readonly title: string;
   readonly isFigure?: boolean;
+  /** Stays where there is little room. */
+  readonly isKey?: boolean;
 }
 
 export interface Listing<K extends ThingKind> {
@@ -20,6 +22,7 @@ export interface Listing<K extends ThingKind> {
 const NONE = '–';
 const column = (title: string): Column => ({ title });
 const figure = (title: string): Column => ({ title, isFigure: true });
+const key = (its: Column): Column => ({ ...its, isKey: true });
 
 /** A thing's name, retired or not; a dash for none. */
 export function nameOf(library: PlantLibraryDto, kind: 'headers' | 'lines' | 'ventGroups', id: string | null): string {
@@ -41,7 +44,7 @@ function capacityText({ capacity, unit }: ThingValues<'sharedLimits'>): string {
 
 export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
   headers: {
-    columns: [column('Header'), figure('Pressure'), column('State'), column('Fed by')],
+    columns: [column('Header'), key(figure('Pressure')), column('State'), column('Fed by')],
     name: ({ name }) => name,
     cells: ({ values }, library, units) => [
       units.text('gaugePressure', values.pressureBarG),
@@ -50,7 +53,7 @@ export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
     ],
   },
   boilers: {
-    columns: [column('Boiler'), column('Header'), figure('Rating'), figure('Net export')],
+    columns: [column('Boiler'), column('Header'), figure('Rating'), key(figure('Net export'))],
     name: ({ name }) => name,
     cells: ({ values }, library, units) => {
       const facts = boilerFacts(values, library);
@@ -62,7 +65,7 @@ export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
     },
   },
   units: {
-    columns: [column('Unit'), column('Line'), column('Kind'), column('Header'), column('Vent group')],
+    columns: [column('Unit'), column('Line'), key(column('Kind')), column('Header'), column('Vent group')],
     name: ({ name }) => name,
     cells: ({ values }, library) => [
       nameOf(library, 'lines', values.lineId),
@@ -72,7 +75,7 @@ export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
     ],
   },
   ventGroups: {
-    columns: [column('Vent group'), figure('Vents at once'), figure('Steam ons at once'), figure('Retorts')],
+    columns: [column('Vent group'), key(figure('Vents at once')), figure('Steam ons at once'), figure('Retorts')],
     name: ({ name }) => name,
     cells: ({ id }, library) => {
       const numbers = library.ventNumbers[id];
@@ -81,7 +84,7 @@ export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
     },
   },
   accumulators: {
-    columns: [column('Accumulator'), column('Charged from'), column('Feeds'), figure('Gives up')],
+    columns: [column('Accumulator'), column('Charged from'), column('Feeds'), key(figure('Gives up'))],
     name: ({ name }) => name,
     cells: ({ values }, library, units) => {
       const kg = releaseKg(values, library);
@@ -93,12 +96,12 @@ export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
     },
   },
   sharedLimits: {
-    columns: [column('Shared limit'), figure('Capacity')],
+    columns: [column('Shared limit'), key(figure('Capacity'))],
     name: ({ name }) => name,
     cells: ({ values }) => [capacityText(values)],
   },
   baseLoads: {
-    columns: [column('Base load'), column('Header'), column('Hours'), figure('Draws')],
+    columns: [column('Base load'), column('Header'), column('Hours'), key(figure('Draws'))],
     name: ({ note }) => note,
     cells: ({ values }, library, units) => [
       nameOf(library, 'headers', values.headerId),
@@ -107,7 +110,7 @@ export const LISTINGS: { readonly [K in ThingKind]: Listing<K> } = {
     ],
   },
   lines: {
-    columns: [column('Line'), figure('Units')],
+    columns: [column('Line'), key(figure('Units'))],
     name: ({ name }) => name,
     cells: ({ id }, library) => [
       String(library.things.units.filter(({ retiredAt, values }) => !retiredAt && values.lineId === id).length),

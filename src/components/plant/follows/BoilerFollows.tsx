@@ -1,13 +1,12 @@
-import type { ThingValues } from '../../../contracts/plantLibrary';
 import { useUnits } from '../../ui/units';
-import { boilerFacts, type Typed } from '../facts';
+import { boilerFacts } from '../facts';
 import type { FormContext } from '../fields';
 import { Facts, NotYet, WorkingLink } from './Facts';
 
 /** From rating to net export, as typed. */
 export function BoilerFollows({ typed, id, library }: FormContext) {
   const units = useUnits();
-  const found = boilerFacts(typed as Typed<ThingValues<'boilers'>>, library);
+  const found = boilerFacts(typed, library);
   if (!found.ok) return <NotYet>{units.sentence(found.error.message)}</NotYet>;
   const of = found.value;
   const facts = [

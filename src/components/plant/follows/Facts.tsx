@@ -12,7 +12,7 @@ export function Facts({ facts, children }: { readonly facts: readonly Fact[]; re
       <dl className="divide-y divide-rule border-y border-rule">
         {facts.map(({ name, value }) => (
           <div key={name} className="flex items-baseline justify-between gap-4 py-1.5">
-            <dt className="text-sm text-ink-muted">{name}</dt>
+            <dt className="min-w-0 text-sm text-ink-muted">{name}</dt>
             <dd className="text-md font-medium whitespace-nowrap">{value}</dd>
           </div>
         ))}

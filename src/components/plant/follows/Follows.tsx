@@ -22,7 +22,7 @@ export function Follows({ kind, ...context }: FormContext & { readonly kind: Thi
   const Part = FOLLOWS[kind];
   if (!Part) return null;
   return (
-    <section aria-label="What follows" data-testid="follows" className="rounded-md bg-sunken p-4">
+    <section aria-label="What follows" data-testid="follows" className="rounded-md bg-sunken p-4 xl:sticky xl:top-16">
       <h3 className="mb-2 text-base">What follows</h3>
       <Part {...context} />
     </section>

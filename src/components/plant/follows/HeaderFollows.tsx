@@ -23,10 +23,12 @@ function ArrivalSaid({ arrival, library }: { readonly arrival: Arrival; readonly
   if (!byValve.ok) return <Notice look="over">{units.sentence(byValve.error.message)}</Notice>;
   return (
     <div className="space-y-2">
-      <p className="text-sm">
-        By the valve alone, steam of {name} arrives at {stateText(byValve.value, ambientOf(library), units)},{' '}
-        {units.text('enthalpy', byValve.value.h, 1)}.
-      </p>
+      {isWrong || says.length === 0 ? (
+        <p className="text-sm">
+          By the valve alone, steam of {name} arrives at {stateText(byValve.value, ambientOf(library), units)},{' '}
+          {units.text('enthalpy', byValve.value.h, 1)}.
+        </p>
+      ) : null}
       {says.map((said) => (
         <Notice key={said} look={isWrong ? 'over' : 'note'}>
           {units.sentence(said)}
