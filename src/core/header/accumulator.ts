@@ -63,7 +63,9 @@ export function accumulatorFigures(
   if (!at.ok) return at;
   const sheet = openWorking('Accumulator', [ESTIMATE_CAUTION]);
   const { released, mean } = at.value;
+  sheet.section('Steam in store');
   const capacityKg = writeCapacity(sheet, store, released);
+  sheet.section('Charging');
   const chargePerKg = writeCharge(sheet, mean, charging);
   sheet.total('Steam in store when full', capacityKg, 'kg');
   return ok({ capacityKg, chargePerKg, dischargedH: mean.hg, waterH: mean.hf, working: sheet.finish() });

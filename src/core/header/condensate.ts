@@ -41,6 +41,7 @@ export function flashCredit(
   });
   if (!at.ok) return at;
   const sheet = openWorking(`Flash steam into ${header.name}`, [ESTIMATE_CAUTION]);
+  sheet.section('What flashes');
   const fraction = sheet.step({
     symbol: 'x_f',
     name: `Share of condensate at ${flash.condensateBarG} bar g that flashes at ${header.pressureBarG} bar g`,
