@@ -52,7 +52,10 @@ export function HoverCard({ hovered, drawn, week, evaluation, rows, scale, clock
       }}
     >
       <p className="font-semibold">
-        {activity.title} <span className="font-normal text-ink-muted">{activity.code}</span>
+        {activity.title}{' '}
+        {activity.title.includes(activity.code) ? null : (
+          <span className="font-normal text-ink-muted">{activity.code}</span>
+        )}
       </p>
       <p>
         {placeText(activity.placement, week.plant, clock)} to {clock.time(activity.placement.start + mode.minutes)}

@@ -14,6 +14,8 @@ const FACE_PX = 34;
 
 interface Props {
   readonly header: Header;
+  /** Only below the headers that are always in view can the row be folded away, for all of them. */
+  readonly main: boolean;
   readonly control: SpreadControl;
   readonly scale: TimeScale;
   readonly clock: Clock;
@@ -26,7 +28,7 @@ interface Props {
 
 /** The chance of going over the limit when starts are early or late, minute by minute, below the header's load. */
 export const SpreadRow = memo(function SpreadRow(props: Props) {
-  const { header, control, scale, clock, nowMin, onGo } = props;
+  const { header, main, control, scale, clock, nowMin, onGo } = props;
   const { on, choose } = control;
   const spread = useStore(control.store, (s) => s?.byHeader[header.id]) ?? null;
   return (
@@ -35,7 +37,11 @@ export const SpreadRow = memo(function SpreadRow(props: Props) {
         className="board-label !bg-surface py-1.5 pr-2 pl-4 max-sm:px-2"
         style={{ minHeight: on ? FACE_PX + 18 : 30 }}
       >
-        <Fold name="Early and late starts" open={on} onToggle={() => choose({ on: !on })} />
+        {main ? (
+          <Fold name="Early and late starts" open={on} onToggle={() => choose({ on: !on })} />
+        ) : (
+          <h2 className="text-xs">Early and late starts</h2>
+        )}
         {on && control.known ? <Head {...{ header, control, spread, clock, nowMin, onGo }} /> : null}
       </div>
       <div className="board-track" style={{ width: scale.widthPx }}>
@@ -86,7 +92,7 @@ function Head({ header, control, spread, clock, nowMin, onGo }: HeadProps) {
   const greatest = useMemo(() => (spread?.overChance ? greatestChance(spread.overChance, from) : null), [spread, from]);
   const tooMuch = greatest !== null && greatest.chance > 1 - confidence;
   return (
-    <div className="mt-0.5 flex flex-wrap items-center justify-between gap-x-1.5 text-2xs leading-4">
+    <div className="mt-0.5 flex flex-wrap items-center justify-between gap-x-1 text-2xs leading-4">
       <span data-testid={`greatest-chance-${header.id}`}>
         {greatest ? (
           <button type="button" className="rounded-sm text-left hover:underline" onClick={() => onGo(greatest.minute)}>
@@ -99,20 +105,26 @@ function Head({ header, control, spread, clock, nowMin, onGo }: HeadProps) {
           <span className="font-semibold text-room">never over{from > 0 ? ' from now' : ''}</span>
         ) : null}
       </span>
-      <select
-        aria-label="Part of the weeks that the load shown covers"
-        title="The load shown is not passed in this part of the weeks"
-        className="cursor-pointer rounded-sm border border-edge bg-surface px-0.5 text-2xs"
-        value={confidence}
-        onChange={(event) => choose({ confidence: Number(event.target.value) as Confidence })}
-      >
-        {CONFIDENCES.map((one) => (
-          <option key={one} value={one}>
-            {Math.round(100 * one)} %
-          </option>
-        ))}
-      </select>
+      {main ? <ConfidenceChoice {...{ confidence, choose }} /> : null}
     </div>
+  );
+}
+
+function ConfidenceChoice({ confidence, choose }: Pick<SpreadControl, 'confidence' | 'choose'>) {
+  return (
+    <select
+      aria-label="Part of the weeks that the load shown covers"
+      title="The load shown is not passed in this part of the weeks"
+      className="cursor-pointer rounded-sm border border-edge bg-surface px-0.5 text-2xs"
+      value={confidence}
+      onChange={(event) => choose({ confidence: Number(event.target.value) as Confidence })}
+    >
+      {CONFIDENCES.map((one) => (
+        <option key={one} value={one}>
+          {Math.round(100 * one)} %
+        </option>
+      ))}
+    </select>
   );
 }
 

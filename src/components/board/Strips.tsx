@@ -51,10 +51,11 @@ export function Strips({ model, pointed, limitsOpen, onLimits }: Props) {
         onPoint={point.header}
         pointedMin={minuteAt('header', header.id)}
       />,
-      main ? (
+      main || (spread.on && open.has(header.id)) ? (
         <SpreadRow
           key={`${header.id} spread`}
           header={header}
+          main={main}
           control={spread}
           scale={view.scale}
           clock={clock}

@@ -56,8 +56,10 @@ export function percentText(chance: number): string {
 /** Standard error of a chance found from so many samples. */
 export const standardError = (chance: number, samples: number): number => Math.sqrt((chance * (1 - chance)) / samples);
 
-/** '± 2 %', with a decimal below 2 %. */
+/** '± 2 %', with a decimal below 2 %; of what never or always came, how often it was tried. */
 export function errorText(chance: number, samples: number): string {
+  if (chance === 0) return `in none of ${samples}`;
+  if (chance === 1) return `in all ${samples}`;
   const percent = 100 * standardError(chance, samples);
   return `± ${percent < 1.95 ? percent.toFixed(1) : Math.round(percent)}\u00a0%`;
 }

@@ -54,7 +54,7 @@ export function useStartSpread({ personId, week, startSpreads, carrying, chosen 
   const changes = useLatest(chosen);
 
   useEffect(() => {
-    const headerIds = week.plant.headers.filter(({ feed }) => feed.kind === 'boilers').map(({ id }) => id);
+    const headerIds = week.plant.headers.map(({ id }) => id);
     ask?.({ kind: 'week', week, startSpreads, headerIds, confidence, changes: changes.current });
   }, [ask, week, startSpreads, confidence, changes]);
 

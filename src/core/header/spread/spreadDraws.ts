@@ -28,18 +28,29 @@ export interface SpreadHeader {
   readonly horizonMin: number;
   /** Base load, what lower headers pass on included. [kg/h] */
   readonly baseKgPerH: Float64Array;
-  /** null: not judged. [kg/h] */
+  /** The lower of the steam limit and what the letdown that feeds the header passes; null: not judged. [kg/h] */
   readonly limitKgPerH: Float64Array | null;
 }
 
-/** A header's base load and limit per minute. */
+/**
+ * A header's base load and limit per minute, of the network without flash steam and accumulators: both only ever take load
+ * off, so that a chance of going over is never said to be less than it is.
+ */
 export function spreadHeader(source: LoadSource, headerId: string): SpreadHeader {
-  const capacity = source.capacities.find((one) => one.headerId === headerId);
   return {
     horizonMin: source.horizonMin,
     baseKgPerH: loadOf({ ...source, activities: [] }).kgPerH(headerId),
-    limitKgPerH: capacity ? capacityMinutes(capacity, source.horizonMin).limitKgPerH : null,
+    limitKgPerH: boundOf(source, headerId),
   };
+}
+
+function boundOf({ plant, capacities, horizonMin }: LoadSource, headerId: string): Float64Array | null {
+  const capacity = capacities.find((one) => one.headerId === headerId);
+  const limit = capacity ? capacityMinutes(capacity, horizonMin).limitKgPerH : null;
+  const feed = plant.headers.find(({ id }) => id === headerId)?.feed;
+  if (feed?.kind !== 'letdown') return limit;
+  if (!limit) return new Float64Array(horizonMin).fill(feed.greatestKgPerH);
+  return limit.map((kgPerH) => Math.min(kgPerH, feed.greatestKgPerH));
 }
 
 /** What a placed activity draws as planned. */

@@ -53,6 +53,7 @@ describe('a chance in words', () => {
     expect(standardError(0, 400)).toBe(0);
     expect(errorText(0.5, 400)).toBe('± 3\u00a0%');
     expect(errorText(0.05, 400)).toBe('± 1.1\u00a0%');
-    expect(errorText(1, 400)).toBe('± 0.0\u00a0%');
+    expect(errorText(0, 400)).toBe('in none of 400');
+    expect(errorText(1, 400)).toBe('in all 400');
   });
 });
