@@ -79,19 +79,23 @@ export const RANGES = {
   },
 } as const satisfies Partial<Record<ThingKind, Record<string, Range>>>;
 
-/** A number in its range; the sentence names value and range. */
-export function ranged(its: Range) {
+function numberIn(its: Range, isWhole: boolean) {
   const unit = its.unit === '' ? '' : ` ${its.unit}`;
   const missing = `${its.name} is missing; it must be ${shortNumber(its.min)} to ${shortNumber(its.max)}${unit}.`;
   return z.number({ error: missing }).superRefine((value, context) => {
     const bad = checkRange('INPUT', its, value);
     if (bad) context.addIssue({ code: 'custom', message: bad.message });
+    else if (isWhole && !Number.isInteger(value)) {
+      context.addIssue({ code: 'custom', message: `${its.name} must be a whole number.` });
+    }
   });
 }
 
+/** A number in its range; the sentence names value and range. */
+export const ranged = (its: Range) => numberIn(its, false);
+
 /** A whole number in its range. */
-export const rangedWhole = (its: Range) =>
-  ranged(its).refine((value) => Number.isInteger(value), `${its.name} must be a whole number.`);
+export const rangedWhole = (its: Range) => numberIn(its, true);
 
 const text = (missing: string, longest: number) =>
   z.string({ error: missing }).trim().min(1, missing).max(longest, `At most ${longest} characters.`);

@@ -79,8 +79,9 @@ async function planned({ tx, plantId, weekStart }: UsesQuery, contains: unknown,
       ),
     )
     .orderBy(plans.weekStart, activities.code);
-  const weeks = Map.groupBy(rows, ({ week }) => week);
-  return [...weeks].map(([week, its]) => `${named(its.map(({ code }) => code))} in the week of ${week}`);
+  const weeks = [...new Set(rows.map(({ week }) => week))];
+  const codes = (week: string): string[] => rows.filter((row) => row.week === week).map(({ code }) => code);
+  return weeks.map((week) => `${named(codes(week))} in the week of ${week}`);
 }
 
 async function routesOver({ tx, plantId }: UsesQuery, kind: 'unit' | 'limit', id: string): Promise<string[]> {
