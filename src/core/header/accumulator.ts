@@ -2,7 +2,7 @@
  * Hot water under pressure that takes steam in and gives it up as the pressure slides between two figures.
  * Source: heat balance of saturated water at equilibrium, dm/m = (dh_f − v_f dp) / h_fg integrated; IAPWS R7-97(2012).
  */
-import type { Accumulator, PlantModel } from '../plant/plant';
+import type { Accumulator, Header, PlantModel } from '../plant/plant';
 import { ENERGY_BALANCE, IF97 } from '../duty/balance';
 import { ESTIMATE_CAUTION } from '../duty/duty';
 import { allOf, checkInputs, range, type InputRanges } from '../duty/inputs';
@@ -118,15 +118,40 @@ export interface PlacedAccumulator {
   readonly relieves: readonly string[];
 }
 
+/** A header at an end of an accumulator. */
+type End = Pick<Header, 'name' | 'pressureBarG' | 'dryness' | 'superheatK'>;
+
+/**
+ * An accumulator between two headers of the plant.
+ * @returns as {@link accumulatorFigures}; DUTY-ORDER under `highBarG` or `lowBarG` where a header's pressure does not reach
+ * the one or is above the other.
+ */
+export function accumulatorBetween(
+  store: AccumulatorStore,
+  from: End,
+  into: End,
+  ambientBarA: number,
+): Result<AccumulatorFigures> {
+  if (store.highBarG > from.pressureBarG) {
+    const text = `Charged up to ${store.highBarG} bar g; ${from.name} has ${from.pressureBarG} bar g.`;
+    return fail(problem('DUTY-ORDER', text, 'highBarG'));
+  }
+  if (store.lowBarG < into.pressureBarG) {
+    const text = `Discharged down to ${store.lowBarG} bar g; ${into.name} has ${into.pressureBarG} bar g.`;
+    return fail(problem('DUTY-ORDER', text, 'lowBarG'));
+  }
+  const steam = headerSteam(from, ambientBarA);
+  return steam.ok ? accumulatorFigures(store, steam.value, ambientBarA) : steam;
+}
+
 /** The accumulators that can be worked out; one whose headers or pressures do not fit carries nothing. */
 export function placedAccumulators(plant: PlantModel): PlacedAccumulator[] {
   return (plant.accumulators ?? []).flatMap((accumulator) => {
-    const from = plant.headers.find(({ id }) => id === accumulator.chargedFromHeaderId);
-    const into = plant.headers.find(({ id }) => id === accumulator.feedsHeaderId);
-    const steam = from && into && headerSteam(from, plant.ambientBarA);
-    const figures = steam?.ok ? accumulatorFigures(accumulator, steam.value, plant.ambientBarA) : null;
-    if (!figures?.ok) return [];
     const { chargedFromHeaderId, feedsHeaderId } = accumulator;
+    const from = plant.headers.find(({ id }) => id === chargedFromHeaderId);
+    const into = plant.headers.find(({ id }) => id === feedsHeaderId);
+    const figures = from && into && accumulatorBetween(accumulator, from, into, plant.ambientBarA);
+    if (!figures?.ok) return [];
     const charges = feedPath(plant, chargedFromHeaderId);
     return [{ accumulator, figures: figures.value, charges, relieves: feedPath(plant, feedsHeaderId) }];
   });

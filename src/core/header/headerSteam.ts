@@ -1,15 +1,12 @@
 /** Steam as a header of the plant has it, and as a boiler sends it out. */
-import type { Header } from '../plant/plant';
+import type { HeaderSteam } from '../duty/supply';
 import { barAbsolute, barGauge } from '../quantity/units';
 import type { BarAbsolute } from '../quantity/units';
 import type { Result } from '../result';
 import { steamState, type SteamQuality, type SteamState } from '../steam/steamState';
 
-/** What of a header says how its steam is. */
-export type HeaderSteam = Pick<Header, 'pressureBarG' | 'dryness' | 'superheatK'>;
-
 /** Dryness or superheat as entered; neither is dry saturated steam. */
-export const qualityOf = ({ dryness, superheatK }: HeaderSteam): SteamQuality =>
+const qualityOf = ({ dryness, superheatK }: HeaderSteam): SteamQuality =>
   superheatK === null ? { kind: 'wet', dryness: dryness ?? 1 } : { kind: 'superheated', superheatK };
 
 /**

@@ -3,7 +3,7 @@ import { boilerExport } from '@/core/duty/boilerExport';
 import { supplyOf } from '@/core/duty/supply';
 import type { SteamSupply } from '@/core/duty/duty';
 import type { Working } from '@/core/duty/working';
-import { accumulatorFigures } from '@/core/header/accumulator';
+import { accumulatorBetween } from '@/core/header/accumulator';
 import { flashCredit } from '@/core/header/condensate';
 import { boilerOutlet } from '@/core/header/headerSteam';
 import { stationBalance, type Station } from '@/core/header/station';
@@ -146,10 +146,10 @@ function accumulatorsOf(rows: Rows, header: HeaderRow, supply: SteamSupply) {
     .filter((one) => one.chargedFromHeaderId === header.id || one.feedsHeaderId === header.id)
     .map((one) => {
       const from = rows.headers.find(({ id }) => id === one.chargedFromHeaderId);
-      const steam = from ? supplyOf(from, rows.altitudeM) : ok(supply);
-      const figures = steam.ok ? accumulatorFigures(one, steam.value.header, supply.ambient) : steam;
       const into = rows.headers.find(({ id }) => id === one.feedsHeaderId);
-      const role = `Charged from ${from?.name ?? 'no header'}, discharged into ${into?.name ?? 'no header'}`;
+      if (!from || !into) throw new Error(`${one.name} stands between no headers of its plant`);
+      const figures = accumulatorBetween(one, from, into, supply.ambient);
+      const role = `Charged from ${from.name}, discharged into ${into.name}`;
       return { name: one.name, role, figures };
     });
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { accumulatorFigures, placedAccumulators } from '@/core/header/accumulator';
+import { accumulatorBetween, accumulatorFigures, placedAccumulators } from '@/core/header/accumulator';
 import { NOT_JUDGED_KG_PER_H } from '@/core/header/capacity';
 import { headerSteam } from '@/core/header/headerSteam';
 import { evaluateWeek } from '@/core/pipeline';
@@ -49,6 +49,28 @@ describe('what an accumulator holds', () => {
     expect(of({ waterTonnes: -1 })).toMatchObject({ code: 'DUTY-RANGE', field: 'waterTonnes' });
     expect(of({ shareAtWeekStart: 1.2 })).toMatchObject({ code: 'DUTY-RANGE', field: 'shareAtWeekStart' });
     expect(placedAccumulators(plant({ accumulators: [{ ...vessel, lowBarG: 11 }] }))).toEqual([]);
+  });
+});
+
+describe('an accumulator between two headers', () => {
+  const between = (fromBarG: number, intoBarG: number) =>
+    accumulatorBetween(
+      vessel,
+      header('main', { pressureBarG: fromBarG }),
+      header('low', { pressureBarG: intoBarG }),
+      1.01325,
+    );
+
+  it('is charged no higher than the one and discharged no lower than the other', () => {
+    expect(between(10, 5).ok).toBe(true);
+    expect(failureOf(between(9.5, 4))).toMatchObject({ code: 'DUTY-ORDER', field: 'highBarG' });
+    expect(failureOf(between(10, 5.5))).toMatchObject({ code: 'DUTY-ORDER', field: 'lowBarG' });
+  });
+
+  it('carries nothing where it does not fit', () => {
+    const unfit = { ...works, headers: works.headers.map((one) => ({ ...one, pressureBarG: 8 })) };
+    const [main] = evaluateWeek(week({ plant: unfit, capacities: [capacity('main', 1000)] })).headers;
+    expect(main?.carried).toBeNull();
   });
 });
 
