@@ -19,6 +19,7 @@ export async function insertDemoPlant(db: Db, now: Date): Promise<void> {
   await db.insert(schema.plants).values({ ...plant, ...demo.DEMO_RULES, isDemo: true });
   await insertPeople(db);
   await insertUnits(db);
+  await insertPractice(db, now);
   await insertBoilerHouse(db);
   await insertLibrary(db, now);
 }
@@ -36,7 +37,7 @@ const inOrder = <T>(rows: readonly T[]) => rows.map((row, position) => ({ ...row
 async function insertUnits(db: Db): Promise<void> {
   await db.insert(schema.lines).values(inOrder(demo.DEMO_LINES));
   await db.insert(schema.headers).values(inOrder(demo.DEMO_HEADERS));
-  await db.insert(schema.ventGroups).values(demo.DEMO_VENT_GROUPS.map((group) => ({ ...group, plantId })));
+  await db.insert(schema.ventGroups).values(inOrder(demo.DEMO_VENT_GROUPS));
   await db.insert(schema.units).values(inOrder(demo.DEMO_UNITS.map((unit) => ({ ...unit, ...spreadOf(unit) }))));
   await db.insert(schema.shifts).values(inOrder(demo.DEMO_SHIFTS).map((s) => ({ ...s, days: [...s.days] })));
 }
@@ -48,6 +49,24 @@ function spreadOf({ kind }: Unit): { startSpread: StartSpread | null; startSprea
   return { startSpread: spread.value, startSpreadSource: demo.DEMO_START_SPREAD_SOURCE };
 }
 
+/** The numbers of the vent groups as released rules, so that the page of practice rules says where they are from. */
+async function insertPractice(db: Db, now: Date): Promise<void> {
+  await db.insert(schema.practiceRules).values(
+    demo.DEMO_VENT_GROUPS.map(({ id, name: _, source, ...numbers }) => ({
+      id: `${id}-rule`,
+      plantId,
+      kind: 'ventGroup' as const,
+      ventGroupId: id,
+      values: { leastHeaderBarG: null, studyGreatestLoadKgPerH: null, ...numbers },
+      source,
+      enteredBy: administrator,
+      createdAt: now,
+      releasedBy: quality,
+      releasedAt: now,
+    })),
+  );
+}
+
 async function insertBoilerHouse(db: Db): Promise<void> {
   await db.insert(schema.boilers).values(inOrder(demo.DEMO_BOILERS).map((b) => ({ ...b, headerId: demo.MAIN_HEADER })));
   await db
@@ -55,7 +74,7 @@ async function insertBoilerHouse(db: Db): Promise<void> {
     .values(demo.DEMO_BASE_LOADS.map((load, i) => ({ ...load, id: `demo-base-${i + 1}`, plantId })));
   await db
     .insert(schema.sharedLimits)
-    .values(demo.DEMO_SHARED_LIMITS.map((limit) => ({ ...limit, capacity: [...limit.capacity], plantId })));
+    .values(inOrder(demo.DEMO_SHARED_LIMITS).map((limit) => ({ ...limit, capacity: [...limit.capacity] })));
 }
 
 async function insertLibrary(db: Db, now: Date): Promise<void> {
