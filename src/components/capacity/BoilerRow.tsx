@@ -1,7 +1,6 @@
 import { useId, type PointerEvent } from 'react';
 import type { BoilerDto } from '@/contracts/capacity';
 import { valueAt } from '@/core/time/stepFunction';
-import { Hatch } from '../ui/Hatch';
 import { partsOf, type BoilerPart } from './boilerParts';
 import type { DeskPart } from './deskPart';
 import { Grips } from './Grips';
@@ -57,7 +56,9 @@ export function BoilerRow(props: Props) {
       onPointerCancel={props.onRelease}
     >
       <defs>
-        <Hatch id={hatch} look="quiet" />
+        <pattern id={hatch} width="6" height="6" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+          <rect width="1.8" height="6" className="fill-room" />
+        </pattern>
       </defs>
       {days.map((day) => (
         <line

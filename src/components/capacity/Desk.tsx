@@ -8,7 +8,6 @@ import { makeClock } from '../time';
 import { useUnits } from '../ui/units';
 import { DeskChart } from './DeskChart';
 import { DeskPanel, spanSummary } from './DeskPanel';
-import { Duration } from './Duration';
 import type { Draft } from './draft';
 import { Figures } from './Figures';
 import { HouseSections } from './HouseSections';
@@ -75,24 +74,29 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
       <div className="min-w-0 space-y-6 px-4 py-5 sm:px-6">
         <div className="flex flex-wrap items-center justify-between gap-3">
           <WeekLinks path="/capacity" weekStart={dto.weekStart} days={days} />
-          {dto.headers.length > 1 ? (
-            <div className="flex gap-1" role="group" aria-label="Header">
-              {dto.headers.map((h) => (
-                <Button
-                  key={h.id}
-                  size="small"
-                  look={h.id === headerId ? 'plain' : 'quiet'}
-                  aria-pressed={h.id === headerId}
-                  onClick={() => {
-                    setHeaderId(h.id);
-                    change(null);
-                  }}
-                >
-                  {h.name}, {units.text('gaugePressure', h.pressureBarG)}
-                </Button>
-              ))}
-            </div>
-          ) : null}
+          <div className="flex flex-wrap items-center gap-1">
+            {dto.headers.length > 1 ? (
+              <div className="flex gap-1" role="group" aria-label="Header">
+                {dto.headers.map((h) => (
+                  <Button
+                    key={h.id}
+                    size="small"
+                    look={h.id === headerId ? 'plain' : 'quiet'}
+                    aria-pressed={h.id === headerId}
+                    onClick={() => {
+                      setHeaderId(h.id);
+                      change(null);
+                    }}
+                  >
+                    {h.name}, {units.text('gaugePressure', h.pressureBarG)}
+                  </Button>
+                ))}
+              </div>
+            ) : null}
+            <a className="link px-2 text-sm" href={`/working/header/${headerId}`}>
+              Working
+            </a>
+          </div>
         </div>
         <Figures
           {...{ dto, capacity, judged: header, clock, nowMin }}
@@ -127,18 +131,18 @@ export function Desk({ canSet, whoMay, ...first }: DeskProps) {
             />
           ) : null}
         </section>
-        <div className="grid items-start gap-x-8 gap-y-10 xl:grid-cols-2">
-          {header ? (
-            <HouseSections {...{ dto, days, clock }} plant={week.week.plant} drawn={evaluation.drawn} judged={header} />
-          ) : null}
-          {header ? <Duration loadKgPerH={header.loadKgPerH} limitKgPerH={header.limitKgPerH} /> : null}
-          <section aria-labelledby="record-heading">
-            <h2 id="record-heading" className="mb-3 text-md font-semibold">
-              Record of changes
-            </h2>
-            <RecordTable entries={dto.entries} clock={clock} horizonMin={dto.horizonMin} />
-          </section>
-        </div>
+        {header ? (
+          <div className="grid items-start gap-x-8 gap-y-10 xl:grid-cols-2">
+            <HouseSections {...{ dto, days, clock }} plant={week.week.plant} drawn={evaluation.drawn} judged={header}>
+              <section aria-labelledby="record-heading">
+                <h2 id="record-heading" className="mb-3 text-md font-semibold">
+                  Record of changes
+                </h2>
+                <RecordTable entries={dto.entries} clock={clock} horizonMin={dto.horizonMin} />
+              </section>
+            </HouseSections>
+          </div>
+        ) : null}
       </div>
       <aside className="border-rule bg-surface px-4 py-5 max-lg:border-t sm:px-5 lg:border-l">
         <div className="space-y-5 lg:sticky lg:top-[calc(var(--header-height)+1.25rem)]">

@@ -10,7 +10,7 @@ interface Props {
 }
 
 /** Shorter ones are dips that the water in the boilers takes: counted, not listed. [min] */
-const LISTED_FROM_MIN = 30;
+const LISTED_FROM_MIN = 60;
 const SHOWN = 6;
 
 /** When the boilers in fire can't turn down to the load, and which could be shut. */

@@ -27,6 +27,9 @@ export interface TurndownSpan {
   readonly couldShutId: string | null;
 }
 
+/** A boiler is shut for at least so many times the minutes that it takes to come back: common practice, no source. */
+const WORTH_SHUTTING = 2;
+
 interface BoilerMinutes {
   readonly boiler: TurndownBoiler;
   readonly share: Float64Array;
@@ -34,8 +37,8 @@ interface BoilerMinutes {
 
 /**
  * Spans of a load per minute [kg/h] under the sum of the least exports (export / turndown) of the boilers that are ready.
- * A boiler could be shut where the span is at least as long as its way back and the others still carry the load with
- * the reserve kept; of several the one whose least export is the greatest.
+ * A boiler could be shut where the span is at least twice as long as its way back and the others still carry the load
+ * with the reserve kept; of several the one whose least export is the greatest.
  */
 export function belowTurndown(
   load: ArrayLike<number>,
@@ -78,7 +81,7 @@ function leastExportAt(minutes: readonly BoilerMinutes[], t: number): number {
 
 function couldShut(span: Under, minutes: readonly BoilerMinutes[], reserveFraction: number): string | null {
   const free = minutes.filter((one) => {
-    const longEnough = span.to - span.from >= one.boiler.minutesBack;
+    const longEnough = span.to - span.from >= WORTH_SHUTTING * one.boiler.minutesBack;
     const inFire = one.share.subarray(span.from, span.to).every((share) => share > 0);
     return longEnough && inFire && othersCarry(span, one, minutes, reserveFraction);
   });

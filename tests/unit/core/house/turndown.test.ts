@@ -35,9 +35,9 @@ describe('load under what the boilers in fire can turn down to', () => {
     expect(belowTurndown(load(1_100), PAIR, 0)).toEqual([]);
   });
 
-  it('names no boiler to shut for less time than it takes to come back', () => {
-    expect(belowTurndown(load(1_500, [100, 134, 900]), PAIR, 0)[0]?.couldShutId).toBeNull();
-    expect(belowTurndown(load(1_500, [100, 135, 900]), PAIR, 0)[0]?.couldShutId).toBe('two');
+  it('names no boiler to shut for less than twice the time that it takes to come back', () => {
+    expect(belowTurndown(load(1_500, [100, 169, 900]), PAIR, 0)[0]?.couldShutId).toBeNull();
+    expect(belowTurndown(load(1_500, [100, 170, 900]), PAIR, 0)[0]?.couldShutId).toBe('two');
   });
 
   it('names none that the others could not stand in for with the reserve kept', () => {
