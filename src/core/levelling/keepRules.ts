@@ -8,8 +8,8 @@ import type { Plan, Problem } from './problem';
 
 /**
  * Takes moves of a plan back until it newly breaks none of the rules that the search does not know: time between cleans,
- * standing dirty, pressure to vent at. Whole batches go back to where the planner has them: first those that a breach
- * names, then those that no longer fit beside them. At the worst nothing is moved.
+ * standing dirty, pressure to vent at, allergens of runs further back. Whole batches go back to where the planner has
+ * them: first those that a breach names, then those that no longer fit beside them. At the worst nothing is moved.
  */
 export function keepRules(week: Week, problem: Problem, plan: Plan): Plan {
   if (!hasFurtherRules(week.plant)) return plan;
@@ -26,11 +26,15 @@ export function keepRules(week: Week, problem: Problem, plan: Plan): Plan {
   }
 }
 
-/** True where the plant has set a rule that the search does not price. */
-function hasFurtherRules({ rules: { practice }, ventGroups }: PlantModel): boolean {
-  const cleanliness =
-    (practice?.greatestRunningMin ?? null) !== null || (practice?.greatestStandingDirtyMin ?? null) !== null;
-  return cleanliness || ventGroups.some((group) => (group.leastHeaderBarG ?? null) !== null);
+/** True where the plant has a rule that the search does not price; of allergens it knows the pair, not the state. */
+function hasFurtherRules({ rules: { practice }, ventGroups, cleaning }: PlantModel): boolean {
+  const isSet = (limit: number | null | undefined) => (limit ?? null) !== null;
+  return (
+    isSet(practice?.greatestRunningMin) ||
+    isSet(practice?.greatestStandingDirtyMin) ||
+    ventGroups.some((group) => isSet(group.leastHeaderBarG)) ||
+    cleaning.some((rule) => rule.kind === 'allergen')
+  );
 }
 
 /** Activities named by what is newly broken: a hard limit, or a matter of time that a move taken back has led to. */

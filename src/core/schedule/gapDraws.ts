@@ -141,5 +141,5 @@ function warmUp({ run, unitId, mode, start }: RunGap, phases: readonly Phase[]):
 }
 
 /** How long before the run a warm-up begins. [min] */
-export const warmUpMinutes = (phases: readonly Phase[]): number =>
+const warmUpMinutes = (phases: readonly Phase[]): number =>
   phases.reduce((end, phase) => Math.max(end, phase.offsetMin + phase.minutes), 0);

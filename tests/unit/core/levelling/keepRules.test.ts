@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { evaluateWeek, withPlacements } from '@/core/pipeline';
 import type { Activity } from '@/core/plant/activity';
-import type { PracticeLimits } from '@/core/plant/plant';
+import type { CleaningRule, PracticeLimits } from '@/core/plant/plant';
 import { levelWeek } from '@/solver/levelWeek';
 import { activity, capacity, flatMode, plant, unit, week } from '../../../support/builders';
 
@@ -64,5 +64,40 @@ describe('a rule that the search does not price', () => {
     const { moves, breaches } = levelled({ greatestStandingDirtyMin: 100 });
     expect(moves).toEqual([['free', 2060]]);
     expect(breaches.map(({ code }) => code)).toEqual(['standingDirty', 'overLimit']);
+  });
+});
+
+describe('allergens of runs further back', () => {
+  const rinse = { unitKind: 'kettle', minutes: 10, kind: 'rinse', phases: [], uses: [] } as const;
+  const cleaning = (kind: CleaningRule['kind']): CleaningRule[] => [
+    { ...rinse, fromFamilyId: 'nut', toFamilyId: 'plain' },
+    { ...rinse, fromFamilyId: 'plain', toFamilyId: 'nutFree' },
+    { ...rinse, fromFamilyId: 'nut', toFamilyId: 'nutFree', minutes: 90, kind },
+  ];
+  // Only between the run with nuts and the one free of them finds `plain` a time without `other`: with 70 min to clean.
+  const plain = run('plain', 'kettle2', 100, {
+    familyId: 'plain',
+    modes: ['kettle1', 'kettle2'].map((id) => flatMode(id, 60, 600)),
+    earliestStart: 0,
+    latestStart: 100,
+  });
+  const fixed = { fixing: 'fixed' } as const;
+  const runs = [
+    run('nut', 'kettle1', 0, { ...fixed, familyId: 'nut' }),
+    plain,
+    run('nutFree', 'kettle1', 200, { ...fixed, familyId: 'nutFree' }),
+    run('taken', 'kettle2', 0, { ...fixed, familyId: null, modes: [flatMode('kettle2', 100, 0)] }),
+    run('other', 'kettle3', 130, fixed),
+  ];
+  const movesOf = (kind: CleaningRule['kind']) => {
+    const kettles = plant({ units: KETTLES.map((id) => unit(id, { kind: 'kettle' })), cleaning: cleaning(kind) });
+    const source = week({ plant: kettles, capacities: [capacity('main', 1000)], activities: runs });
+    const { proposal, withheld } = levelWeek(source, { budget: { iterations: 400 } }, { now: undefined });
+    return [withheld, ...proposal.moves.map(({ activityId, to }) => [activityId, to.unitId, to.start])];
+  };
+
+  it('keep a run out from between that would leave a rinse where an allergen clean is due', () => {
+    expect(movesOf('wash')).toEqual([false, ['plain', 'kettle1', 70]]);
+    expect(movesOf('allergen')).toEqual([false]);
   });
 });
