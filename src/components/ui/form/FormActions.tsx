@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { Button } from '../Button';
 import { Notice } from '../Notice';
+import { useHydrated } from '../useHydrated';
 import { useUnits } from '../units';
 import type { SaveState } from './useSave';
 
@@ -19,6 +20,7 @@ interface Props {
 export function FormActions(props: Props) {
   const { state, save = 'Save', saved = 'Saved.', onCancel, cancel = 'Leave it', disabled = false, children } = props;
   const units = useUnits();
+  const isReady = useHydrated();
   return (
     <div className="mt-3 flex flex-wrap items-start justify-end gap-x-4 gap-y-3 border-t border-rule pt-4">
       <div className="min-h-9 min-w-40 flex-1" aria-live="polite">
@@ -32,7 +34,7 @@ export function FormActions(props: Props) {
       <div className="flex flex-wrap justify-end gap-2">
         {children}
         {onCancel ? <Button onClick={onCancel}>{cancel}</Button> : null}
-        <Button type="submit" look="main" busy={state.kind === 'saving'} disabled={disabled}>
+        <Button type="submit" look="main" busy={state.kind === 'saving'} disabled={disabled || !isReady}>
           {save}
         </Button>
       </div>
