@@ -1,4 +1,5 @@
 import { memo, useMemo } from 'react';
+import type { Carried } from '../../core/header/carry';
 import type { HeaderJudgement } from '../../core/header/judgement';
 import type { Header, HeaderCapacity } from '../../core/plant/plant';
 import { toMinutes } from '../../core/time/stepFunction';
@@ -82,6 +83,7 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
               {words.figure}
             </p>
             <p className="text-2xs leading-4 text-ink-muted md:pr-9">{words.line}</p>
+            {shown.carried ? <CarriedWords carried={shown.carried} /> : null}
             <Marks {...{ strip, topKgPerH }} />
           </>
         ) : null}
@@ -110,6 +112,14 @@ function limitOf(judgement: HeaderJudgement, header: Header): Float64Array | nul
   if (judgement.limitKgPerH) return judgement.limitKgPerH;
   if (header.feed.kind !== 'letdown') return null;
   return new Float64Array(judgement.loadKgPerH.length).fill(header.feed.greatestKgPerH);
+}
+
+/** What accumulators give here at most: drawn in the strip on top of what is left to the boilers. */
+function CarriedWords({ carried }: { readonly carried: Carried }) {
+  const units = useUnits();
+  const most = useMemo(() => greatestOf(carried.dischargeKgPerH), [carried]);
+  const words = most > 0 ? `accumulator carries up to ${units.rate(most)}` : 'accumulator stands by';
+  return <p className="text-2xs leading-4 text-room">{words}</p>;
 }
 
 function stateText(header: Header, units: Units): string {

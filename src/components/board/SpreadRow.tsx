@@ -42,7 +42,7 @@ export const SpreadRow = memo(function SpreadRow(props: Props) {
         ) : (
           <h2 className="text-xs">Early and late starts</h2>
         )}
-        {on && control.known ? <Head {...{ header, control, spread, clock, nowMin, onGo }} /> : null}
+        {on && control.known ? <Head {...{ header, main, control, spread, clock, nowMin, onGo }} /> : null}
       </div>
       <div className="board-track" style={{ width: scale.widthPx }}>
         {on && spread?.overChance ? (
@@ -82,11 +82,11 @@ function Words({ control, spread }: { readonly control: SpreadControl; readonly 
   return spread ? 'not judged: no steam limit is set' : `working out ${SAMPLES} weeks…`;
 }
 
-interface HeadProps extends Pick<Props, 'header' | 'control' | 'clock' | 'nowMin' | 'onGo'> {
+interface HeadProps extends Pick<Props, 'header' | 'main' | 'control' | 'clock' | 'nowMin' | 'onGo'> {
   readonly spread: SampledSpread | null;
 }
 
-function Head({ header, control, spread, clock, nowMin, onGo }: HeadProps) {
+function Head({ header, main, control, spread, clock, nowMin, onGo }: HeadProps) {
   const { confidence, choose } = control;
   const from = nowMin >= 0 && nowMin < (spread?.confidentKgPerH.length ?? 0) ? Math.floor(nowMin) : 0;
   const greatest = useMemo(() => (spread?.overChance ? greatestChance(spread.overChance, from) : null), [spread, from]);

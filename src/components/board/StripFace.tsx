@@ -80,6 +80,15 @@ function Drawing({ strip, scale, load, before, base, limit, carrying, spread, ca
       marks: rateMarks(topKgPerH, units).map((mark) => yOfRate(s, mark)),
     };
   }, [pxPerMin, topKgPerH, heightPx, base, limit, scale.horizonMin, units]);
+  const drawn = useMemo(() => {
+    const s = { pxPerMin, topKgPerH, heightPx };
+    const v = { from: 0, to: scale.horizonMin };
+    return {
+      area: areaPath(load, v, s),
+      line: linePath(load, v, s),
+      over: limit ? betweenPath(load, limit, v, s) : '',
+    };
+  }, [pxPerMin, topKgPerH, heightPx, load, limit, scale.horizonMin]);
   return (
     <svg
       width={scale.widthPx}
@@ -95,10 +104,10 @@ function Drawing({ strip, scale, load, before, base, limit, carrying, spread, ca
       ))}
       {spread ? <Confident {...{ spread, load, view, strip }} /> : null}
       {carried ? <CarriedFill {...{ carried, load, view, strip }} /> : null}
-      <path d={areaPath(load, view, strip)} className="fill-steam" fillOpacity={0.55} />
+      <path d={drawn.area} className="fill-steam" fillOpacity={0.55} />
       <path d={still.base} className="fill-steam" />
-      {limit ? <path d={betweenPath(load, limit, view, strip)} fill="url(#board-hatch-over)" /> : null}
-      <path d={linePath(load, view, strip)} className="fill-none stroke-steam" strokeWidth={1} />
+      <path d={drawn.over} fill="url(#board-hatch-over)" />
+      <path d={drawn.line} className="fill-none stroke-steam" strokeWidth={1} />
       {before ? (
         <path
           d={linePath(before, view, strip)}
