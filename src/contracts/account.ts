@@ -10,6 +10,14 @@ export type SignInRequest = z.infer<typeof signInRequestSchema>;
 export const ROLES = ['planner', 'utilitiesLead', 'lineSupervisor', 'qualityLead', 'administrator'] as const;
 export type Role = (typeof ROLES)[number];
 
+export const ROLE_NAMES: Readonly<Record<Role, string>> = {
+  planner: 'planner',
+  utilitiesLead: 'utilities lead',
+  lineSupervisor: 'line supervisor',
+  qualityLead: 'quality lead',
+  administrator: 'administrator',
+};
+
 /** POST /api/session/plant: work at another of one's plants. */
 export const plantRequestSchema = z.object({ plantId: z.string().min(1).max(80) });
 

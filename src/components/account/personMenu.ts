@@ -24,11 +24,35 @@ async function workAt(plantId: string): Promise<void> {
   else location.reload();
 }
 
-async function signOut(): Promise<void> {
+async function signOut(to: string): Promise<void> {
   try {
     await fetch('/api/session', { method: 'DELETE', headers: { accept: 'application/json' } });
   } finally {
-    location.assign('/sign-in');
+    location.assign(to);
+  }
+}
+
+const IDLE_MS = 15 * 60_000;
+const TELL_EVERY_MS = 60_000;
+
+/** Keeps a tablet's session open while hands are on it, and signs out when none has been for a quarter of an hour. */
+function followTouch(): void {
+  let told = Date.now();
+  let idle = setTimeout(leave, IDLE_MS);
+  function leave(): void {
+    void signOut('/tablet');
+  }
+  const touched = (): void => {
+    clearTimeout(idle);
+    idle = setTimeout(leave, IDLE_MS);
+    if (Date.now() - told < TELL_EVERY_MS) return;
+    told = Date.now();
+    void post('/api/tablet/touch', {})
+      .then((answer) => (answer.status === 401 ? location.assign('/tablet') : undefined))
+      .catch(() => undefined);
+  };
+  for (const kind of ['pointerdown', 'keydown', 'scroll'] as const) {
+    window.addEventListener(kind, touched, { passive: true, capture: true });
   }
 }
 
@@ -45,5 +69,9 @@ export function followPersonMenu(): void {
   menu?.querySelectorAll<HTMLElement>('[data-plant]').forEach((button) => {
     button.addEventListener('click', () => void workAt(button.dataset.plant ?? ''));
   });
-  menu?.querySelector('[data-sign-out]')?.addEventListener('click', () => void signOut());
+  const isTablet = menu?.dataset.tablet !== undefined;
+  menu
+    ?.querySelector('[data-sign-out]')
+    ?.addEventListener('click', () => void signOut(isTablet ? '/tablet' : '/sign-in'));
+  if (isTablet) followTouch();
 }

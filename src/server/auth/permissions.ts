@@ -1,4 +1,4 @@
-import { ROLES, type Role } from '@/contracts/account';
+import { ROLE_NAMES, ROLES, type Role } from '@/contracts/account';
 import { fail, ok, problem, type Result } from '@/core/result';
 import type { Actor } from './actor';
 
@@ -33,13 +33,7 @@ export const PERMISSIONS = {
 
 export type Permission = keyof typeof PERMISSIONS;
 
-export const ROLE_NAMES: Readonly<Record<Role, string>> = {
-  planner: 'planner',
-  utilitiesLead: 'utilities lead',
-  lineSupervisor: 'line supervisor',
-  qualityLead: 'quality lead',
-  administrator: 'administrator',
-};
+export { ROLE_NAMES };
 
 /** What a session by badge is not for, whoever holds it: the account itself. */
 const NOT_AT_TABLETS: ReadonlySet<Permission> = new Set(['account.own', 'settings.own']);

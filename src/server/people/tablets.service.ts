@@ -2,9 +2,10 @@ import { and, eq, isNull } from 'drizzle-orm';
 import type { EnrolRequest, PeopleDto } from '@/contracts/people';
 import { fail, ok, type Result } from '@/core/result';
 import { db } from '@/db/client';
-import { sessions, tablets } from '@/db/schema/index';
+import { plants, sessions, tablets } from '@/db/schema/index';
 import type { Authorized } from '../auth/permissions';
 import { endSession } from '../auth/session';
+import { tabletByToken } from '../auth/tabletSession';
 import { newToken } from '../auth/token';
 import { now } from '../clock';
 import { notify, notifySessionEnd } from '../events/notify';
@@ -16,6 +17,14 @@ import { linesOf } from './plantPeople.repo';
 import { currentWeek } from '../weeks/currentWeek';
 
 type Manager = Authorized<'people.manage'>;
+
+/** The tablet that a device's cookie names, for its keypad; null where it is none or no longer. */
+export async function tabletAsked(token: string | null) {
+  const tablet = await tabletByToken(token);
+  if (!tablet) return null;
+  const [plant] = await db.select({ name: plants.name }).from(plants).where(eq(plants.id, tablet.plantId));
+  return { name: tablet.name, plantName: plant?.name ?? '' };
+}
 
 /** The lines that a tablet can hang at. */
 export const tabletLines = (actor: Authorized<'tablets.manage'>) => linesOf(db, actor.plantId);
