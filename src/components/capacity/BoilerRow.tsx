@@ -84,7 +84,9 @@ export function BoilerRow(props: Props) {
               <text
                 x={x + 8}
                 y={scale.height / 2 + 4}
-                className={`text-2xs font-medium ${part.value > 0.55 ? 'fill-on-room' : 'fill-ink'}`}
+                className={`text-2xs font-medium ${part.value > 0.55 ? 'fill-on-room' : 'fill-ink'} ${part.isComingUp ? 'stroke-surface' : ''}`}
+                strokeWidth={part.isComingUp ? 4 : 0}
+                paintOrder="stroke"
               >
                 {partText(part)}
               </text>

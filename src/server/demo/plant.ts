@@ -54,6 +54,7 @@ export const DEMO_VENT_GROUPS: readonly VentGroup[] = [
     steamOnMinutes: 1,
     marginMinutes: 0,
     source: STUDY,
+    studyGreatestLoadKgPerH: 3_600,
   },
   {
     id: 'demo-vents-south',
@@ -63,6 +64,7 @@ export const DEMO_VENT_GROUPS: readonly VentGroup[] = [
     steamOnMinutes: 1,
     marginMinutes: 0,
     source: STUDY,
+    studyGreatestLoadKgPerH: 3_400,
   },
 ];
 
