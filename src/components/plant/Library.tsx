@@ -1,10 +1,11 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useEffect, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import type { PlantLibraryDto, Thing, ThingKind } from '../../contracts/plantLibrary';
 import { api } from '../query/api';
 import { usePlantEvents } from '../query/usePlantEvents';
 import { Button } from '../ui/Button';
 import { Notice } from '../ui/Notice';
+import { LeaveDialog } from './LeaveDialog';
 import { LISTINGS, type Listing } from './listing';
 import { wordsOf } from './kinds';
 import { ThingForm } from './ThingForm';
@@ -48,6 +49,9 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
   const [selected, setSelected] = useState<string | null>(idInAddress);
   const [serial, setSerial] = useState(0);
   const [said, setSaid] = useState<string | null>(null);
+  const typed = useRef(false);
+  const noteTyped = useCallback((isTyped: boolean) => void (typed.current = isTyped), []);
+  const [asked, setAsked] = useState<{ readonly id: string | null } | null>(null);
   const panel = useRef<HTMLDivElement>(null);
   const listing = LISTINGS[kind] as unknown as Listing<ThingKind>;
   const things = library.things[kind] as readonly Thing<ThingKind>[];
@@ -60,10 +64,12 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
     if (selected !== null && isBelow) panel.current?.scrollIntoView({ block: 'start' });
   }, [selected]);
 
-  const open = (id: string | null): void => {
+  const show = (id: string | null): void => {
     setSaid(null);
     setSelected(id);
+    typed.current = false;
   };
+  const open = (id: string | null): void => (typed.current && id !== selected ? setAsked({ id }) : show(id));
   return (
     <div
       className={`mt-5 grid items-start gap-8 ${isOpen ? 'lg:grid-cols-[minmax(0,17rem)_minmax(0,1fr)] 2xl:grid-cols-[minmax(0,24rem)_minmax(0,1fr)]' : ''}`}
@@ -90,17 +96,26 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
             {...{ kind, library, thing, canEdit }}
             onLeave={() => open(null)}
             onChanged={set}
+            onTyped={noteTyped}
             onRenew={() => setSerial(serial + 1)}
             onSaved={(saved) => {
               set(saved.library);
               const now = (saved.library.things[kind] as readonly Thing<ThingKind>[]).find(({ id }) => id === saved.id);
-              open(saved.id);
+              show(saved.id);
               setSaid(`${now ? listing.name(now.values) : 'It'} is saved.`);
               setSerial(serial + 1);
             }}
           />
         </div>
       ) : null}
+      <LeaveDialog
+        open={asked !== null}
+        onStay={() => setAsked(null)}
+        onLeave={() => {
+          setAsked(null);
+          show(asked?.id ?? null);
+        }}
+      />
     </div>
   );
 }

@@ -22,13 +22,13 @@ export function StepsEditor({ control, name, weekStartsOn, unit, typed }: Props)
   const { fields, append, remove } = useFieldArray({ control, name: name as never });
   const { fromHour, value } = RANGES.sharedLimits;
   return (
-    <div className="sm:col-span-2">
+    <div className="min-w-0 sm:col-span-2">
       <ol>
         {fields.map((field, i) => {
           const hour = typed[i]?.fromHour;
           const isHour = typeof hour === 'number' && Number.isInteger(hour) && hour >= 0 && hour < 168;
           return (
-            <li key={field.id} className="grid grid-cols-[1fr_1fr_auto] items-start gap-x-3">
+            <li key={field.id} className="grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] items-start gap-x-3">
               <NumberField
                 control={control}
                 name={`${name}.${i}.fromHour`}

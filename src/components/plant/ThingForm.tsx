@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import type { Control } from 'react-hook-form';
 import { thingSchema } from '../../contracts/plantChecks';
 import type { PlantLibraryDto, SavedThingDto, Thing, ThingKind } from '../../contracts/plantLibrary';
@@ -25,6 +25,8 @@ export interface ThingFormProps {
   readonly onSaved: (saved: SavedThingDto) => void;
   readonly onChanged: (library: PlantLibraryDto) => void;
   readonly onLeave: () => void;
+  /** True while something typed is not saved. */
+  readonly onTyped: (isTyped: boolean) => void;
   /** Fills the form anew with what is there now. */
   readonly onRenew: () => void;
 }
@@ -34,7 +36,7 @@ const addressOf = (kind: ThingKind, id: string | null): string =>
 
 /** Creates or edits one thing; beside it what follows from it, as it is typed. */
 export function ThingForm(props: ThingFormProps) {
-  const { kind, library, thing, canEdit, onSaved } = props;
+  const { kind, library, thing, canEdit, onSaved, onTyped } = props;
   const [filled] = useState<Raw>(() => (thing ? (thing.values as Raw) : blankOf(kind)));
   const id = thing?.id ?? null;
   const schema = useMemo(() => thingSchema(kind, { library, id }), [kind, library, id]);
@@ -50,6 +52,8 @@ export function ThingForm(props: ThingFormProps) {
       }),
     onSaved,
   );
+  const { isDirty } = form.formState;
+  useEffect(() => onTyped(isDirty), [isDirty, onTyped]);
   const control = form.control as unknown as Control<Record<string, unknown>, unknown, unknown>;
   const isBehind = thing !== null && JSON.stringify(thing.values) !== JSON.stringify(filled);
   const listing = LISTINGS[kind] as unknown as Listing<ThingKind>;

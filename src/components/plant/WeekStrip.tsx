@@ -24,7 +24,7 @@ export function WeekStrip({ steps, weekStartsOn, text, title }: Props) {
         <span>at most {text(top)}</span>
       </figcaption>
       <svg
-        viewBox={`0 0 ${WIDTH} ${HEIGHT + 14}`}
+        viewBox={`0 0 ${WIDTH} ${HEIGHT + 1}`}
         className="mt-1 w-full"
         role="img"
         aria-label={`${title}: ${said || 'nothing'}`}
@@ -42,14 +42,14 @@ export function WeekStrip({ steps, weekStartsOn, text, title }: Props) {
         ))}
         <line x1={0} x2={WIDTH} y1={HEIGHT} y2={HEIGHT} className="stroke-edge" strokeWidth={1} />
         {daysFrom(weekStartsOn).map((day, i) => (
-          <g key={day}>
-            <line x1={i * 48} x2={i * 48} y1={0} y2={HEIGHT} className="stroke-rule" strokeWidth={1} />
-            <text x={i * 48 + 2} y={HEIGHT + 11} className="fill-ink-muted text-[9px]">
-              {day}
-            </text>
-          </g>
+          <line key={day} x1={i * 48} x2={i * 48} y1={0} y2={HEIGHT} className="stroke-rule" strokeWidth={1} />
         ))}
       </svg>
+      <div className="grid grid-cols-7 text-2xs text-ink-muted" aria-hidden="true">
+        {daysFrom(weekStartsOn).map((day) => (
+          <span key={day}>{day}</span>
+        ))}
+      </div>
     </figure>
   );
 }

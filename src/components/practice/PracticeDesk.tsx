@@ -97,6 +97,7 @@ function Practice({ first, canEnter, canWithdraw, whoMay }: Props) {
             <h2 id={`rules-${state}`} className="text-lg">
               {TITLES[state]}
             </h2>
+            {state === 'inForce' ? <Unruled {...{ practice }} /> : null}
             {rules.length === 0 ? <p className="mt-2 text-md text-ink-muted">No rule is in force yet.</p> : null}
             <ul className={rules.length === 0 ? '' : 'mt-2 divide-y divide-rule border-y border-rule'}>
               {rules.map((rule) => (
@@ -108,6 +109,18 @@ function Practice({ first, canEnter, canWithdraw, whoMay }: Props) {
       })}
     </div>
   );
+}
+
+/** Vent groups for which no rule is in force. */
+function Unruled({ practice }: { readonly practice: PracticeDto }) {
+  const ruled = new Set(byKind(practice.rules, 'inForce').map(({ ventGroup }) => ventGroup?.id));
+  return practice.ventGroups
+    .filter(({ id }) => !ruled.has(id))
+    .map(({ id, name, numbers }) => (
+      <Notice key={id} look="caution" className="mt-3 max-w-2xl" title={`${name}: no rule is in force`}>
+        Vents at once: {numbers.ventsAtOnce}; steam ons at once: {numbers.steamOnsAtOnce}. Source: {numbers.source}.
+      </Notice>
+    ));
 }
 
 /** Documents that allow a longer wait than the plant's rule. */

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { thingFaults, thingSchema, type CheckContext } from '@/contracts/plantChecks';
+import { thingFaults, thingSchema } from '@/contracts/plantChecks';
+import type { CheckContext } from '@/contracts/plantChecks/context';
 import { enterPracticeSchema } from '@/contracts/practice';
 import type { ThingKind, ThingValues } from '@/contracts/plantLibrary';
 import { boiler, header, library } from '../../support/plantLibrary';
@@ -14,7 +15,7 @@ const fieldsOf = (kind: ThingKind, values: object, context?: CheckContext) =>
 
 describe('a header', () => {
   it('is taken wet, dry and superheated, on boilers and behind a letdown', () => {
-    const letdown = { feedKind: 'letdown', feedFromHeaderId: 'main', greatestKgPerH: 900 };
+    const letdown = { feedKind: 'letdown', feedFromHeaderId: 'main', greatestKgPerH: 900 } as const;
     expect(faultsOf('headers', header({ name: 'New' }))).toEqual([]);
     expect(faultsOf('headers', header({ name: 'New', dryness: null, superheatK: 20 }))).toEqual([]);
     expect(faultsOf('headers', header({ name: 'New', pressureBarG: 3, ...letdown }))).toEqual([]);
