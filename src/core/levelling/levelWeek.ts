@@ -63,11 +63,11 @@ const DEFAULT_MS = 15_000;
  */
 export function levelWeek(week: Week, options: LevellingOptions, env: LevellingEnv): LevellingResult {
   const problem = toProblem(week, options);
-  const solved = solveProblem(problem, fullOptions(options), env);
-  const kept = keepRules(week, problem, solved.plan);
+  const { plan: found, ...solved } = solveProblem(problem, fullOptions(options), env);
+  const kept = keepRules(week, problem, found);
   const worse = isWorse(judge(problem, kept), judge(problem, planOf(problem)));
   const plan = worse ? planOf(problem) : kept;
-  return { ...solved, plan, proposal: toProposal(week, problem, plan, env.solveLp) };
+  return { ...solved, proposal: toProposal(week, problem, plan, env.solveLp) };
 }
 
 export interface Solved {
