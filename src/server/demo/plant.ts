@@ -40,7 +40,7 @@ export const DEMO_HEADERS: readonly Header[] = [
     // The main header's steam after the valve at constant enthalpy, to three digits.
     dryness: 0.995,
     superheatK: null,
-    feed: { kind: 'letdown', fromHeaderId: MAIN_HEADER, greatestKgPerH: 1_600 },
+    feed: { kind: 'letdown', fromHeaderId: MAIN_HEADER, greatestKgPerH: 1_600, leastKgPerH: 80 },
   },
 ];
 
