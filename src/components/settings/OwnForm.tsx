@@ -2,6 +2,7 @@ import { ownSettingsSchema, type OwnSettings, type OwnSettingsDto } from '@/cont
 import type { UnitSystem } from '@/core/quantity/display';
 import { keepTheme } from '../account/personMenu';
 import { api } from '../query/api';
+import { Form } from '../ui/form/Form';
 import { FormActions } from '../ui/form/FormActions';
 import { SelectInput } from '../ui/form/TextInput';
 import { useSave } from '../ui/form/useSave';
@@ -26,7 +27,7 @@ export function OwnForm({ own, plantUnits, onSaved }: Props) {
     onSaved(saved.own);
   });
   return (
-    <form onSubmit={submit} noValidate>
+    <Form onSubmit={submit}>
       <SelectInput
         control={form.control}
         name="units"
@@ -44,6 +45,6 @@ export function OwnForm({ own, plantUnits, onSaved }: Props) {
         hint="A device on which you chose otherwise keeps its choice."
       />
       <FormActions state={state} save="Keep these" saved="Kept." />
-    </form>
+    </Form>
   );
 }

@@ -2,6 +2,7 @@ import { useWatch } from 'react-hook-form';
 import { PLANT_RANGES, plantSettingsSchema, type PlantSettings, type PlantSettingsDto } from '@/contracts/settings';
 import { api } from '../query/api';
 import { Button } from '../ui/Button';
+import { Form } from '../ui/form/Form';
 import { FormActions } from '../ui/form/FormActions';
 import { NumberField } from '../ui/form/NumberField';
 import { SelectInput, TextInput } from '../ui/form/TextInput';
@@ -33,7 +34,7 @@ export function PlantForm({ plant, onSaved }: Props) {
   const { state, submit, clear } = useSave(form, save, take);
   const standing = standingOf(state);
   return (
-    <form onSubmit={submit} noValidate>
+    <Form onSubmit={submit}>
       <Place form={form} timeZone={plant.timeZone} />
       <Judging form={form} />
       <Fuel form={form} />
@@ -49,7 +50,7 @@ export function PlantForm({ plant, onSaved }: Props) {
           </Button>
         ) : null}
       </FormActions>
-    </form>
+    </Form>
   );
 }
 
