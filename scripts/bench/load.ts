@@ -1,5 +1,5 @@
 import { overLimit } from '@/core/header/over';
-import { capacityMinutes } from '@/core/header/judgement';
+import { capacityMinutes } from '@/core/header/capacityMinutes';
 import { loadOf } from '@/core/header/loadCurve';
 import { createEvaluator, evaluateWeek } from '@/core/pipeline';
 import type { Activity } from '@/core/plant/activity';

@@ -1,5 +1,5 @@
 import type { BoilerDto, CapacityDto } from '@/contracts/capacity';
-import { capacityMinutes } from '@/core/header/judgement';
+import { capacityMinutes } from '@/core/header/capacityMinutes';
 import { overLimit, type OverSummary } from '@/core/header/over';
 import { firesOf, readyShare } from '@/core/house/readiness';
 import type { HeaderCapacity } from '@/core/plant/plant';

@@ -7,8 +7,6 @@ import type { HeaderFlows } from './settle';
 import { leastSpare, loadFactor, loadKg, peakLoad, type LoadFactor, type RateAt } from './spare';
 import { steepSteps, type SteepStep } from './steps';
 
-export { capacityMinutes } from './capacityMinutes';
-
 /** A header over the week: load against limit. Arrays are per minute [kg/h] and to be read only. */
 export interface HeaderJudgement {
   readonly headerId: string;

@@ -1,6 +1,6 @@
 import { addableKgPerH, placedPhases } from '../../demand/activityLoad';
 import type { Activity } from '../../plant/activity';
-import { capacityMinutes } from '../judgement';
+import { capacityMinutes } from '../capacityMinutes';
 import { loadOf, type LoadSource } from '../loadCurve';
 import type { StartSpread } from './startSpread';
 
