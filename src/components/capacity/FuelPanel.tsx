@@ -14,28 +14,34 @@ interface Props {
 interface Row {
   readonly name: string;
   readonly week: string;
-  readonly perTonne: string;
+  readonly perProduct: string;
+}
+
+/** What figures of product are told by: a tonne, or a thousand pounds. [kg] */
+function productUnit(units: Units): { readonly kg: number; readonly name: string } {
+  const isSi = units.system === 'si';
+  return isSi
+    ? { kg: 1_000, name: 'per tonne of product' }
+    : { kg: units.inside('mass', 1_000), name: 'per 1 000 lb of product' };
 }
 
 function rowsOf(fuel: WeekFuel, dto: CapacityDto, units: Units): Row[] {
-  const tonnes = dto.placedKg / 1_000;
-  const row = (name: string, value: number, text: (value: number, digits?: number) => string): Row => {
-    return { name, week: text(value), perTonne: tonnes > 0 ? text(value / tonnes, 1) : '' };
+  const products = dto.placedKg / productUnit(units).kg;
+  const row = (name: string, value: number, text: (value: number) => string, each = text): Row => {
+    return { name, week: text(value), perProduct: products > 0 ? each(value / products) : '' };
   };
+  const mass = (kg: number) => units.text('mass', kg);
   const rows = [
-    row('Steam', fuel.steamKg / 1_000, (v, digits) =>
-      units.text('largeMass', v, units.system === 'si' ? (digits ?? 1) + (digits ? 1 : 0) : 0),
-    ),
-    row('Fuel', fuel.fuelKWh, (v, digits) => units.text('energy', v, units.system === 'si' ? 0 : (digits ?? 0) * 2)),
-    row('Carbon dioxide', fuel.co2Kg, (v) => units.text('mass', v)),
+    row('Steam', fuel.steamKg, (kg) => units.text('largeMass', kg / 1_000), mass),
+    row('Fuel', fuel.fuelKWh, (kWh) => units.text('energy', kWh)),
+    row('Carbon dioxide', fuel.co2Kg, (kg) => units.text('largeMass', kg / 1_000), mass),
   ];
   const { cost } = fuel;
-  return cost === null
-    ? rows
-    : [...rows, row('Cost', cost, (v, digits) => `${dto.currency}\u00a0${money(v, digits ? 2 : 0)}`)];
+  const money = (digits: number) => (value: number) => `${dto.currency}\u00a0${grouped(value, digits)}`;
+  return cost === null ? rows : [...rows, row('Cost', cost, money(0), money(2))];
 }
 
-function money(value: number, digits: number): string {
+function grouped(value: number, digits: number): string {
   return value.toFixed(digits).replace(/\B(?=(\d{3})+(?!\d))/g, '\u2009');
 }
 
@@ -49,7 +55,10 @@ export function FuelPanel({ fuel, dto }: Props) {
       </h2>
       {fuel.ok ? (
         <>
-          <FuelTable rows={rowsOf(fuel.value, dto, units)} hasProduct={dto.placedKg > 0} />
+          <FuelTable
+            rows={rowsOf(fuel.value, dto, units)}
+            product={dto.placedKg > 0 ? productUnit(units).name : null}
+          />
           <p className="mt-2 text-xs text-ink-muted">
             {dto.fuelPricePerKWh === null ? 'No fuel price is set, so no cost is shown. ' : ''}
             {fuel.value.unverified.map((name) => `The factor of ${name.toLowerCase()} is from memory: check it. `)}
@@ -69,7 +78,8 @@ export function FuelPanel({ fuel, dto }: Props) {
   );
 }
 
-function FuelTable({ rows, hasProduct }: { readonly rows: readonly Row[]; readonly hasProduct: boolean }) {
+/** `product` null: nothing is placed. */
+function FuelTable({ rows, product }: { readonly rows: readonly Row[]; readonly product: string | null }) {
   return (
     <table className="w-full border-y border-rule text-sm">
       <thead className="text-left text-xs text-ink-muted">
@@ -78,7 +88,7 @@ function FuelTable({ rows, hasProduct }: { readonly rows: readonly Row[]; readon
             <span className="sr-only">What</span>
           </th>
           <th className="py-1.5 text-right font-normal">the week</th>
-          {hasProduct ? <th className="py-1.5 text-right font-normal">per tonne of product placed</th> : null}
+          {product ? <th className="py-1.5 text-right font-normal">{product} placed</th> : null}
         </tr>
       </thead>
       <tbody className="divide-y divide-rule border-t border-rule">
@@ -86,7 +96,7 @@ function FuelTable({ rows, hasProduct }: { readonly rows: readonly Row[]; readon
           <tr key={row.name}>
             <th className="py-1.5 text-left font-medium">{row.name}</th>
             <td className="py-1.5 text-right">{row.week}</td>
-            {hasProduct ? <td className="py-1.5 text-right text-ink-muted">{row.perTonne}</td> : null}
+            {product ? <td className="py-1.5 text-right text-ink-muted">{row.perProduct}</td> : null}
           </tr>
         ))}
       </tbody>
