@@ -35,7 +35,9 @@ export function ReworkNotice({ weekStart, readAt, mayEdit }: Props) {
   return (
     <div className="px-5 py-4">
       <Notice
-        title={activities.length > 0 ? `${runs} planned with other duties` : 'The library can’t be worked out'}
+        title={
+          activities.length > 0 ? `${runs} planned with an older duty or route` : 'The library can’t be worked out'
+        }
         actions={
           activities.length > 0 ? (
             <>

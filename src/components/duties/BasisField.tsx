@@ -53,7 +53,7 @@ export function BasisField<Values extends FieldValues, Output>(props: Props<Valu
   return (
     <fieldset className="col-span-full rounded-md border border-rule px-4 pt-3 pb-1">
       <legend className="label px-1">{title}</legend>
-      <div className="grid gap-x-4 sm:grid-cols-2">
+      <div className="grid grid-cols-1 gap-x-4 gap-y-1.5 sm:grid-cols-2">
         <SelectField label="From" value={basis.kind} onChange={(event) => put(blankBasis(event.target.value))}>
           {KINDS.map(({ value, label }) => (
             <option key={value} value={value}>
@@ -64,7 +64,7 @@ export function BasisField<Values extends FieldValues, Output>(props: Props<Valu
         {products.length > 0 ? <TakeOver products={products} onTake={put} /> : null}
       </div>
       {basis.kind === 'composition' ? (
-        <div className="grid grid-cols-2 gap-x-4 sm:grid-cols-3">
+        <div className="grid grid-cols-2 gap-x-4 gap-y-1 sm:grid-cols-3">
           {COMPONENTS.map((part) => (
             <NumberField
               key={part}
@@ -86,7 +86,7 @@ export function BasisField<Values extends FieldValues, Output>(props: Props<Valu
         />
       ) : null}
       {basis.kind === 'given' ? (
-        <div className="grid gap-x-4 sm:grid-cols-2">
+        <div className="grid grid-cols-1 gap-x-4 gap-y-1.5 sm:grid-cols-2">
           <NumberField
             {...{ control, name: at('kJPerKgK'), label: GIVEN_SPECIFIC_HEAT.name, unit: GIVEN_SPECIFIC_HEAT.unit }}
             min={GIVEN_SPECIFIC_HEAT.min}

@@ -29,9 +29,13 @@ export function DutyFields(props: Props) {
   return DUTY_GROUPS[props.model].map((group) => <Group key={group.title} {...props} group={group} />);
 }
 
+/** Where the contents stand before the process: asked for with the load, and held against the process data too. */
+const STARTS = ['initialC', 'inC'];
+
 function Group({ group, ...props }: Props & { readonly group: DutyGroup }) {
   const inputs = useWatch({ control: props.control, name: 'duty.inputs' });
-  const isProcess = group.fields.some((field) => DUTY_PROCESS_FIELDS[props.model]?.includes(field));
+  const ofProcess = (DUTY_PROCESS_FIELDS[props.model] ?? []).filter((field) => !STARTS.includes(field));
+  const isProcess = group.fields.some((field) => ofProcess.includes(field));
   return (
     <fieldset className="border-t border-rule pt-4 pb-2">
       <legend className="sr-only">{group.title}</legend>
@@ -39,7 +43,7 @@ function Group({ group, ...props }: Props & { readonly group: DutyGroup }) {
         {group.title}
       </h2>
       {isProcess ? <ProcessCaution /> : null}
-      <div className="grid gap-x-4 sm:grid-cols-2">
+      <div className="grid grid-cols-1 gap-x-4 gap-y-1.5 sm:grid-cols-2">
         {group.fields.map((field) =>
           isIdle(props.model, field, inputs) ? null : <Input key={field} {...props} field={field} inputs={inputs} />,
         )}

@@ -35,10 +35,10 @@ export function DutyForm({ dto, saved, model, mayEdit, whoMay }: DutyFormProps) 
   const headerName = dto.headers.find(({ id }) => id === values.tryOnHeaderId)?.name ?? 'header';
   const save = useSave(form, (ready) => send(saved, ready), leave);
   return (
-    <div className="grid gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_22rem] xl:grid-cols-[minmax(0,1fr)_26rem]">
+    <div className="grid grid-cols-1 gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_22rem] xl:grid-cols-[minmax(0,1fr)_26rem]">
       <form onSubmit={save.submit} noValidate className="min-w-0">
         <fieldset disabled={!mayEdit} className="contents">
-          <div className="grid gap-x-4 sm:grid-cols-2">
+          <div className="grid grid-cols-1 gap-x-4 gap-y-1.5 sm:grid-cols-2">
             <TextInput control={control} name="name" label="Name" maxLength={120} />
             <SelectInput
               {...{

@@ -62,7 +62,7 @@ export function CleaningDialog({ pair, choices, onClose }: Props) {
   return (
     <Dialog open wide title={`After ${pair.from.name}, before ${pair.to.name}`} onClose={onClose}>
       <form onSubmit={save.submit} noValidate>
-        <div className="grid gap-x-4 sm:grid-cols-2">
+        <div className="grid grid-cols-1 gap-x-4 gap-y-1.5 sm:grid-cols-2">
           <SelectInput control={control} name="rule.kind" label="What is done" options={KINDS} />
           <NumberField {...{ control, name: 'rule.minutes', label, unit, min, max }} />
           <SelectInput

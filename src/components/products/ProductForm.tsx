@@ -31,10 +31,10 @@ export function ProductForm({ saved, families, mayEdit, whoMay }: Props) {
       : api('/api/products', { method: 'POST', body: values });
   const save = useSave(form, send, ({ id }) => window.location.assign(`/products/${id}`));
   return (
-    <div className="grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,1fr)_20rem]">
+    <div className="grid grid-cols-1 gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,1fr)_20rem]">
       <form onSubmit={save.submit} noValidate className="min-w-0">
         <fieldset disabled={!mayEdit} className="contents">
-          <div className="grid gap-x-4 sm:grid-cols-2">
+          <div className="grid grid-cols-1 gap-x-4 gap-y-1.5 sm:grid-cols-2">
             <TextInput control={control} name="name" label="Name" maxLength={120} />
             <SelectInput
               {...{ control, name: 'familyId', label: 'Family', hint: 'What is cleaned between two families follows.' }}

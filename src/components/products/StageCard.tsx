@@ -88,8 +88,8 @@ function UnitRow({ control, choices, stage, row, isOnly, onRemove }: RowProps) {
     return { control, name: `${name}.${field}` as const, label, unit: 'min', min, max };
   };
   return (
-    <li className="grid gap-x-4 pt-3 lg:grid-cols-[minmax(0,1fr)_15rem]">
-      <div className="grid gap-x-3 sm:grid-cols-6">
+    <li className="grid grid-cols-1 gap-x-4 pt-4 lg:grid-cols-[minmax(0,1fr)_15rem]">
+      <div className="grid grid-cols-1 gap-x-3 gap-y-1 sm:grid-cols-6">
         <SelectInput
           {...{ control, name: `${name}.unitId`, label: 'Unit', options: [{ value: '', label: 'choose…' }, ...units] }}
           className="sm:col-span-3"
