@@ -43,7 +43,7 @@ function Roles<Values extends FieldValues, Output>({ control }: Pick<Props<Value
             onChange={() => onChange(toggled(ROLES, held, role))}
           />
           <span>
-            <span className="font-medium first-letter:uppercase">{ROLE_NAMES[role]}</span>
+            <span className="inline-block font-medium first-letter:uppercase">{ROLE_NAMES[role]}</span>
             <span className="block text-xs text-ink-muted">{ROLE_WORK[role]}</span>
           </span>
         </label>
