@@ -21,7 +21,7 @@ export function Fold({ name, open, onToggle }: Props) {
         >
           <path d="M3 1 8 5 3 9z" />
         </svg>
-        <span className="truncate">{name}</span>
+        <span className="max-sm:line-clamp-3 sm:truncate">{name}</span>
       </button>
     </h2>
   );

@@ -77,7 +77,7 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
           <>
             {main ? <p className="text-2xs text-ink-muted max-sm:hidden">{stateText(header, units)}</p> : null}
             <p
-              className={`mt-0.5 font-semibold ${main ? 'text-lg max-lg:text-md max-sm:text-sm' : 'text-sm'} ${FIGURE_LOOKS[words.look]} ${words.look === 'over' ? '' : '!text-sm'}`}
+              className={`mt-0.5 font-semibold ${main ? 'text-lg max-lg:text-md max-sm:text-sm' : 'text-sm'} ${FIGURE_LOOKS[words.look]} ${words.look === 'over' ? '' : '!text-sm'} ${main ? '' : 'md:pr-9'}`}
               data-testid={`over-${header.id}`}
             >
               {words.figure}

@@ -94,7 +94,7 @@ function LimitStrip({ shown, scale, clock, onPoint, pointedMin }: StripProps) {
   return (
     <div className="flex border-b border-rule bg-surface" data-testid={`limit-${limit.id}`}>
       <div className="board-label !bg-surface px-4 py-1 pl-7 max-sm:px-2" style={{ minHeight: FACE_PX + 8 }}>
-        <h3 className="line-clamp-1 text-xs leading-4 font-medium">{limit.name}</h3>
+        <h3 className="text-xs max-sm:line-clamp-2 sm:truncate leading-4 font-medium">{limit.name}</h3>
         <p className={`text-xs leading-4 font-semibold ${words.isOver ? 'text-over' : 'text-room'}`}>{words.figure}</p>
         <p className="line-clamp-1 text-2xs leading-3.5 text-ink-muted" title={words.line}>
           {words.line}

@@ -33,15 +33,15 @@ export function LimitTable({ week, evaluation, clock, pointed, onGo }: Props) {
       </h2>
       <table className="mt-2 w-full text-xs" data-testid="limit-table">
         <thead>
-          <tr className="label text-left [&>th]:py-1 [&>th]:font-medium">
+          <tr className="label text-left [&>th]:py-1 [&>th]:font-medium [&>th]:whitespace-nowrap">
             <th scope="col">Limit</th>
-            <th scope="col" className="pl-3 text-right">
+            <th scope="col" className="pl-2 text-right">
               there is
             </th>
-            <th scope="col" className="pl-3 text-right whitespace-nowrap">
+            <th scope="col" className="pl-2 text-right">
               most used
             </th>
-            <th scope="col" className="pl-3">
+            <th scope="col" className="pl-2">
               at
             </th>
           </tr>
@@ -76,7 +76,7 @@ function LimitLine({ shown, clock, onGo }: { shown: ShownLimit } & Pick<Props, '
       <td className={`text-right font-medium ${over.length > 0 ? 'text-over' : ''}`}>
         {greatest ? amountText(greatest.amount) : '–'}
       </td>
-      <td className="pl-3">
+      <td className="pl-2 whitespace-nowrap">
         {greatest ? (
           <button type="button" className="link" onClick={() => onGo(greatest.minute)}>
             {clock.dayTime(greatest.minute)}

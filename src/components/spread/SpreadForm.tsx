@@ -29,6 +29,12 @@ interface Props {
 /** How early or late starts on one unit are, and from where that is known. */
 export function SpreadForm(props: Props) {
   const { unit, list, mayEdit, whoMay, onSaved } = props;
+  const [turn, setTurn] = useState(0);
+  /** Something else than what is typed stands now: the fields start from it. */
+  const startAnew = (now: UnitSpreadDto): void => {
+    setTurn(turn + 1);
+    onSaved(now);
+  };
   return (
     <section aria-labelledby="unit-spread" className="rounded-md border border-rule bg-surface p-5">
       <h2 id="unit-spread" className="text-lg font-semibold">
@@ -39,18 +45,18 @@ export function SpreadForm(props: Props) {
         <span className="text-ink-muted">{unit.source ? `, ${unit.source}` : ''}</span>
       </p>
       {mayEdit ? (
-        <Experience key={unit.seen} unit={unit} onSaved={onSaved} />
+        <Experience key={turn} unit={unit} onSaved={onSaved} onStale={startAnew} />
       ) : (
         <Notice look="caution" className="mt-3">
           {whoMay}
         </Notice>
       )}
-      <Recorded {...{ unit, list, mayEdit, onSaved }} />
+      <Recorded {...{ unit, list, mayEdit }} onSaved={startAnew} />
     </section>
   );
 }
 
-const put = (unit: UnitSpreadDto, request: SpreadRequest): Promise<UnitSpreadDto> =>
+const send = (unit: UnitSpreadDto, request: SpreadRequest): Promise<UnitSpreadDto> =>
   api<UnitSpreadDto>(`/api/units/${encodeURIComponent(unit.unitId)}/spread`, { method: 'POST', body: request });
 
 /** What the server has now, where it refused because somebody was faster. */
@@ -59,12 +65,16 @@ function staleUnit(error: unknown): UnitSpreadDto | null {
   return (error.body as SpreadStaleResponse).unit;
 }
 
-function Experience({ unit, onSaved }: Pick<Props, 'unit' | 'onSaved'>) {
+interface ExperienceProps extends Pick<Props, 'unit' | 'onSaved'> {
+  readonly onStale: (now: UnitSpreadDto) => void;
+}
+
+function Experience({ unit, onSaved, onStale }: ExperienceProps) {
   const now = evenMinutes(unit.spread);
   const form = useZodForm(experienceSchema, { earlyMin: now?.earlyMin ?? null, lateMin: now?.lateMin ?? null });
   const save = useSave(
     form,
-    (values) => put(unit, { kind: 'experience', ...values, seen: unit.seen }),
+    (values) => send(unit, { kind: 'experience', ...values, seen: unit.seen }),
     (saved) => onSaved(saved),
   );
   const stale = save.state.kind === 'failed' ? staleUnit(save.state.problem) : null;
@@ -102,7 +112,7 @@ function Experience({ unit, onSaved }: Pick<Props, 'unit' | 'onSaved'>) {
         label={spreadText({ outcomes })}
       />
       <FormActions state={save.state} saved="Saved. Open boards have it now.">
-        {stale ? <Button onClick={() => onSaved(stale)}>See what it is now</Button> : null}
+        {stale ? <Button onClick={() => onStale(stale)}>See what it is now</Button> : null}
       </FormActions>
     </form>
   );
@@ -116,7 +126,7 @@ function Recorded({ unit, list, mayEdit, onSaved }: Omit<Props, 'whoMay'>) {
     setBusy(true);
     setFailure(null);
     try {
-      onSaved(await put(unit, { kind, seen: unit.seen }));
+      onSaved(await send(unit, { kind, seen: unit.seen }));
     } catch (error) {
       const stale = staleUnit(error);
       if (stale) onSaved(stale);
