@@ -5,12 +5,24 @@ import type { JudgedWeek } from './judged';
 import type { Occupation } from './occupation';
 import { indexOf } from './weekIndex';
 
-/** Running without a full clean, standing dirty, and runs before an allergen clean is released. */
+/**
+ * Running without a full clean, standing dirty, and runs before an allergen clean is released. Only units of a kind that
+ * the plant has cleaning rules for: a retort is not cleaned between loads.
+ */
 export function practiceBreaches(judged: JudgedWeek): ProcessBreach[] {
   const limits = judged.week.plant.rules.practice;
   if (!limits) return [];
   const { greatestRunningMin, greatestStandingDirtyMin, allergenReleaseMin } = limits;
-  const units = [...judged.occupations.keys()].sort().map((unitId) => unitHistory(judged, unitId));
+  const { units: byId } = indexOf(judged.week);
+  const cleaned = new Set(judged.week.plant.cleaning.map(({ unitKind }) => unitKind));
+  const isCleaned = (unitId: string): boolean => {
+    const kind = byId.get(unitId)?.kind;
+    return kind !== undefined && cleaned.has(kind);
+  };
+  const units = [...judged.occupations.keys()]
+    .filter(isCleaned)
+    .sort()
+    .map((unitId) => unitHistory(judged, unitId));
   return [
     ...(greatestRunningMin === null ? [] : units.flatMap((unit) => runningTooLong(unit, greatestRunningMin))),
     ...(greatestStandingDirtyMin === null

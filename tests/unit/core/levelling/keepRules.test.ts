@@ -31,7 +31,9 @@ const activities = [
 ];
 
 function levelled(practice: Partial<PracticeLimits>) {
-  const bare = plant({ units: KETTLES.map((id) => unit(id, { kind: 'kettle' })) });
+  const wash = { unitKind: 'kettle', fromFamilyId: 'soup', toFamilyId: 'sauce', minutes: 20, kind: 'wash' } as const;
+  const cleaning = [{ ...wash, phases: [], uses: [] }];
+  const bare = plant({ units: KETTLES.map((id) => unit(id, { kind: 'kettle' })), cleaning });
   const source = week({
     plant: { ...bare, rules: { ...bare.rules, practice: { ...NONE, ...practice } } },
     capacities: [capacity('main', 1000)],

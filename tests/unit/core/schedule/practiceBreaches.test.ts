@@ -113,6 +113,14 @@ describe('the release after an allergen clean', () => {
   });
 });
 
+it('judges no unit of a kind that is never cleaned', () => {
+  const loads = [run('a', 'soup', 0), run('b', 'soup', 5000)];
+  const { source } = judged({ greatestRunningMin: 30, greatestStandingDirtyMin: 30 }, loads);
+  const units = source.plant.units.map((one) => ({ ...one, kind: 'retort' as const }));
+  expect(evaluateWeek(source).breaches).toHaveLength(2);
+  expect(evaluateWeek({ ...source, plant: { ...source.plant, units } }).breaches).toEqual([]);
+});
+
 it('judges no practice rule that is not set', () => {
   const runs = [run('a', 'nut', 0), run('b', 'nutFree', 100), run('c', 'nutFree', 5000)];
   expect(judged({}, runs).breaches).toEqual([]);
