@@ -19,7 +19,7 @@ export const PRACTICE_RANGES = {
   ventGroup: {
     ventsAtOnce: range('Vents at once', '', 1, 40),
     steamOnsAtOnce: range('Steam ons at once', '', 1, 40),
-    steamOnMinutes: range('A steam on counts for', 'min', 1, 60),
+    steamOnMinutes: range('Length of a steam on', 'min', 1, 60),
     marginMinutes: range('Margin after a vent', 'min', 0, 60),
     leastHeaderBarG: range('Least header pressure for a vent', 'bar g', 0, 60),
     studyGreatestLoadKgPerH: range('Greatest load that the study saw', 'kg/h', 1, 500_000),

@@ -91,7 +91,7 @@ describe('practice rules', () => {
     await fill(lead.page, {
       'Vents at once': '0',
       'Steam ons at once': '1',
-      'A steam on counts for': '1',
+      'Length of a steam on': '1',
       'Margin after a vent': '2',
     });
     await lead.page.getByRole('button', { name: 'Enter the rule' }).click();

@@ -1,5 +1,5 @@
-import { useState } from 'react';
-import type { Control } from 'react-hook-form';
+import { useEffect, useState } from 'react';
+import type { Control, UseFormReturn } from 'react-hook-form';
 import type { z } from 'zod';
 import { NO_SOURCE, PRACTICE_SCHEMAS, type PracticeDto, type PracticeRuleKind } from '../../contracts/practice';
 import { api } from '../query/api';
@@ -36,6 +36,17 @@ function filled(kind: PracticeRuleKind, practice: PracticeDto, groupId: string |
   return { kind, ventGroupId: kind === 'ventGroup' ? groupId : null, values, source: '' };
 }
 
+/** A vent group that is chosen brings the numbers that it stands at, unless some were typed. */
+function useGroupNumbers(form: UseFormReturn<FormValues>, kind: PracticeRuleKind, practice: PracticeDto): void {
+  const groupId = form.watch('ventGroupId');
+  useEffect(() => {
+    const values = (form.getValues('values') ?? {}) as FormValues;
+    const isEmpty = Object.values(values).every((value) => value === null || value === undefined);
+    if (typeof groupId !== 'string' || !isEmpty) return;
+    form.setValue('values', filled(kind, practice, groupId).values);
+  }, [form, groupId, kind, practice]);
+}
+
 /** Enters a rule as it shall be; it holds once the quality lead has released it. */
 export function RuleForm({ kind, practice, groupId, onSaved, onLeave }: Props) {
   const schema = PRACTICE_SCHEMAS[kind] as unknown as z.ZodType<FormValues, FormValues>;
@@ -44,6 +55,7 @@ export function RuleForm({ kind, practice, groupId, onSaved, onLeave }: Props) {
   const control = form.control as unknown as FormControl;
   const save = useSave(form, (values) => api<PracticeDto>('/api/practice', { method: 'POST', body: values }), onSaved);
   const typed: FormValues = form.watch();
+  useGroupNumbers(form as unknown as UseFormReturn<FormValues>, kind, practice);
   const groups = practice.ventGroups.map(({ id, name }) => ({ value: id, label: name }));
   return (
     <form noValidate onSubmit={save.submit} aria-labelledby="rule-form">

@@ -62,5 +62,10 @@ export function stateOf({ released, withdrawnAt }: PracticeRuleDto): RuleState {
 
 /** Rules of one state by kind, kinds in their order. */
 export function byKind(rules: readonly PracticeRuleDto[], state: RuleState) {
-  return PRACTICE_RULE_KINDS.flatMap((kind) => rules.filter((rule) => rule.kind === kind && stateOf(rule) === state));
+  const nameOf = ({ ventGroup }: PracticeRuleDto): string => ventGroup?.name ?? '';
+  return PRACTICE_RULE_KINDS.flatMap((kind) =>
+    rules
+      .filter((rule) => rule.kind === kind && stateOf(rule) === state)
+      .sort((a, b) => (state === 'past' ? 0 : nameOf(a).localeCompare(nameOf(b)))),
+  );
 }

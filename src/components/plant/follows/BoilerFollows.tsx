@@ -1,7 +1,13 @@
+import { boilerHorsepower } from '../../../core/quantity/display';
+import { groupDigits } from '../../time';
 import { useUnits } from '../../ui/units';
 import { boilerFacts } from '../facts';
 import type { FormContext } from '../fields';
 import { Facts, NotYet, WorkingLink } from './Facts';
+
+/** US plants know a boiler by its horsepower. */
+const horsepowerText = (fromAndAtKgPerH: number): string =>
+  `${groupDigits(boilerHorsepower(fromAndAtKgPerH))}\u00a0boiler hp`;
 
 /** From rating to net export, as typed. */
 export function BoilerFollows({ typed, id, library }: FormContext) {
@@ -10,6 +16,7 @@ export function BoilerFollows({ typed, id, library }: FormContext) {
   if (!found.ok) return <NotYet>{units.sentence(found.error.message)}</NotYet>;
   const of = found.value;
   const facts = [
+    ...(units.system === 'si' ? [] : [{ name: 'Rating', value: horsepowerText(of.grossKgPerH / of.factor) }]),
     { name: 'Factor from the rating', value: of.factor.toFixed(3) },
     { name: 'Gross evaporation', value: units.text('steamRate', of.grossKgPerH) },
     { name: 'Steam for the feed tank', value: units.text('steamRate', of.feedTankSteamKgPerH) },
