@@ -1,5 +1,4 @@
 import type { LevellingProgressDto } from '@/contracts/levelling';
-import type { LevellingProposal } from '@/core/levelling/proposal';
 import type { LevellingProgress, LevellingResult } from '@/core/levelling/levelWeek';
 import type { LevellingOptions } from '@/core/levelling/options';
 import type { Week } from '@/core/schedule/week';
@@ -11,6 +10,7 @@ import { findWeek, planOf } from '../weeks/findWeek';
 import { weekOfPlan } from '../weeks/weekOfPlan';
 import { minuteOf, type WeekTime } from '../weeks/weekTime';
 import { disagreement } from './checkProposal';
+import { withFullFigures } from './fullFigures';
 import type { RunRow } from './runDto';
 import { beat, giveBackRun, moveRun, setRunRevision, takeRun, type RunEnd } from './runs.repo';
 
@@ -112,7 +112,7 @@ const progressDto = ({ ms, overKg, lateMin, movedMin }: LevellingProgress): Leve
 
 function judged(run: RunRow, week: Week, { proposal, withheld }: LevellingResult): RunEnd {
   const doubt = withheld ? 'the solver withheld its own plan' : disagreement(week, proposal);
-  if (doubt === null) return { state: 'proposed', proposal: proposal satisfies LevellingProposal };
+  if (doubt === null) return { state: 'proposed', proposal: withFullFigures(week, proposal) };
   console.error(`levelling ${run.id}: proposal put away: ${doubt}`);
   return { state: 'failed', failure: DOUBTED };
 }
