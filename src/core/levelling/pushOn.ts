@@ -1,5 +1,6 @@
 import { withPlacements } from '../pipeline';
-import type { Activity, Placement } from '../plant/activity';
+import { isNeverMoved, type Activity, type Placement } from '../plant/activity';
+import { releaseAfterMin } from '../plant/plant';
 import { changeovers } from '../schedule/changeovers';
 import { occupationsByUnit, type Occupation } from '../schedule/occupation';
 import type { Week } from '../schedule/week';
@@ -46,7 +47,7 @@ function oneRound(week: Week, from: number): Changes {
 type Later = (activity: Activity | undefined, byMin: number) => void;
 
 const mayMove = (activity: Activity, from: number): boolean =>
-  activity.fixing === 'free' && (activity.placement?.start ?? -1) >= from;
+  activity.fixing === 'free' && !isNeverMoved(activity) && (activity.placement?.start ?? -1) >= from;
 
 function pushAlongLinks(week: Week, later: Later): void {
   for (const link of week.links) {
@@ -65,7 +66,7 @@ function pushOnUnits(week: Week, later: Later): void {
     });
   }
   for (const { nextId, rule, availableMin } of changeovers(week)) {
-    later(activities.get(nextId), rule.minutes - availableMin);
+    later(activities.get(nextId), rule.minutes + releaseAfterMin(week.plant, rule) - availableMin);
   }
 }
 

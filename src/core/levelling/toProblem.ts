@@ -1,5 +1,5 @@
 import { drawnMode, isNeverMoved, type Activity, type Link, type LinkEnd, type Mode } from '../plant/activity';
-import type { PlantModel, Unit } from '../plant/plant';
+import { releaseAfterMin, type PlantModel, type Unit } from '../plant/plant';
 import type { Week } from '../schedule/week';
 import { mergeIntervals } from '../time/interval';
 import { fullOptions, type FullOptions, type LevellingOptions } from './options';
@@ -58,7 +58,7 @@ function toCleaning(plant: PlantModel): ProblemCleaning[] {
       unitIds: units.filter((u) => u.headerId === headerId).map((u) => u.id),
       fromFamilyId: rule.fromFamilyId,
       toFamilyId: rule.toFamilyId,
-      minutes: rule.minutes + (rule.kind === 'allergen' ? (plant.rules.practice?.allergenReleaseMin ?? 0) : 0),
+      minutes: rule.minutes + releaseAfterMin(plant, rule),
       uses: [...steamUses(rule.phases, steamResources(plant, headerId)), ...limitUses(rule.uses)],
     }));
   });

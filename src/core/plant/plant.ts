@@ -166,3 +166,8 @@ export interface UnitCalendar {
   readonly unitId: string;
   readonly open: readonly Interval[];
 }
+
+/** From the end of a cleaning until its unit may be used: the release after an allergen clean. [min] */
+export function releaseAfterMin({ rules }: Pick<PlantModel, 'rules'>, { kind }: Pick<CleaningRule, 'kind'>): number {
+  return kind === 'allergen' ? (rules.practice?.allergenReleaseMin ?? 0) : 0;
+}

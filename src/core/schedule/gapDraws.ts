@@ -3,7 +3,7 @@
  * as the first of the week; and a run that takes less because its machine is still warm.
  */
 import { drawnMode, type Activity, type BetweenDraws, type Mode, type Phase } from '../plant/activity';
-import type { CleaningRule } from '../plant/plant';
+import { releaseAfterMin } from '../plant/plant';
 import type { Changeover } from './changeovers';
 import { derivedActivity } from './derived';
 import type { Occupation } from './occupation';
@@ -34,10 +34,8 @@ export function runGaps(
   occupations: ReadonlyMap<string, readonly Occupation[]>,
   found: readonly Changeover[],
 ): RunGap[] {
-  const { practice } = week.plant.rules;
-  const released = (kind: CleaningRule['kind']) => (kind === 'allergen' ? (practice?.allergenReleaseMin ?? 0) : 0);
   const cleanAt = new Map(
-    found.map(({ nextId, from, rule }) => [nextId, from + rule.minutes + released(rule.kind)] as const),
+    found.map(({ nextId, from, rule }) => [nextId, from + rule.minutes + releaseAfterMin(week.plant, rule)] as const),
   );
   return [...occupations.keys()].sort().flatMap((unitId) => unitGaps(week, occupations.get(unitId) ?? [], cleanAt));
 }
