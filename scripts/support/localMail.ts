@@ -29,6 +29,7 @@ export async function startLocalMail(folder: string): Promise<LocalMail> {
   const server = new SMTPServer({
     disabledCommands: ['AUTH', 'STARTTLS'],
     disableReverseLookup: true,
+    closeTimeout: 500,
     size: LARGEST_BYTES,
     onData(stream, _session, done) {
       const chunks: Buffer[] = [];

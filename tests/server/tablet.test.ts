@@ -72,6 +72,15 @@ describe('enrolling', () => {
     expect((await callApi(PROCESS_DATA, { session })).status).toBe(401);
   });
 
+  it('again on the same device takes the place of what it was', async () => {
+    const old = await enrol('Before');
+    const session = await sessionOf(ADMIN);
+    const again = await callApi(ENROL, { body: { name: 'After', lineId: null }, headers: cookies(old, session) });
+    expect(again.status).toBe(201);
+    expect((await byBadge(PIN, old)).status).toBe(403);
+    expect((await byBadge(PIN, tokenOf(again))).status).toBe(200);
+  });
+
   it('is refused at a line that is not the plant’s', async () => {
     const session = await sessionOf(ADMIN);
     const response = await callApi(ENROL, { session, body: { name: 'Filler', lineId: 'south-line' } });

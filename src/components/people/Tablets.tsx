@@ -8,6 +8,7 @@ import { linesText, momentText } from './words';
 
 function Item({ tablet, people }: { readonly tablet: TabletDto; readonly people: People }) {
   const [fault, setFault] = useState('');
+  const [isAsking, setAsking] = useState(false);
   const { id, name, lineId, enrolledBy, enrolledAt, lastSeenAt } = tablet;
   const { lines, timeZone } = people.data;
   const revoke = (): void => {
@@ -23,9 +24,21 @@ function Item({ tablet, people }: { readonly tablet: TabletDto; readonly people:
         </p>
         {fault ? <Notice look="over">{fault}</Notice> : null}
       </div>
-      <Button size="small" onClick={revoke} aria-label={`Revoke ${name}`}>
-        Revoke
-      </Button>
+      {isAsking ? (
+        <div className="flex items-center gap-2">
+          <span className="text-sm">It has to be enrolled anew then.</span>
+          <Button size="small" onClick={() => setAsking(false)}>
+            Leave it
+          </Button>
+          <Button size="small" look="over" onClick={revoke} aria-label={`Revoke ${name} now`}>
+            Revoke
+          </Button>
+        </div>
+      ) : (
+        <Button size="small" onClick={() => setAsking(true)} aria-label={`Revoke ${name}`}>
+          Revoke…
+        </Button>
+      )}
     </li>
   );
 }

@@ -6,7 +6,7 @@ import { plants, sessions, tablets } from '@/db/schema/index';
 import type { Authorized } from '../auth/permissions';
 import { endSession } from '../auth/session';
 import { tabletByToken } from '../auth/tabletSession';
-import { newToken } from '../auth/token';
+import { hashToken, newToken } from '../auth/token';
 import { now } from '../clock';
 import { notify, notifySessionEnd } from '../events/notify';
 import { notFound, type HttpProblem } from '../http/problem';
@@ -36,7 +36,7 @@ export const tabletLines = (actor: Authorized<'tablets.manage'>) => linesOf(db, 
 export async function enrolTablet(
   actor: Authorized<'tablets.manage'>,
   { name, lineId }: EnrolRequest,
-  sessionId: string | null,
+  { sessionId, oldToken }: { readonly sessionId: string | null; readonly oldToken: string | null },
 ): Promise<Result<{ readonly token: string }, HttpProblem>> {
   const { token, tokenHash } = newToken();
   const enrolled = await db.transaction(async (tx): Promise<Result<undefined, HttpProblem>> => {
@@ -45,6 +45,13 @@ export async function enrolTablet(
     const owner = { plantId: actor.plantId, enrolledBy: actor.personId, createdAt: now() };
     const row = { id: newId(), name, lineId, tokenHash, ...owner };
     await tx.insert(tablets).values(row);
+    // What the device was before is nothing that anybody holds any more.
+    if (oldToken) {
+      await tx
+        .update(tablets)
+        .set({ revokedAt: now() })
+        .where(and(eq(tablets.tokenHash, hashToken(oldToken)), isNull(tablets.revokedAt)));
+    }
     await record(tx, actor, 'tablet.enrol', row.id, { name, lineId });
     await notify(tx, actor.plantId, { kind: 'people' });
     return ok(undefined);
