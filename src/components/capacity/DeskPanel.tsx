@@ -11,7 +11,7 @@ import type { Clock } from '../time';
 import { useUnits } from '../ui/units';
 import type { Units } from '../units';
 import { firstDraft, type Draft, type Subject } from './draft';
-import { overWith } from './preview';
+import { fireLitBy, overWith } from './preview';
 import { limitSnap, segments } from './scale';
 import { actionText, SpanForm } from './SpanForm';
 import type { DayOfWeek } from './wallTime';
@@ -67,9 +67,21 @@ function keptOver(draft: Draft, capacity: HeaderCapacity | undefined, reserveFra
 }
 
 /** A limit above what the studies of vent groups on the header saw. */
-function cautionOf({ subject, value }: Draft, plant: PlantModel, units: Units): string | null {
+function studyCaution({ subject, value }: Draft, plant: PlantModel, units: Units): string | null {
   if (subject.kind !== 'limit' || value === null) return null;
   return limitAboveStudy(plant, subject.headerId, value, sayingIn(units.system));
+}
+
+/** When a boiler that the draft lights can export. */
+function readyCaution(draft: Draft, dto: CapacityDto, clock: Clock): string | null {
+  const { subject } = draft;
+  const boiler = subject.kind === 'firing' ? dto.boilers.find(({ id }) => id === subject.boilerId) : undefined;
+  const fire = boiler && fireLitBy(draft, boiler, dto.horizonMin);
+  if (!fire) return null;
+  const lit = `Lit ${clock.dayTime(fire.litMin)}, ${fire.start}`;
+  return fire.readyMin < fire.outMin
+    ? `${lit}: steam leaves it from ${clock.dayTime(fire.readyMin)}.`
+    : `${lit}: it is out again before steam can leave it.`;
 }
 
 /** The side of the desk: what can be set, the span being set, or who may. */
@@ -93,7 +105,7 @@ export function DeskPanel(props: Props) {
         name={nameOf(draft.subject, dto)}
         keptKgPerH={keptOver(draft, capacity, dto.reserveFraction)}
         outcome={outcomeOf(before, after, units)}
-        caution={cautionOf(draft, props.plant, units)}
+        caution={studyCaution(draft, props.plant, units) ?? readyCaution(draft, dto, clock)}
         isWorse={(after?.kg ?? 0) > (before?.kg ?? 0) + 0.5}
         onChange={props.onDraft}
         onCancel={() => props.onDraft(null)}

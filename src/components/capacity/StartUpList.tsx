@@ -15,7 +15,9 @@ export function StartUpList({ start, names, clock }: Props) {
   const units = useUnits();
   return (
     <div>
-      <p className="mb-2 text-sm text-ink-muted">{outSinceText(start, clock)}</p>
+      <p className="mb-2 text-sm text-ink-muted">
+        {outSinceText(start, clock)} Tied back from the plan; users outside it are not counted.
+      </p>
       {start.late.map((late) => (
         <Notice key={late.boilerId} look="over" className="mb-3">
           {lateText(late, names, clock)}

@@ -45,8 +45,11 @@ export function TurndownPanel({ spans, dto, clock }: Props) {
   );
 }
 
+function Rate({ kgPerH }: { readonly kgPerH: number }) {
+  return <span className="whitespace-nowrap">{useUnits().rate(kgPerH)}</span>;
+}
+
 function Rows({ spans, dto, clock }: Props) {
-  const units = useUnits();
   const end = (span: TurndownSpan): string =>
     span.to >= dto.horizonMin
       ? 'the week’s end'
@@ -64,8 +67,8 @@ function Rows({ spans, dto, clock }: Props) {
             </span>
             <span className="text-ink-muted">
               {' '}
-              ({spanText(span.to - span.from)}): load down to {units.text('steamRate', span.leastLoadKgPerH)}, the
-              boilers to {units.text('steamRate', span.leastExportKgPerH)}
+              ({spanText(span.to - span.from)}): load down to <Rate kgPerH={span.leastLoadKgPerH} />, the boilers to{' '}
+              <Rate kgPerH={span.leastExportKgPerH} />
             </span>
             {shut ? <span>. {shut.name} could be shut.</span> : null}
           </li>

@@ -1,7 +1,7 @@
 import type { BoilerDto, CapacityDto } from '@/contracts/capacity';
 import { capacityMinutes } from '@/core/header/capacityMinutes';
 import { overLimit, type OverSummary } from '@/core/header/over';
-import { firesOf, readyShare } from '@/core/house/readiness';
+import { firesOf, readyShare, type Fire } from '@/core/house/readiness';
 import type { HeaderCapacity } from '@/core/plant/plant';
 import { stepsFromSpans } from '@/core/time/stepMath';
 import { toMinutes, type StepFunction } from '@/core/time/stepFunction';
@@ -53,16 +53,28 @@ function limitWithFiring(
   return limit;
 }
 
-/** What of a boiler's export can leave with the draft in force: where it is lit anew, once it is at pressure. */
-function readyWith(draft: Draft, boiler: BoilerDto, horizonMin: number): StepFunction {
-  const share = stepsFromSpans(
+/** A boiler's share with the draft in force. */
+function shareWith(draft: Draft, boiler: BoilerDto, horizonMin: number): StepFunction {
+  return stepsFromSpans(
     [
       ...boiler.share.map((step, i) => ({ ...step, to: boiler.share[i + 1]?.from ?? horizonMin })),
       { from: draft.fromMin, to: draft.toMin, value: draft.value ?? 0 },
     ],
     0,
   );
+}
+
+/** What of its export can leave with the draft in force: where it is lit anew, once it is at pressure. */
+function readyWith(draft: Draft, boiler: BoilerDto, horizonMin: number): StepFunction {
+  const share = shareWith(draft, boiler, horizonMin);
   return readyShare(share, firesOf(share, boiler, horizonMin));
+}
+
+/** The fire that the draft lights, at its begin or, where it shuts the boiler, at its end; null: none is lit anew. */
+export function fireLitBy(draft: Draft, boiler: BoilerDto, horizonMin: number): Fire | null {
+  const fires = firesOf(shareWith(draft, boiler, horizonMin), boiler, horizonMin);
+  const moments = [draft.fromMin, draft.toMin];
+  return fires.find((fire) => fire.start !== null && moments.includes(fire.litMin)) ?? null;
 }
 
 /** What the plan would be over with the draft in force. */

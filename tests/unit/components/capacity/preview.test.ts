@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { Draft } from '@/components/capacity/draft';
 import { durationCurve, hoursAbove } from '@/components/capacity/durationCurve';
-import { limitWith, overWith } from '@/components/capacity/preview';
+import { fireLitBy, limitWith, overWith } from '@/components/capacity/preview';
 import type { BoilerDto } from '@/contracts/capacity';
 import { firesOf, LOOK_BACK_MIN } from '@/core/house/readiness';
 import type { HeaderCapacity } from '@/core/plant/plant';
@@ -42,6 +42,18 @@ const firing = (fromMin: number, toMin: number, value: number): Draft => ({
   fromMin,
   toMin,
   value,
+});
+
+describe('fireLitBy', () => {
+  it('is the fire lit after a shut span, warm so soon after, and none where it burns all along', () => {
+    expect(fireLitBy(firing(60, 90, 0), boiler, HORIZON)).toMatchObject({ litMin: 90, readyMin: 125, start: 'warm' });
+    expect(fireLitBy(firing(60, 90, 0.5), boiler, HORIZON)).toBeNull();
+  });
+
+  it('is the fire lit by the draft itself, cold after a long stop', () => {
+    const cold = { ...boiler, share: [{ from: 0, value: 0 }], fires: [] };
+    expect(fireLitBy(firing(60, 240, 1), cold, HORIZON)).toMatchObject({ litMin: 60, readyMin: 185, start: 'cold' });
+  });
 });
 
 describe('limitWith', () => {
