@@ -7,7 +7,7 @@ import { Button } from '../ui/Button';
 import { FormActions } from '../ui/form/FormActions';
 import { SelectInput, TextInput } from '../ui/form/TextInput';
 import { useSave } from '../ui/form/useSave';
-import { useZodForm, type Blank } from '../ui/form/useZodForm';
+import { useZodForm } from '../ui/form/useZodForm';
 import { Notice } from '../ui/Notice';
 import { workOutOn } from './demand';
 import { DemandPanel } from './DemandPanel';
@@ -27,7 +27,7 @@ export interface DutyFormProps {
 /** A duty's inputs, and beside them what it draws as they are typed. */
 export function DutyForm({ dto, saved, model, mayEdit, whoMay }: DutyFormProps) {
   const schema = useMemo(() => dutyFormSchema(model, dto), [model, dto]);
-  const form = useZodForm(schema, startOf(dto, saved, model) as Blank<DutyFormValues>);
+  const form = useZodForm(schema, startOf(dto, saved, model));
   const { control, setValue } = form;
   const values = useWatch({ control }) as DutyFormValues;
   const duty = typedDuty(model, values.duty.inputs);

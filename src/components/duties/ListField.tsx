@@ -45,7 +45,7 @@ export function ListField({ control, model, field, list }: Props) {
         ))}
       </ol>
       <div className="flex items-center gap-3">
-        <Button size="small" onClick={() => rows.append(newRow(model, field) as never)}>
+        <Button size="small" onClick={() => rows.append(newRow(model, field))}>
           Add a row
         </Button>
         {fault ? <p className="text-xs text-over">{fault}</p> : null}
@@ -54,9 +54,14 @@ export function ListField({ control, model, field, list }: Props) {
   );
 }
 
+interface Fault {
+  readonly message?: string;
+  readonly root?: { readonly message?: string };
+}
+
 /** What is wrong with a list as a whole. */
 export function useFault(control: Control<DutyFormValues>, name: string): string | undefined {
   const { errors } = useFormState({ control });
-  const found = get(errors, name) as { message?: string; root?: { message?: string } } | undefined;
+  const found = get<object, Fault | undefined>(errors, name);
   return found?.root?.message ?? found?.message;
 }

@@ -49,14 +49,14 @@ export function TypedFields({ control }: { readonly control: Control<DutyFormVal
         ))}
       </ol>
       <div className="mb-5 flex items-center gap-3">
-        <Button size="small" onClick={() => rows.append(EMPTY as never)}>
+        <Button size="small" onClick={() => rows.append(EMPTY)}>
           Add a phase
         </Button>
         {fault ? <p className="text-xs text-over">{fault}</p> : null}
       </div>
       <TextInput
         control={control}
-        name={'duty.inputs.source' as never}
+        name="duty.inputs.source"
         label="Where the figures are from"
         hint="Which meter, which day, who read it."
         maxLength={200}

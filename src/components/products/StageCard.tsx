@@ -27,7 +27,7 @@ export function StageCard({ control, choices, index, isLast, onUp, onDown, onRem
   const name = `stages.${index}` as const;
   const units = useFieldArray({ control, name: `${name}.units` });
   const { errors } = useFormState({ control });
-  const found = get(errors, `${name}.units`) as { message?: string; root?: { message?: string } } | undefined;
+  const found = get<object, { message?: string; root?: { message?: string } } | undefined>(errors, `${name}.units`);
   const fault = found?.root?.message ?? found?.message;
   return (
     <li className="rounded-md border border-rule bg-surface px-4 pt-3 pb-4">

@@ -44,7 +44,7 @@ export function UsesEditor({ control, name, limits }: Props) {
           </Button>
         </div>
       ))}
-      <Button look="quiet" size="small" onClick={() => uses.append(empty as never)}>
+      <Button look="quiet" size="small" onClick={() => uses.append(empty)}>
         Add a use of a shared limit
       </Button>
     </div>

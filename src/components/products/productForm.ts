@@ -19,7 +19,7 @@ export function productStart(saved: ProductDto | null, familyId: string): Blank<
       fillKg,
       casePieces,
       initialC,
-    } as Blank<ProductRequest>;
+    };
   }
   const basis = blankBasis('composition') as Blank<ProductRequest['basis']>;
   return { name: '', familyId, basis, containerKg: null, fillKg: null, casePieces: null, initialC: null };

@@ -1,6 +1,6 @@
 import type { CleaningRuleDto, ProductDto, ProductsDto, RouteStageDto } from '@/contracts/products';
 import { parseDuty } from '@/contracts/dutyInputs';
-import { DUTY_CATALOGUE, type WorkedModel } from '@/core/duty/catalogue';
+import { DUTY_CATALOGUE } from '@/core/duty/catalogue';
 import { steamOfPhases } from '@/core/duty/duty';
 import type { DutyModel } from '@/core/duty/model';
 import type { Db } from '@/db/client';
@@ -37,7 +37,7 @@ export function stagesOf(rows: readonly repo.RouteRow[], modeOf: StageMode): Rou
 }
 
 const titleOf = (model: DutyModel['model']): string =>
-  model === 'typed' ? 'typed draw' : DUTY_CATALOGUE[model as WorkedModel].title.toLowerCase();
+  model === 'typed' ? 'typed draw' : DUTY_CATALOGUE[model].title.toLowerCase();
 
 async function choicesOf(tx: Db, plantId: string, altitudeM: number): Promise<ProductsDto['choices']> {
   const headers = await headerRows(tx, plantId);
