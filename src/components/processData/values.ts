@@ -6,7 +6,7 @@ export interface ProcessValueText {
   readonly value: string;
 }
 
-/** The values of a scheduled process in the order of its run, temperatures to 0.01 of a degree: a process is never shown hotter than it is. */
+/** The values of a scheduled process in the order of its run, temperatures to 0.01 of a degree. */
 export function processValueTexts(values: ProcessValuesDto, units: Units): ProcessValueText[] {
   const celsius = (value: number): string =>
     `${units.number('temperature', value, 2).replace(/\.?0+$/, '')}\u00a0${units.symbol('temperature')}`;

@@ -23,9 +23,9 @@ const M3_PER_GAL = 231 * M_PER_IN ** 3;
  * 33 475 BTU/h (34.5 x 970.3 BTU/lb) is taken as exact here, with the International Table Btu. NIST SP 811, B.8 gives
  * 9.8095 kW, which is 0.011 % less.
  */
-export const KW_PER_BOILER_HP = (33_475 * KJ_PER_BTU) / 3600;
-/** Steam from and at 212 degF of one boiler horsepower [kg/h]: 34.5 lb/h, exact. */
-export const FROM_AND_AT_KG_PER_H_PER_BOILER_HP = 34.5 * KG_PER_LB;
+const KW_PER_BOILER_HP = (33_475 * KJ_PER_BTU) / 3600;
+/** A boiler's rating from and at 212 degF [kg/h] in boiler horsepower: 34.5 lb/h each, exact. */
+export const boilerHorsepower = (fromAndAtKgPerH: number): number => fromAndAtKgPerH / (34.5 * KG_PER_LB);
 
 const scale = (symbol: string, factor = 1, offset = 0): Scale => ({ symbol, factor, offset });
 const pair = (si: string, usCustomary: string, factor: number, offset = 0) => ({

@@ -1,10 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import {
+  boilerHorsepower,
   DISPLAY_QUANTITIES,
   displaySymbol,
-  FROM_AND_AT_KG_PER_H_PER_BOILER_HP,
   fromDisplay,
-  KW_PER_BOILER_HP,
   quantityOfUnit,
   toDisplay,
   type DisplayQuantity,
@@ -52,8 +51,10 @@ describe('US customary units', () => {
 
   /** ASME PTC and the trade: 34.5 lb/h from and at 212 degF, latent heat 970.3 BTU/lb, 33 475 BTU/h. */
   it('has a boiler horsepower of 33 475 BTU/h or 34.5 lb/h from and at', () => {
-    expect(toDisplay('heatRate', KW_PER_BOILER_HP, 'usCustomary')).toBeCloseTo(33_475, 8);
-    expect(toDisplay('steamRate', FROM_AND_AT_KG_PER_H_PER_BOILER_HP, 'usCustomary')).toBeCloseTo(34.5, 12);
+    const oneHpKW = fromDisplay('boilerPower', 1, 'usCustomary');
+    expect(toDisplay('heatRate', oneHpKW, 'usCustomary')).toBeCloseTo(33_475, 8);
+    expect(boilerHorsepower(fromDisplay('steamRate', 34.5, 'usCustomary'))).toBeCloseTo(1, 12);
+    expect(boilerHorsepower(fromDisplay('steamRate', 27_600, 'usCustomary'))).toBeCloseTo(800, 9);
     expect(34.5 * 970.3).toBeCloseTo(33_475, -1);
   });
 
