@@ -14,7 +14,7 @@ interface Props {
   readonly system: UnitSystem;
 }
 
-export const KIND_NAMES: Readonly<Record<UnitKind, string>> = {
+const KIND_NAMES: Readonly<Record<UnitKind, string>> = {
   blancher: 'Blanchers',
   kettle: 'Kettles',
   cooker: 'Cookers',
