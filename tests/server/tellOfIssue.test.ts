@@ -1,13 +1,13 @@
 import { and, eq } from 'drizzle-orm';
 import { beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { Role } from '@/contracts/account';
-import type { Week } from '@/core/schedule/week';
 import { db } from '@/db/client';
 import { mails, memberships, people } from '@/db/schema/index';
 import { POST as NOTICES } from '@/pages/api/session/notices';
 import { POST as THEME } from '@/pages/api/settings/own';
 import { tellOfIssue } from '@/server/people/tellOfIssue';
 import { callApi } from '../support/api';
+import { activity, flatMode, placedAt, plant, unit, week } from '../support/builders';
 import { emailOf, openWorld, sessionOf } from '../support/world';
 
 const SAM = 'north-lineSupervisor';
@@ -20,16 +20,14 @@ const PLANNER = {
   roles: ['planner'] as readonly Role[],
 };
 
-/** A retort run on line 1 and an idle unit on line 2. */
-const week = {
-  plant: {
-    units: [
-      { id: 'r1', lineId: 'line-1' },
-      { id: 'r2', lineId: 'line-2' },
-    ],
-  },
-  activities: [{ unitId: 'r1' }],
-} as unknown as Week;
+/** One run on line 1; on line 2 stands a unit, and a batch waits that is not yet placed. */
+const WEEK = week({
+  plant: plant({ units: [unit('r1', { lineId: 'line-1' }), unit('r2', { lineId: 'line-2' })] }),
+  activities: [
+    placedAt(activity('a', { modes: [flatMode('r1', 60, 500)] }), 0),
+    activity('b', { modes: [flatMode('r2', 60, 500)], placement: null }),
+  ],
+});
 
 beforeAll(openWorld);
 beforeEach(async () => {
@@ -44,7 +42,7 @@ const set = (values: Partial<typeof memberships.$inferInsert>) =>
     .where(and(eq(memberships.personId, SAM), eq(memberships.plantId, 'north')));
 
 async function told(actor = PLANNER): Promise<string[]> {
-  const issued = { number: 7, weekStart: '2026-11-30', comment: 'Kettle 2 is back.', week };
+  const issued = { number: 7, weekStart: '2026-11-30', comment: 'Kettle 2 is back.', week: WEEK };
   await db.transaction((tx) => tellOfIssue(tx, actor, issued));
   return (await db.select({ to: mails.to }).from(mails)).map(({ to }) => to);
 }

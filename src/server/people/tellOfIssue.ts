@@ -19,7 +19,7 @@ interface Issued {
 /** Lines on which something runs in the week. */
 function linesAtWork({ plant, activities }: Week): ReadonlySet<string> {
   const lineOf = new Map(plant.units.map((unit) => [unit.id, unit.lineId]));
-  return new Set(activities.flatMap(({ unitId }) => lineOf.get(unitId) ?? []));
+  return new Set(activities.flatMap(({ placement }) => lineOf.get(placement?.unitId ?? '') ?? []));
 }
 
 /** Tells the supervisors of the lines that run, but whoever put the plan there or wants no such messages. */
