@@ -83,7 +83,7 @@ export const HeaderStrip = memo(function HeaderStrip(props: Props) {
               {words.figure}
             </p>
             <p className="text-2xs leading-4 text-ink-muted md:pr-9">{words.line}</p>
-            {shown.carried ? <CarriedWords carried={shown.carried} /> : null}
+            {main && shown.carried ? <CarriedWords carried={shown.carried} /> : null}
             <Marks {...{ strip, topKgPerH }} />
           </>
         ) : null}

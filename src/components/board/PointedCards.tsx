@@ -89,10 +89,8 @@ export function CarriedLine({ carried, minute }: { readonly carried: Carried; re
     discharge > 0 ? `carries ${units.rate(discharge)}` : charge > 0 ? `takes ${units.rate(charge)}` : 'stands by';
   return (
     <p className="flex justify-between gap-3 text-xs">
-      <span className="text-ink-muted">
-        accumulator, {units.mass(carried.storeKg[minute] ?? 0)} of {units.mass(carried.capacityKg)} in store
-      </span>
-      <span className="font-medium">{doing}</span>
+      <span className="text-ink-muted">accumulator, {units.mass(carried.storeKg[minute] ?? 0)} in store</span>
+      <span className="font-medium whitespace-nowrap">{doing}</span>
     </p>
   );
 }
