@@ -3,7 +3,7 @@ import { testDist } from '../../scripts/support/build';
 import { type AppProcess, startProcess } from '../../scripts/support/child';
 import { anyFreePort } from '../../scripts/support/ports';
 import { waitUntilServing } from '../../scripts/support/waitUntilServing';
-import { createDemoDatabase } from './database';
+import { createDemoDatabase, type TestDatabase } from './database';
 
 /** The built application, running: web process and levelling worker on a database of their own. */
 export interface TestApp {
@@ -17,9 +17,16 @@ export interface TestApp {
   stop(): Promise<void>;
 }
 
-/** Starts the built application with the demo plant, its clock set to `now` (an ISO instant) and running on from there. */
-export async function startApp(now: string, extraEnv: Record<string, string> = {}): Promise<TestApp> {
-  const database = await createDemoDatabase(now);
+/**
+ * Starts the built application, its clock set to `now` (an ISO instant) and running on from there: with the demo plant,
+ * or on another database.
+ */
+export async function startApp(
+  now: string,
+  extraEnv: Record<string, string> = {},
+  makeDatabase: (now: string) => Promise<TestDatabase> = createDemoDatabase,
+): Promise<TestApp> {
+  const database = await makeDatabase(now);
   const port = await anyFreePort();
   const url = `http://localhost:${port}`;
   const lines: string[] = [];
