@@ -1,7 +1,8 @@
 import type { Placement } from '../plant/activity';
 import type { Week } from '../schedule/week';
 import { judge, type Judgement } from './evaluate';
-import { MEETING_EVERY, type Exchange } from './exchange';
+import type { LevellingEnv, Solved } from './env';
+import { MEETING_EVERY } from './exchange';
 import { figuresOf } from './figures';
 import { keepRules } from './keepRules';
 import type { Key } from './key';
@@ -12,33 +13,13 @@ import { planOf, type Plan, type Problem, type ProblemActivity } from './problem
 import type { LevellingProposal, ProposedMove } from './proposal';
 import { seededRandom } from './random';
 import { reasonsFor } from './reasons';
+import { relaxationsFor } from './relaxations';
 import { Search, type Assignment } from './search';
 import type { SolveLp } from './solverPort';
 import { toProblem } from './toProblem';
 import { unresolvedOf } from './unresolved';
 
-/** How far a run has come. */
-export interface LevellingProgress {
-  readonly ms: number;
-  readonly iterations: number;
-  readonly overKg: number;
-  readonly lateMin: number;
-  readonly movedMin: number;
-  /** Vents, steam-ons and shared limits over, counts and shares times minutes. */
-  readonly limitsOver: number;
-}
-
-/** What a run needs from outside; core has no clock and no package of its own. */
-export interface LevellingEnv {
-  readonly solveLp: SolveLp;
-  /** Milliseconds of any clock that only goes forward; needed for a budget in ms. */
-  readonly now?: () => number;
-  readonly cancelled?: () => boolean;
-  /** Called now and then, at whole numbers of iterations. */
-  readonly onProgress?: (progress: LevellingProgress) => void;
-  /** Another search of the same problem on another thread; left out: this one alone. */
-  readonly exchange?: Exchange;
-}
+export type { LevellingEnv, LevellingProgress, Solved } from './env';
 
 export interface LevellingResult {
   readonly proposal: LevellingProposal;
@@ -67,14 +48,12 @@ export function levelWeek(week: Week, options: LevellingOptions, env: LevellingE
   const kept = keepRules(week, problem, found);
   const worse = isWorse(judge(problem, kept), judge(problem, planOf(problem)));
   const plan = worse ? planOf(problem) : kept;
-  return { ...solved, proposal: toProposal(week, problem, plan, env.solveLp) };
-}
-
-export interface Solved {
-  readonly plan: Plan;
-  readonly iterations: number;
-  readonly cancelled: boolean;
-  readonly withheld: boolean;
+  const proposal = toProposal(week, problem, plan, env.solveLp);
+  if (proposal.unresolved.length === 0 || solved.cancelled || env.exchange?.startsFrom === 'nothing') {
+    return { ...solved, proposal };
+  }
+  const relaxations = relaxationsFor({ week, options, problem, plan }, solveProblem, env);
+  return { ...solved, proposal: { ...proposal, relaxations } };
 }
 
 /** The same for a problem in its plain form. */

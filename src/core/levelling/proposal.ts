@@ -48,4 +48,20 @@ export interface LevellingProposal {
     readonly kg: number;
     readonly why: string;
   }[];
+  /** Where something stays over: how little more would take it away, each tried. Left out: nothing was tried. */
+  readonly relaxations?: readonly Relaxation[];
 }
+
+/** How little more would take away, or lessen, what stays over the limit. Plain JSON. */
+export type Relaxation =
+  | {
+      readonly kind: 'moreSteam';
+      readonly headerId: string;
+      readonly from: number;
+      readonly to: number;
+      /** [kg/h] */
+      readonly kgPerH: number;
+    }
+  | { readonly kind: 'unfix'; readonly activityId: string; readonly leavesKg: number }
+  | { readonly kind: 'furtherMoves'; readonly minutes: number; readonly leavesKg: number }
+  | { readonly kind: 'otherUnits'; readonly leavesKg: number };
