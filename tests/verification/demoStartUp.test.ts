@@ -5,17 +5,18 @@ import { startUpDraws } from '@/core/house/startUpDraws';
 import { evaluateWeek } from '@/core/pipeline';
 import { stepsFromSpans } from '@/core/time/stepMath';
 import { demoWeek } from '@/server/demo/demoWeek';
-import { DEMO_BOILERS, DEMO_FIRINGS, KETTLE_HEADER, MAIN_HEADER } from '@/server/demo/plant';
+import { DEMO_BOILERS, DEMO_FIRINGS, DEMO_MAINS, KETTLE_HEADER, MAIN_HEADER } from '@/server/demo/plant';
 
 /** The demo plant is invented; its boilers come up cold after the weekend in 5 + 120 min. */
 const week = demoWeek();
 const { drawn, headers } = evaluateWeek(week);
+const mains = (id: string) => DEMO_MAINS[id] ?? { warmUpMinutes: 0, warmUpKg: 0 };
 const starts = (laterByMin: number) =>
   startUpSequence({
     headerId: MAIN_HEADER,
     headers: [
-      { id: MAIN_HEADER, fromHeaderId: null, warmUpMinutes: 20, warmUpKg: 0 },
-      { id: KETTLE_HEADER, fromHeaderId: MAIN_HEADER, warmUpMinutes: 20, warmUpKg: 0 },
+      { id: MAIN_HEADER, fromHeaderId: null, ...mains(MAIN_HEADER) },
+      { id: KETTLE_HEADER, fromHeaderId: MAIN_HEADER, ...mains(KETTLE_HEADER) },
     ],
     boilers: DEMO_BOILERS.map((boiler) => {
       const firings = DEMO_FIRINGS.filter(({ boilerId }) => boilerId === boiler.id);

@@ -44,6 +44,12 @@ export const DEMO_HEADERS: readonly Header[] = [
   },
 ];
 
+/** Warming and draining the mains by header, invented: minutes, and steam that condenses in them. */
+export const DEMO_MAINS: Readonly<Record<string, { readonly warmUpMinutes: number; readonly warmUpKg: number }>> = {
+  [MAIN_HEADER]: { warmUpMinutes: 20, warmUpKg: 45 },
+  [KETTLE_HEADER]: { warmUpMinutes: 15, warmUpKg: 15 },
+};
+
 const STUDY = 'Invented distribution study TH-D-04, demo';
 export const DEMO_VENT_GROUPS: readonly VentGroup[] = [
   {

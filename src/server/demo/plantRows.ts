@@ -36,7 +36,9 @@ const inOrder = <T>(rows: readonly T[]) => rows.map((row, position) => ({ ...row
 
 async function insertUnits(db: Db): Promise<void> {
   await db.insert(schema.lines).values(inOrder(demo.DEMO_LINES));
-  await db.insert(schema.headers).values(inOrder(demo.DEMO_HEADERS));
+  await db
+    .insert(schema.headers)
+    .values(inOrder(demo.DEMO_HEADERS.map((header) => ({ ...header, ...demo.DEMO_MAINS[header.id] }))));
   await db.insert(schema.ventGroups).values(inOrder(demo.DEMO_VENT_GROUPS));
   await db.insert(schema.units).values(inOrder(demo.DEMO_UNITS.map((unit) => ({ ...unit, ...spreadOf(unit) }))));
   await db.insert(schema.shifts).values(inOrder(demo.DEMO_SHIFTS).map((s) => ({ ...s, days: [...s.days] })));
