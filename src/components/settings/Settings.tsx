@@ -5,7 +5,7 @@ import { OwnForm } from './OwnForm';
 import { PlantFacts } from './PlantFacts';
 import { PlantForm } from './PlantForm';
 
-export interface SettingsProps {
+interface SettingsProps {
   readonly own: OwnSettings;
   readonly plant: PlantSettingsDto;
   readonly plantName: string;
