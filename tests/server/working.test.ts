@@ -55,7 +55,6 @@ function reader<P extends 'plan.read' | 'library.read'>(permission: P, plantId =
   const actor = {
     personId: 'p',
     name: 'P',
-    email: 'p@plant.example',
     plantId,
     plantName: plantId,
     isDemo: false,
