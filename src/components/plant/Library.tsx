@@ -7,7 +7,7 @@ import { Button } from '../ui/Button';
 import { Notice } from '../ui/Notice';
 import { LeaveDialog } from './LeaveDialog';
 import { LISTINGS, type Listing } from './listing';
-import { wordsOf } from './kinds';
+import { withArticle, wordsOf } from './kinds';
 import { ThingForm } from './ThingForm';
 import { ThingList } from './ThingList';
 
@@ -77,7 +77,7 @@ export function Library({ kind, first, canEdit, whoMay }: LibraryProps) {
       <div className="min-w-0">
         <div className="mb-1 flex flex-wrap items-center justify-between gap-3">
           {isOpen ? null : <p className="text-md text-ink-muted">{wordsOf(kind).says}</p>}
-          {canEdit ? <Button onClick={() => open(NEW)}>Add a {wordsOf(kind).one}</Button> : null}
+          {canEdit ? <Button onClick={() => open(NEW)}>Add {withArticle(wordsOf(kind).one)}</Button> : null}
         </div>
         {canEdit ? null : <p className="text-sm text-ink-muted">{whoMay}</p>}
         <div aria-live="polite">

@@ -37,7 +37,7 @@ const addressOf = (kind: ThingKind, id: string | null): string =>
 /** Creates or edits one thing; beside it what follows from it, as it is typed. */
 export function ThingForm(props: ThingFormProps) {
   const { kind, library, thing, canEdit, onSaved, onTyped } = props;
-  const [filled] = useState<Raw>(() => (thing ? (thing.values as Raw) : blankOf(kind)));
+  const [filled] = useState<Raw>(() => (thing ? thing.values : blankOf(kind)));
   const id = thing?.id ?? null;
   const schema = useMemo(() => thingSchema(kind, { library, id }), [kind, library, id]);
   const form = useZodForm(schema, filled);

@@ -90,3 +90,6 @@ export const UNIT_KIND_WORDS = {
   pasteuriser: 'pasteuriser',
   other: 'another kind',
 } as const;
+
+/** 'an accumulator', 'a unit': a word of the library with its article. */
+export const withArticle = (one: string): string => `${one.startsWith('a') ? 'an' : 'a'} ${one}`;

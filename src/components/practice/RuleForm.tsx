@@ -55,7 +55,7 @@ export function RuleForm({ kind, practice, groupId, onSaved, onLeave }: Props) {
   const control = form.control as unknown as FormControl;
   const save = useSave(form, (values) => api<PracticeDto>('/api/practice', { method: 'POST', body: values }), onSaved);
   const typed: FormValues = form.watch();
-  useGroupNumbers(form as unknown as UseFormReturn<FormValues>, kind, practice);
+  useGroupNumbers(form, kind, practice);
   const groups = practice.ventGroups.map(({ id, name }) => ({ value: id, label: name }));
   return (
     <form noValidate onSubmit={save.submit} aria-labelledby="rule-form">
