@@ -19,7 +19,12 @@ const real: HttpProblem = notFound(
 /** The folder of the start command's own mail server; null where messages go to people's mailboxes. */
 export function localMailFolder(env: Env = process.env): string | null {
   const folder = env.LOCAL_MAIL_FOLDER?.trim();
-  return folder && mailServer(env)?.isLoopback ? folder : null;
+  try {
+    return folder && mailServer(env)?.isLoopback ? folder : null;
+  } catch {
+    // What is named can't be a mail server; the worker says so.
+    return null;
+  }
 }
 
 async function read(folder: string, id: string): Promise<LocalMailDto> {

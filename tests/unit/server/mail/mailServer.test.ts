@@ -54,6 +54,7 @@ describe('the start command’s mail', () => {
     expect(localMailFolder({ ...folder, SMTP_URL: 'smtp://127.0.0.1:2525' })).toBe('mail');
     expect(localMailFolder({ ...folder, SMTP_URL: 'smtp://mail.plant.example' })).toBeNull();
     expect(localMailFolder(folder)).toBeNull();
+    expect(localMailFolder({ ...folder, SMTP_URL: 'mail' })).toBeNull();
     expect(localMailFolder({ SMTP_URL: 'smtp://127.0.0.1:2525' })).toBeNull();
   });
 });
