@@ -53,6 +53,14 @@ export function ThingForm(props: ThingFormProps) {
     onSaved,
   );
   const { isDirty } = form.formState;
+  useEffect(() => {
+    // A fault may hang on two fields: what is marked is judged anew whichever of them changes.
+    const { unsubscribe } = form.watch(() => {
+      const marked = Object.keys(form.formState.errors);
+      if (marked.length > 0) void form.trigger(marked);
+    });
+    return unsubscribe;
+  }, [form]);
   useEffect(() => onTyped(isDirty), [isDirty, onTyped]);
   const control = form.control as unknown as Control<Record<string, unknown>, unknown, unknown>;
   const isBehind = thing !== null && JSON.stringify(thing.values) !== JSON.stringify(filled);
