@@ -4,6 +4,7 @@ import type { LevelFigures, LevellingProposal, ProposedMove } from '../../core/l
 import { Button } from '../ui/Button';
 import { groupDigits, spanText, type Clock } from '../time';
 import { useUnits } from '../ui/units';
+import { Relaxations } from './Relaxations';
 import type { BoardModel } from './useBoard';
 import type { BoardActions } from './useBoardActions';
 import { activityName, moveText } from './words';
@@ -23,6 +24,7 @@ export function ProposalView({ proposal, model, actions }: Props) {
     <>
       <Summary proposal={proposal} model={model} />
       <Unresolved proposal={proposal} model={model} />
+      <Relaxations proposal={proposal} model={model} />
       {moves.length === 0 ? (
         <p className="text-sm">No move makes it better. The plan stays as it is.</p>
       ) : (
