@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { themeOf } from '@/server/http/cookies';
 import { needsSignIn, safeNext, signInAddress } from '@/server/http/gate';
 import { originAllowed } from '@/server/http/origin';
+import { tabletCookie } from '@/server/http/tabletCookie';
 import { setSecurityHeaders } from '@/server/http/securityHeaders';
 
 const APP = 'https://plan.example';
@@ -58,6 +59,15 @@ it.each([
   ['/no-such-page', '/404', false],
   ['/api/session', '/api/session', false],
   ['/apiary', '/apiary', true],
+  ['/invitation/some-token', '/invitation/[token]', false],
+  ['/invitation', '/invitation', true],
+  ['/reset', '/reset', false],
+  ['/reset/some-token', '/reset/[token]', false],
+  ['/first-run', '/first-run', false],
+  ['/tablet', '/tablet', false],
+  ['/people', '/people', true],
+  ['/people/me', '/people/me', true],
+  ['/mail', '/mail', true],
   ['/_image', '/_image', false],
 ])('a page wants somebody signed in: %s', (path, pattern, needed) => expect(needsSignIn(path, pattern)).toBe(needed));
 
@@ -84,3 +94,12 @@ it.each([
   ['theme=neon', null],
   ['othertheme=dark', null],
 ])('the theme of %j is %s', (cookie, theme) => expect(themeOf(cookie)).toBe(theme));
+
+describe('a tablet’s cookie', () => {
+  it('is kept from scripts and other sites, and from plain http where the application is on https', () => {
+    expect(tabletCookie('token', 'https://plan.example')).toMatch(
+      /^steadmain_tablet=token; .*HttpOnly; SameSite=Lax; Secure$/,
+    );
+    expect(tabletCookie('token', 'http://10.0.0.5:4321')).not.toContain('Secure');
+  });
+});
