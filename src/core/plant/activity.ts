@@ -1,6 +1,9 @@
 /** A stage run of a batch, a cleaning, a warm-up or an idle spell: whatever occupies a unit or draws steam. */
 export type ActivityKind = 'stage' | 'cleaning' | 'warmUp' | 'idle';
 
+/** How much a cleaning cleans, least first: anything but a rinse is a full clean. */
+export type CleaningKind = 'rinse' | 'wash' | 'allergen';
+
 export type Stage = 'prepare' | 'blanch' | 'cook' | 'fill' | 'retort' | 'pasteurise' | 'other';
 
 /** What goes on while steam is drawn; the rules look for vents among them. */
@@ -78,6 +81,8 @@ export interface Activity {
   readonly id: string;
   readonly kind: ActivityKind;
   readonly stage: Stage | null;
+  /** Of a cleaning that was planned by hand; left out of one: its length alone says what it stands in for. */
+  readonly cleaning?: CleaningKind;
   /** Groups the stage runs that the solver places together. */
   readonly batchId: string | null;
   /** Short number that people call it by, such as "A107". */

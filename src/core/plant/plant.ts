@@ -1,6 +1,6 @@
 import type { Interval } from '../time/interval';
 import type { StepFunction } from '../time/stepFunction';
-import type { LimitUse, Phase } from './activity';
+import type { CleaningKind, LimitUse, Phase } from './activity';
 
 export type UnitKind = 'blancher' | 'kettle' | 'cooker' | 'filler' | 'retort' | 'pasteuriser' | 'other';
 
@@ -100,7 +100,7 @@ export interface CleaningRule {
   readonly fromFamilyId: string;
   readonly toFamilyId: string;
   readonly minutes: number;
-  readonly kind: 'rinse' | 'wash' | 'allergen';
+  readonly kind: CleaningKind;
   /** Its own steam, from the first minute of the cleaning. */
   readonly phases: readonly Phase[];
   readonly uses: readonly LimitUse[];

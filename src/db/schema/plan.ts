@@ -1,6 +1,6 @@
 import { boolean, date, doublePrecision, index, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
 import type { LevellingProgressDto, LevellingState } from '../../contracts/levelling';
-import type { ActivityKind, Fixing, LinkEnd, LinkRule, Mode, Stage } from '../../core/plant/activity';
+import type { ActivityKind, CleaningKind, Fixing, LinkEnd, LinkRule, Mode, Stage } from '../../core/plant/activity';
 import type { Change, EditKind } from '../../core/schedule/edit';
 import type { Week } from '../../core/schedule/week';
 import { createdAt, id, instant } from './columns';
@@ -35,6 +35,8 @@ export const activities = pgTable(
     planId: planId(),
     kind: text('kind').$type<ActivityKind>().notNull(),
     stage: text('stage').$type<Stage>(),
+    /** Of a cleaning that was planned by hand. */
+    cleaning: text('cleaning').$type<CleaningKind>(),
     batchId: text('batch_id'),
     orderId: text('order_id').references(() => orders.id),
     code: text('code').notNull(),

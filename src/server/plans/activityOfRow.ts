@@ -35,6 +35,7 @@ export function activityOfRow(
     id: row.id,
     kind: row.kind,
     stage: row.stage,
+    ...(row.cleaning === null ? {} : { cleaning: row.cleaning }),
     batchId: row.batchId,
     code: row.code,
     title: row.title,
