@@ -37,11 +37,7 @@ interface RelaxationWords {
 /** One of them in words, such as "205 kg/h more on Main header, Tue 06:40 to 06:46". */
 export function relaxationText(
   relaxation: Relaxation,
-  {
-    clock,
-    names,
-    week,
-  }: Pick<BoardModel, 'clock' | 'week'> & { readonly names: Pick<BoardModel['names'], 'activity'> },
+  { clock, names, week }: RelaxationWords,
   units: Units,
 ): string {
   switch (relaxation.kind) {
