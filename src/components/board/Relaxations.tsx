@@ -35,11 +35,7 @@ interface RelaxationWords {
 }
 
 /** One of them in words, such as "205 kg/h more on Main header, Tue 06:40 to 06:46". */
-export function relaxationText(
-  relaxation: Relaxation,
-  { clock, names, week }: RelaxationWords,
-  units: Units,
-): string {
+export function relaxationText(relaxation: Relaxation, { clock, names, week }: RelaxationWords, units: Units): string {
   switch (relaxation.kind) {
     case 'moreSteam': {
       const header = week.plant.headers.find(({ id }) => id === relaxation.headerId)?.name ?? 'the header';
