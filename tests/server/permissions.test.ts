@@ -75,6 +75,8 @@ const WHO_MAY: Readonly<Record<string, readonly Role[] | 'anybody'>> = {
   'POST weeks/[week]/limits': UTILITIES,
   'GET weeks/[week]/index': EVERYBODY,
   'POST weeks/[week]/edits': PLANNER,
+  'POST weeks/[week]/cleanings/index': PLANNER,
+  'DELETE weeks/[week]/cleanings/[activity]': PLANNER,
   'GET weeks/[week]/rework': EVERYBODY,
   'POST weeks/[week]/rework': PLANNER,
   'POST weeks/[week]/issues': PLANNER,

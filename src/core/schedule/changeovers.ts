@@ -1,4 +1,4 @@
-import type { Activity } from '../plant/activity';
+import type { Activity, CleaningKind } from '../plant/activity';
 import type { CleaningRule, UnitKind } from '../plant/plant';
 import { derivedActivity } from './derived';
 import { occupationsByUnit, type Occupation } from './occupation';
@@ -22,7 +22,7 @@ export interface Changeover {
 /**
  * The cleanings between runs of product families on each unit, in order of unit and time. Cleanliness is a state: an
  * allergen clean that the next family asks for after any family since the last allergen clean is asked for here, even
- * where others ran between. A stored cleaning between the runs of at least the rule's length stands in for it.
+ * where others ran between. A stored cleaning between the runs of at least the rule's length and kind stands in for it.
  */
 export function changeovers(week: Week): readonly Changeover[] {
   return cleaningsOf(week, occupationsByUnit(week.activities, week)).changeovers;
@@ -67,39 +67,67 @@ interface UnitState {
   previous: { readonly run: Activity; readonly taken: Occupation } | null;
   /** Families run since the last allergen clean. */
   families: Set<string>;
-  /** The longest stored cleaning since the previous run. */
-  longest: Occupation | null;
+  /** Stored cleanings since the previous run. */
+  stored: StoredClean[];
 }
 
-const lengthOf = (span: Occupation | null): number => (span ? span.to - span.from : 0);
+interface StoredClean {
+  readonly clean: Activity;
+  readonly span: Occupation;
+}
+
+const KINDS: readonly CleaningKind[] = ['rinse', 'wash', 'allergen'];
+
+/** True where a stored cleaning does what a rule asks for: as long, and as much of a clean where its kind is known. */
+function standsIn({ clean, span }: StoredClean, { minutes, kind }: CleaningRule): boolean {
+  const enough = clean.cleaning === undefined || KINDS.indexOf(clean.cleaning) >= KINDS.indexOf(kind);
+  return enough && span.to - span.from >= minutes;
+}
+
+/** The longest of some cleanings, the first of those that are as long. */
+const longestOf = (cleans: readonly StoredClean[]): StoredClean | undefined =>
+  [...cleans].sort((a, b) => b.span.to - b.span.from - (a.span.to - a.span.from))[0];
 
 function unitCleanings(taken: readonly Occupation[], week: Week): Cleanings {
   const index = indexOf(week);
   const found: { changeovers: Changeover[]; allergenCleans: AllergenClean[] } = { changeovers: [], allergenCleans: [] };
   const kind = index.units.get(taken[0]?.unitId ?? '')?.kind;
   if (!kind) return found;
-  const state: UnitState = { previous: null, families: new Set(), longest: null };
+  const state: UnitState = { previous: null, families: new Set(), stored: [] };
   for (const span of taken) {
     const activity = index.activities.get(span.activityId) as Activity;
     if (activity.kind === 'cleaning') {
-      if (lengthOf(span) > lengthOf(state.longest)) state.longest = span;
+      state.stored.push({ clean: activity, span });
     } else if (activity.kind === 'stage' && activity.familyId !== null) {
       const rule = requiredRule(week.plant.cleaning, kind, state, activity.familyId);
       if (rule) addCleaning(found, rule, state, activity, span);
       if (rule?.kind === 'allergen') state.families.clear();
+      forgetCleaned(week.plant.cleaning, kind, state);
       state.families.add(activity.familyId);
       state.previous = { run: activity, taken: span };
-      state.longest = null;
+      state.stored = [];
     }
   }
   return found;
 }
 
-/** A cleaning that follows from the sequence, unless a stored one of its length stands in for it. */
+/** A stored allergen clean of full length does away with a family, whatever runs next; one of no known kind does not. */
+function forgetCleaned(rules: readonly CleaningRule[], unitKind: UnitKind, { families, stored }: UnitState): void {
+  const cleans = stored.filter(({ clean }) => clean.cleaning === 'allergen');
+  if (cleans.length === 0) return;
+  for (const familyId of families) {
+    const asked = rules.filter(
+      (rule) => rule.unitKind === unitKind && rule.fromFamilyId === familyId && rule.kind === 'allergen',
+    );
+    if (asked.every((rule) => cleans.some((clean) => standsIn(clean, rule)))) families.delete(familyId);
+  }
+}
+
+/** A cleaning that follows from the sequence, unless a stored one of its length and kind stands in for it. */
 function addCleaning(
   found: { changeovers: Changeover[]; allergenCleans: AllergenClean[] },
   rule: CleaningRule,
-  { previous, longest }: UnitState,
+  { previous, stored }: UnitState,
   next: Activity,
   span: Occupation,
 ): void {
@@ -107,7 +135,8 @@ function addCleaning(
     if (rule.kind !== 'allergen') return;
     found.allergenCleans.push({ cleaningId, nextId: next.id, doneAt, nextFrom: span.from });
   };
-  if (longest && lengthOf(longest) >= rule.minutes) allergen(longest.activityId, longest.to);
+  const instead = longestOf(stored.filter((clean) => standsIn(clean, rule)));
+  if (instead) allergen(instead.clean.id, instead.span.to);
   else if (previous) {
     const follows = changeover(rule, previous.run, previous.taken, next, span);
     found.changeovers.push(follows);
@@ -150,7 +179,12 @@ function changeover(
   };
 }
 
-const CLEANING_TITLES = { rinse: 'Rinse', wash: 'Wash', allergen: 'Allergen clean' } as const;
+/** Cleanings as they are called. */
+export const CLEANING_TITLES: Readonly<Record<CleaningKind, string>> = {
+  rinse: 'Rinse',
+  wash: 'Wash',
+  allergen: 'Allergen clean',
+};
 
 function cleaningActivity(rule: CleaningRule, run: Activity, unitId: string, start: number): Activity {
   const { minutes, phases, uses, dutyId = null } = rule;

@@ -42,14 +42,14 @@ interface Spell {
 
 /**
  * Runs and cleanings of a unit in order of time, those included that follow from the sequence. Anything but a rinse is a
- * full clean; a cleaning that is stored is taken for one.
+ * full clean; a stored cleaning of no known kind is taken for one.
  */
 function unitHistory({ week, occupations, changeovers }: JudgedWeek, unitId: string): Spell[] {
   const { activities } = indexOf(week);
   const taken = occupations.get(unitId) ?? [];
   const stored = taken.map(({ activityId, from, to }: Occupation): Spell => {
-    const { kind } = activities.get(activityId) as Activity;
-    return { activityId, from, to, cleans: kind === 'cleaning' ? 'full' : 'no' };
+    const { kind, cleaning } = activities.get(activityId) as Activity;
+    return { activityId, from, to, cleans: kind !== 'cleaning' ? 'no' : cleaning === 'rinse' ? 'rinse' : 'full' };
   });
   const derived = changeovers
     .filter((changeover) => changeover.unitId === unitId)
