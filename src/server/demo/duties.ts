@@ -102,6 +102,7 @@ function retortDuty(product: DemoProduct): DemoDuty {
       ambientC: 25,
       surfaceLossWPerM2K: 14,
       ventMin: 6,
+      ventSteps: 2,
       ventEndC: 107.2222222,
       contentsAfterVentC: hotter(0.23),
       comeUpMin: 6,
