@@ -3,7 +3,7 @@ import { memo, useMemo } from 'react';
 import { drawnMode, type Activity, type Mode } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
 import type { FloorEventDto } from '../../contracts/week';
-import { canCarry, isRun } from './carry';
+import { canCarry, isPlanned } from './carry';
 import type { Drawn } from './drawn';
 import { FixingMark } from './FixingMark';
 import { fittingWords, outlinePath, spellsOf, titleSlot } from './outline';
@@ -35,7 +35,7 @@ function Words({ activity, mode, peak, pxPerMin }: InsideProps & { readonly mode
     const slot = titleSlot(spells, (peak * (OUTLINE_PX - WORDS_PX)) / OUTLINE_PX, pxPerMin);
     if (!slot) return null;
     const room = slot.widthPx - 8 - (activity.fixing === 'free' && !mode.neverMoved ? 0 : 12);
-    const code = isRun(activity) ? activity.code : activity.title;
+    const code = isPlanned(activity) ? activity.code : activity.title;
     const text = fittingWords(activity.title, code, room);
     return text === '' ? null : { text, left: slot.leftPx + 4, width: room + 2 };
   }, [activity, mode, peak, pxPerMin]);
@@ -135,7 +135,8 @@ export const Block = memo(function Block({ label, ...inside }: Props) {
       data-activity={activity.id}
       data-kin={kin}
       data-still={still}
-      data-follows={!isRun(activity)}
+      data-follows={!isPlanned(activity)}
+      data-clean={activity.kind === 'cleaning'}
       data-gap={activity.kind === 'idle' || activity.kind === 'warmUp'}
       data-carried={carried}
       style={{ left: drawn.start * pxPerMin, width: Math.max(2, drawn.minutes * pxPerMin - 1) }}

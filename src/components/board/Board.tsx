@@ -3,6 +3,7 @@ import { useMemo, useRef, useState } from 'react';
 import type { MeDto } from '../../contracts/account';
 import type { WeekDto } from '../../contracts/week';
 import { Hatch } from '../ui/Hatch';
+import { AddClean } from './AddClean';
 import { BarActions } from './BarActions';
 import { BoardBar } from './BoardBar';
 import { BoardRows } from './BoardRows';
@@ -22,6 +23,7 @@ import { TimeHead } from './TimeHead';
 import { useBoard } from './useBoard';
 import { useBoardActions } from './useBoardActions';
 import { useBoardKeys } from './useBoardKeys';
+import { useCleans } from './useCleans';
 import { useHandDrag } from './useHandDrag';
 import { weekWords } from './weekWords';
 
@@ -44,6 +46,7 @@ interface Props {
 export function Board({ me, initial }: Props) {
   const model = useBoard(me, initial);
   const actions = useBoardActions(model);
+  const cleans = useCleans(model, actions);
   const { view, week, clock, carry, dto } = model;
   const { scale, scrollRef, headRef } = view;
   const rowsRef = useRef<HTMLDivElement>(null);
@@ -142,7 +145,7 @@ export function Board({ me, initial }: Props) {
             {model.levelling.open ? (
               <LevelPanel {...{ model, actions }} />
             ) : (
-              <Panel {...{ model, actions, pointed, limitsOpen }} />
+              <Panel {...{ model, actions, pointed, limitsOpen, cleans }} />
             )}
           </aside>
         </div>
@@ -151,6 +154,15 @@ export function Board({ me, initial }: Props) {
         </p>
         <Notices notices={model.notices} onDismiss={model.dismiss} />
         {issuing ? <IssueDialog model={model} onClose={() => setIssuing(false)} onGo={actions.goTo} /> : null}
+        {cleans.asked !== null ? (
+          <AddClean
+            weekStart={dto.weekStart}
+            plant={dto.week.plant}
+            unitId={cleans.asked === 'any' ? null : cleans.asked.unitId}
+            onClose={cleans.close}
+            onAdded={cleans.added}
+          />
+        ) : null}
         {slipping !== null ? (
           <SlipDialog
             lines={week.plant.lines}

@@ -2,12 +2,17 @@ import { useState } from 'react';
 import type { Breach } from '../../core/schedule/breach';
 import { breachSentence, type Names } from '../../core/schedule/sentences';
 import type { Clock } from '../time';
+import { Button } from '../ui/Button';
+import type { WantedClean } from './cleans';
 import { breachGroups, type BreachClass, type BreachGroup } from './drawn';
 
 interface Share {
   readonly names: Names;
   readonly clock: Clock;
   readonly onGo: (breach: Breach) => void;
+  /** The clean that would put a breach right, where one can be added. */
+  readonly wantedClean: (breach: Breach) => WantedClean | null;
+  readonly onClean: (wanted: WantedClean) => void;
 }
 
 interface Props extends Share {
@@ -87,6 +92,7 @@ function Lines({ breaches, ...share }: Share & { readonly breaches: readonly Bre
           <li key={breach.id}>
             {newDay ? <p className="mt-1.5 text-2xs text-ink-muted">{clock.day(breach.from)}</p> : null}
             <Line breach={breach} {...share} />
+            <CleanButton breach={breach} {...share} />
           </li>
         );
       })}
@@ -100,6 +106,17 @@ const BARS: Readonly<Record<BreachClass, string>> = {
   shared: 'bg-ink-muted',
   time: 'bg-edge',
 };
+
+/** Below what a clean would put right. */
+function CleanButton({ breach, names, wantedClean, onClean }: Share & { readonly breach: Breach }) {
+  const wanted = wantedClean(breach);
+  if (!wanted) return null;
+  return (
+    <Button size="small" className="mt-0.5 mb-1.5 ml-3.5" onClick={() => onClean(wanted)}>
+      Add a clean for {names.unit(wanted.unitId)}
+    </Button>
+  );
+}
 
 function Line({ breach, names, clock, onGo }: Share & { readonly breach: Breach }) {
   const sameDay = clock.day(breach.from) === clock.day(Math.max(breach.from, breach.to - 1));

@@ -7,19 +7,21 @@ import type { Store } from './store';
 import { Unplaced } from './Unplaced';
 import type { BoardModel } from './useBoard';
 import type { BoardActions } from './useBoardActions';
+import type { Cleans } from './useCleans';
 
 interface Props {
   readonly model: BoardModel;
   readonly actions: BoardActions;
   readonly pointed: Store<PointedAt | null>;
   readonly limitsOpen: boolean;
+  readonly cleans: Cleans;
 }
 
 /**
  * What is to put right and what waits for a place; docked below them what is selected, so that a line that is clicked stays
  * where it was.
  */
-export function Panel({ model, actions, pointed, limitsOpen }: Props) {
+export function Panel({ model, actions, pointed, limitsOpen, cleans }: Props) {
   const { selected } = actions;
   const { view } = model;
   return (
@@ -43,6 +45,8 @@ export function Panel({ model, actions, pointed, limitsOpen }: Props) {
             clock={model.clock}
             nowMin={model.nowMin}
             onGo={actions.goTo}
+            wantedClean={cleans.wantedFor}
+            onClean={cleans.ask}
           />
         </div>
         <ReworkNotice weekStart={model.dto.weekStart} readAt={model.dto.now} mayEdit={model.mayEdit} />
@@ -57,6 +61,7 @@ export function Panel({ model, actions, pointed, limitsOpen }: Props) {
             onSelect={actions.setSelectedId}
             onLift={actions.lift}
             onPlaceAll={actions.placeAll}
+            onAddClean={cleans.mayAdd ? () => cleans.ask('any') : null}
           />
         </div>
       </div>
@@ -71,6 +76,8 @@ export function Panel({ model, actions, pointed, limitsOpen }: Props) {
             moved={model.dto.moved[selected.id]}
             onFix={actions.toggleFix}
             onTakeOff={actions.takeOff}
+            onRemove={cleans.remove}
+            isRemoving={cleans.isRemoving}
           />
         </div>
       ) : null}

@@ -6,12 +6,12 @@ import type { Week } from '../../core/schedule/week';
 import { Button } from '../ui/Button';
 import { spanText, type Clock } from '../time';
 import { useUnits } from '../ui/units';
-import { canCarry, isRun } from './carry';
+import { canCarry, isPlanned } from './carry';
 import { FixingMark } from './FixingMark';
 import { gapReason, warmWords } from './gapWords';
 import { usesOf } from './limits';
 import { waitSinceClosing } from './threads';
-import { FIXING_WORDS, FOLLOWING_WORDS, NEVER_MOVED, STAGE_WORDS, unitName } from './words';
+import { FIXING_WORDS, NEVER_MOVED, unitName, whatWords } from './words';
 
 interface Props {
   readonly activity: Activity;
@@ -22,14 +22,16 @@ interface Props {
   readonly moved: { readonly by: string; readonly at: string } | undefined;
   readonly onFix: () => void;
   readonly onTakeOff: () => void;
+  readonly onRemove: (clean: Activity) => void;
+  readonly isRemoving: boolean;
 }
 
 /** The selected activity: where and when, its steam, its due time, its wait. */
 export function SelectedDetail(props: Props) {
-  const { activity, week, evaluation, clock, mayEdit, moved, onFix, onTakeOff } = props;
+  const { activity, week, evaluation, clock, mayEdit, moved, onFix, onTakeOff, onRemove, isRemoving } = props;
   const units = useUnits();
   const mode = drawnMode(activity);
-  const run = isRun(activity);
+  const planned = isPlanned(activity);
   const why = gapReason(activity, evaluation.gapDraws, evaluation.drawn, week.plant);
   const warm = warmWords(activity, week.activities);
   return (
@@ -40,9 +42,7 @@ export function SelectedDetail(props: Props) {
       </h2>
       <p className="flex items-center gap-1.5 text-xs text-ink-muted">
         <FixingMark fixing={activity.fixing} className="size-3 fill-ink" />
-        {[activity.stage ? STAGE_WORDS[activity.stage] : FOLLOWING_WORDS[activity.kind], FIXING_WORDS[activity.fixing]]
-          .slice(0, run ? 2 : 1)
-          .join(', ')}
+        {[whatWords(activity), FIXING_WORDS[activity.fixing]].slice(0, planned ? 2 : 1).join(', ')}
       </p>
       <dl className="mt-2 grid grid-cols-[6.5rem_1fr] gap-y-0.5 text-sm">
         <Place {...{ activity, week, clock }} />
@@ -79,6 +79,11 @@ export function SelectedDetail(props: Props) {
               Take off
             </Button>
           </>
+        ) : null}
+        {mayEdit && planned && activity.kind === 'cleaning' && !activity.placement ? (
+          <Button size="small" busy={isRemoving} onClick={() => onRemove(activity)}>
+            Remove it
+          </Button>
         ) : null}
         <a className="link text-sm" href={`/working/${encodeURIComponent(activity.id)}`}>
           Show the working

@@ -4,7 +4,7 @@ import { drawnMode, type Activity } from '../../core/plant/activity';
 import type { Clock } from '../time';
 import type { WaitingGroup } from './drawn';
 import { Outline } from './Block';
-import { STAGE_WORDS } from './words';
+import { whatWords } from './words';
 
 interface Props {
   readonly groups: readonly WaitingGroup[];
@@ -18,10 +18,12 @@ interface Props {
   /** By keys: picks the activity up at its first unit. */
   readonly onLift: (activity: Activity) => void;
   readonly onPlaceAll: (group: WaitingGroup) => void;
+  /** null: the plant cleans nothing, or it is not this person's to do. */
+  readonly onAddClean: (() => void) | null;
 }
 
 /** What still waits for a place, by due time. Cards are dragged onto the board, or picked up with Enter. */
-export function Unplaced({ groups, nothingPlanned, onPlaceAll, mayEdit, ...card }: Props) {
+export function Unplaced({ groups, nothingPlanned, onPlaceAll, onAddClean, mayEdit, ...card }: Props) {
   const count = groups.reduce((sum, group) => sum + group.activities.length, 0);
   return (
     <section aria-labelledby="not-yet-placed">
@@ -29,8 +31,15 @@ export function Unplaced({ groups, nothingPlanned, onPlaceAll, mayEdit, ...card 
         <h2 id="not-yet-placed" className="text-base font-semibold">
           Not yet placed
         </h2>
-        <span className="text-sm text-ink-muted" data-testid="unplaced-count">
-          {count}
+        <span className="flex items-baseline gap-3">
+          {onAddClean ? (
+            <button type="button" className="link text-xs" onClick={onAddClean}>
+              Add a clean…
+            </button>
+          ) : null}
+          <span className="text-sm text-ink-muted" data-testid="unplaced-count">
+            {count}
+          </span>
         </span>
       </header>
       {count === 0 ? (
@@ -71,10 +80,10 @@ const Card = memo(function Card({
   selectedId,
   onSelect,
   onLift,
-}: Omit<Props, 'groups' | 'nothingPlanned' | 'onPlaceAll'> & { readonly activity: Activity }) {
+}: Omit<Props, 'groups' | 'nothingPlanned' | 'onPlaceAll' | 'onAddClean'> & { readonly activity: Activity }) {
   const { setNodeRef, listeners } = useDraggable({ id: activity.id, disabled: !mayEdit });
   const mode = drawnMode(activity);
-  const stage = activity.stage ? STAGE_WORDS[activity.stage] : '';
+  const stage = whatWords(activity);
   return (
     <button
       ref={setNodeRef}

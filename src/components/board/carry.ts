@@ -1,4 +1,5 @@
 import type { Activity, Mode, Placement } from '../../core/plant/activity';
+import { isDerived } from '../../core/schedule/derived';
 import { unitAt, unitBeside, type Rows } from './rows';
 import { clampStart, minuteAt, snap, type TimeScale } from './timeScale';
 
@@ -20,14 +21,19 @@ export interface Carry {
   readonly target: Target | null;
 }
 
-/** A run of a batch; what is not, follows from the sequence on the units: cleanings, idle spells, warm-ups. */
+/** A run of a batch. */
 export function isRun(activity: Activity): boolean {
   return activity.kind === 'stage';
 }
 
+/** What a planner places: runs, and cleans that were added. The rest follows from the sequence on the units. */
+export function isPlanned(activity: Activity): boolean {
+  return isRun(activity) || (activity.kind === 'cleaning' && !isDerived(activity));
+}
+
 /** An activity that the floor has started, or that is drawn only, stays where it is. */
 export function canCarry(activity: Activity): boolean {
-  return isRun(activity) && (activity.fixing === 'free' || activity.fixing === 'fixed');
+  return isPlanned(activity) && (activity.fixing === 'free' || activity.fixing === 'fixed');
 }
 
 export function pickUp(activity: Activity, by: Carry['by'], heldAtMin = 0): Carry {

@@ -1,6 +1,6 @@
 import { drawnMode, type Activity, type Link } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
-import { isRun } from './carry';
+import { isPlanned } from './carry';
 
 /** A placed activity as the board draws it. */
 export interface Drawn {
@@ -36,7 +36,7 @@ export function drawnByUnit(activities: readonly Activity[]): ReadonlyMap<string
 /** Activities that are not yet placed, the earliest due first. */
 export function notYetPlaced(activities: readonly Activity[]): Activity[] {
   return activities
-    .filter((activity) => !activity.placement && isRun(activity))
+    .filter((activity) => !activity.placement && isPlanned(activity))
     .sort((a, b) => (a.due ?? Infinity) - (b.due ?? Infinity) || (a.code < b.code ? -1 : a.code > b.code ? 1 : 0));
 }
 

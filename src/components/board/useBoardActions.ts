@@ -1,4 +1,4 @@
-import { useCallback, useState } from 'react';
+import { useCallback, useRef, useState } from 'react';
 import type { Activity } from '../../core/plant/activity';
 import { fixActivity, moveActivity, slipLine, takeOffActivity } from '../../core/schedule/hand';
 import { placeBatch } from '../../core/schedule/placeBatch';
@@ -11,7 +11,7 @@ import type { BoardModel } from './useBoard';
 import { useLatest } from './useLatest';
 import { activityName, placeText, unitName } from './words';
 import { verdictOf } from './verdict';
-import { isRun, type Carry } from './carry';
+import { isPlanned, type Carry } from './carry';
 
 /** Gives the focus to a block once it is drawn. */
 export function focusBlock(id: string): void {
@@ -26,6 +26,7 @@ export function useBoardActions(model: BoardModel) {
   const [selectedId, setSelectedId] = useState<string | null>(null);
   const [said, setSaid] = useState('');
   const latest = useLatest({ model, selectedId });
+  const liftAt = useRef(new Map<string, number>());
   const selected = model.drawn.find((activity) => activity.id === selectedId) ?? null;
 
   const make = useCallback(
@@ -89,10 +90,10 @@ export function useBoardActions(model: BoardModel) {
 
   const lift = (activity: Activity | null): void => {
     if (!activity || !model.mayEdit) return;
-    const at = Math.max(0, model.nowMin);
+    const at = liftAt.current.get(activity.id) ?? Math.max(0, model.nowMin);
     if (!model.carry.lift(activity, 'keys', { atMinute: at })) {
       setSaid(
-        isRun(activity)
+        isPlanned(activity)
           ? `${activityName(activity)} has started on the floor and stays where it is.`
           : `${activityName(activity)} follows from the sequence on its unit and moves with the runs.`,
       );
@@ -138,13 +139,13 @@ export function useBoardActions(model: BoardModel) {
   };
 
   const toggleFix = (): void => {
-    if (!selected || !model.mayEdit || !isRun(selected) || !selected.placement) return;
+    if (!selected || !model.mayEdit || !isPlanned(selected) || !selected.placement) return;
     const fixing = selected.fixing === 'fixed' ? 'free' : 'fixed';
     make(fixActivity(model.dto.week, selected.id, fixing), `${activityName(selected)} is ${fixing}.`);
   };
 
   const takeOff = (): void => {
-    if (!selected || !model.mayEdit || !isRun(selected) || !selected.placement) return;
+    if (!selected || !model.mayEdit || !isPlanned(selected) || !selected.placement) return;
     make(takeOffActivity(model.dto.week, selected.id), `${activityName(selected)} is not yet placed.`);
   };
 
@@ -181,6 +182,9 @@ export function useBoardActions(model: BoardModel) {
 
   return {
     selected,
+    say: setSaid,
+    /** Has keys first hold an activity that waits at that minute. */
+    liftLater: (id: string, minute: number) => void liftAt.current.set(id, minute),
     selectedId,
     setSelectedId,
     said,

@@ -10,6 +10,8 @@ import {
 } from '../../core/plant/activity';
 import type { HeaderJudgement } from '../../core/header/judgement';
 import type { PlantModel } from '../../core/plant/plant';
+import { isPlanned } from './carry';
+import { CLEAN_WORDS } from './cleans';
 import { groupDigits, spanText, type Clock } from '../time';
 import type { Units } from '../units';
 
@@ -24,7 +26,7 @@ export const STAGE_WORDS: Readonly<Record<Stage, string>> = {
 };
 
 /** What follows from the sequence on the units, by kind. */
-export const FOLLOWING_WORDS: Readonly<Record<ActivityKind, string>> = {
+const FOLLOWING_WORDS: Readonly<Record<ActivityKind, string>> = {
   stage: 'run',
   cleaning: 'cleaning, follows from the sequence',
   idle: 'kept hot until the next run, follows from the gap',
@@ -33,6 +35,14 @@ export const FOLLOWING_WORDS: Readonly<Record<ActivityKind, string>> = {
 
 /** Of machines that take hours to heat up and then draw steadily. */
 export const NEVER_MOVED = 'only by hand: levelling and slipping leave it where it is';
+
+/** What an activity is: its stage, the kind of a planned clean, or what it follows from. */
+export function whatWords(activity: Activity): string {
+  if (activity.stage) return STAGE_WORDS[activity.stage];
+  return activity.kind === 'cleaning' && isPlanned(activity)
+    ? CLEAN_WORDS[activity.cleaning ?? 'wash']
+    : FOLLOWING_WORDS[activity.kind];
+}
 
 export const FIXING_WORDS: Readonly<Record<Fixing, string>> = {
   free: 'free to move',

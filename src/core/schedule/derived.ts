@@ -39,3 +39,8 @@ export function derivedActivity(derived: Derived): Activity {
     revision: 0,
   };
 }
+
+/** True for what follows from the sequence on a unit; what is stored has an id of its own. */
+export function isDerived({ id }: Pick<Activity, 'id'>): boolean {
+  return /^(clean|idle|warm):/.test(id);
+}

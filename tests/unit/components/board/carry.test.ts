@@ -71,6 +71,13 @@ describe('canCarry', () => {
     expect(canCarry(activity('a', { fixing: 'fixed' }))).toBe(true);
     expect(canCarry(activity('a', { fixing: 'started' }))).toBe(false);
     expect(canCarry(activity('a', { fixing: 'done' }))).toBe(false);
-    expect(canCarry(activity('a', { kind: 'cleaning' }))).toBe(false);
+    expect(canCarry(activity('clean:a', { kind: 'cleaning' }))).toBe(false);
+    expect(canCarry(activity('warm:a', { kind: 'warmUp' }))).toBe(false);
+  });
+
+  it('should take a clean that was planned like any run', () => {
+    const clean = activity('c1', { kind: 'cleaning', cleaning: 'wash', stage: null });
+    expect(canCarry(clean)).toBe(true);
+    expect(canCarry({ ...clean, fixing: 'started' })).toBe(false);
   });
 });
