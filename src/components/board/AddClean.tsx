@@ -39,7 +39,7 @@ export function AddClean({ weekStart, plant, unitId, onClose, onAdded }: Props) 
   }, [form, otherKind]);
   const unitKind = cleanable.find(({ unit }) => unit.id === chosen.unitId)?.unit.kind ?? 'other';
   const rule = longestRule(plant.cleaning, unitKind, otherKind ?? chosen.kind);
-  const takes = rule ? `At least ${spanText(rule.minutes)}, as the longest rule for it has it.` : '';
+  const takes = rule ? `At least ${spanText(rule.minutes)}: the longest of the plant’s rules for it.` : '';
   return (
     <Dialog open title="Add a clean" onClose={onClose}>
       <form onSubmit={add.submit} noValidate>

@@ -2,7 +2,6 @@ import { useState } from 'react';
 import type { Breach } from '../../core/schedule/breach';
 import { breachSentence, type Names } from '../../core/schedule/sentences';
 import type { Clock } from '../time';
-import { Button } from '../ui/Button';
 import type { WantedClean } from './cleans';
 import { breachGroups, type BreachClass, type BreachGroup } from './drawn';
 
@@ -112,9 +111,9 @@ function CleanButton({ breach, names, wantedClean, onClean }: Share & { readonly
   const wanted = wantedClean(breach);
   if (!wanted) return null;
   return (
-    <Button size="small" className="mt-0.5 mb-1.5 ml-3.5" onClick={() => onClean(wanted)}>
+    <button type="button" className="link mb-1 ml-3.5 text-xs" onClick={() => onClean(wanted)}>
       Add a clean for {names.unit(wanted.unitId)}
-    </Button>
+    </button>
   );
 }
 

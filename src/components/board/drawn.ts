@@ -1,6 +1,6 @@
 import { drawnMode, type Activity, type Link } from '../../core/plant/activity';
 import type { Breach } from '../../core/schedule/breach';
-import { isPlanned } from './carry';
+import { isPlanned, isRun } from './carry';
 
 /** A placed activity as the board draws it. */
 export interface Drawn {
@@ -33,11 +33,16 @@ export function drawnByUnit(activities: readonly Activity[]): ReadonlyMap<string
   return byUnit;
 }
 
-/** Activities that are not yet placed, the earliest due first. */
+/** Activities that are not yet placed: cleans that were added, then runs, the earliest due first. */
 export function notYetPlaced(activities: readonly Activity[]): Activity[] {
   return activities
     .filter((activity) => !activity.placement && isPlanned(activity))
-    .sort((a, b) => (a.due ?? Infinity) - (b.due ?? Infinity) || (a.code < b.code ? -1 : a.code > b.code ? 1 : 0));
+    .sort(
+      (a, b) =>
+        Number(isRun(a)) - Number(isRun(b)) ||
+        (a.due ?? Infinity) - (b.due ?? Infinity) ||
+        (a.code < b.code ? -1 : a.code > b.code ? 1 : 0),
+    );
 }
 
 /** The breaches that concern each activity. */

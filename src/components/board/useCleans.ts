@@ -7,11 +7,18 @@ import { cleanableUnits } from '../../core/schedule/plannedCleaning';
 import { api, messageOf } from '../query/api';
 import { cleanFor, type WantedClean } from './cleans';
 import type { BoardModel } from './useBoard';
-import { focusBlock, type BoardActions } from './useBoardActions';
+import type { BoardActions } from './useBoardActions';
 import { weekKey } from './useWeek';
 
 /** What the dialog is open for: a clean that puts something right, or any. */
 type Asked = WantedClean | 'any';
+
+/** Gives the focus to the card of a clean that waits, clear of what is docked below it. */
+function showCard(id: string): void {
+  const card = document.querySelector<HTMLElement>(`.board-panel [data-activity="${CSS.escape(id)}"]`);
+  card?.focus({ preventScroll: true });
+  card?.scrollIntoView({ block: 'center' });
+}
 
 /** Adding cleans to the week and removing those that wait. */
 export function useCleans({ dto, byUnit, waiting, mayEdit, tell }: BoardModel, actions: BoardActions) {
@@ -29,7 +36,7 @@ export function useCleans({ dto, byUnit, waiting, mayEdit, tell }: BoardModel, a
     arriving.current = null;
     setSelectedId(clean.id);
     say(`${clean.code} ${clean.title} waits for a place. Enter picks it up.`);
-    focusBlock(clean.id);
+    requestAnimationFrame(() => showCard(clean.id));
   }, [waiting, setSelectedId, say]);
 
   const added = (clean: CleaningPlanDto): void => {
