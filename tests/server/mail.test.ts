@@ -1,3 +1,5 @@
+import { spawn } from 'node:child_process';
+import { fileURLToPath } from 'node:url';
 import { eq, sql } from 'drizzle-orm';
 import { beforeAll, beforeEach, describe, expect, it, onTestFinished } from 'vitest';
 import { db } from '@/db/client';
@@ -248,6 +250,27 @@ describe('several workers', () => {
     await db.update(mails).set({ leaseEndsAt: sql`now() - interval '1 second'` });
     expect(await sendDue(server.server)).toBe(1);
     expect(await rowOf(id)).toMatchObject({ state: 'sent', tries: 2 });
+  });
+
+  it('take over from a process that is killed while the server has the message and has not answered', async () => {
+    const server = await fake({}, (nth, done) => (nth === 1 ? undefined : done(null)));
+    const id = await queue();
+    const env = { ...process.env, SMTP_URL: `smtp://127.0.0.1:${server.server.port}` };
+    const entry = fileURLToPath(new URL('../support/mailWorker.ts', import.meta.url));
+    const worker = spawn(process.execPath, ['--import', 'tsx', entry], {
+      env,
+      stdio: 'inherit',
+    });
+    const ended = new Promise((resolve) => worker.once('exit', resolve));
+    await expect.poll(() => server.mails.length, { timeout: 30_000 }).toBe(1);
+    worker.kill('SIGKILL');
+    await ended;
+    expect(await rowOf(id)).toMatchObject({ state: 'sending', tries: 1 });
+    await db.update(mails).set({ leaseEndsAt: sql`now() - interval '1 second'` });
+    await sendDue(server.server);
+    const { messageId, state } = await rowOf(id);
+    expect(state).toBe('sent');
+    expect(server.mails.map((mail) => mail.messageId)).toEqual([messageId, messageId]);
   });
 
   it('do not undo what another has done since', async () => {
