@@ -16,25 +16,39 @@ export default {
     {
       name: 'core-stages-in-order',
       comment:
-        'A week is worked out in stages, duty, demand, header, house, levelling, schedule, shift; a stage reads what came ' +
-        'before it, never what comes after, so that each can be understood alone.',
+        'A week is worked out in stages, duty, demand, orders, header, house, levelling, schedule, shift; a stage reads what ' +
+        'came before it, never what comes after, so that each can be understood alone.',
       severity: 'error',
       from: { path: '^src/core/(quantity|time|steam|plant)/' },
-      to: { path: '^src/core/(duty|demand|header|house|levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/(duty|demand|orders|header|house|levelling|schedule|shift|pipeline)' },
     },
     {
       name: 'duty-before-demand',
       comment: 'Duties are worked out before any load exists (see core-stages-in-order).',
       severity: 'error',
       from: { path: '^src/core/duty/' },
-      to: { path: '^src/core/(demand|header|house|levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/(demand|orders|header|house|levelling|schedule|shift|pipeline)' },
     },
     {
       name: 'demand-before-header',
       comment: 'Demand belongs to one activity; the header sums them afterwards (see core-stages-in-order).',
       severity: 'error',
       from: { path: '^src/core/demand/' },
+      to: { path: '^src/core/(orders|header|house|levelling|schedule|shift|pipeline)' },
+    },
+    {
+      name: 'orders-before-the-week',
+      comment: 'An order is split by its route alone; where its runs then stand is the week’s business.',
+      severity: 'error',
+      from: { path: '^src/core/orders/' },
       to: { path: '^src/core/(header|house|levelling|schedule|shift|pipeline)' },
+    },
+    {
+      name: 'the-week-without-orders',
+      comment: 'Rules, levelling and load know activities and links, whatever order they came from.',
+      severity: 'error',
+      from: { path: '^src/core/(header|house|levelling|schedule|shift|pipeline)' },
+      to: { path: '^src/core/orders/' },
     },
     {
       name: 'header-before-levelling',

@@ -41,6 +41,8 @@ export interface Mode {
   readonly warm?: readonly WarmPhases[];
   /** Hours of heating up, then a steady draw: levelling and slipping leave it where the planner put it. */
   readonly neverMoved?: boolean;
+  /** Duty inputs that hang on the run's quantity and stand instead of the duty's own, such as `runMin`. */
+  readonly sized?: Readonly<Record<string, number>>;
 }
 
 /** Draws of a machine that is kept hot, or shut and warmed up again, between the run before and this one. */

@@ -148,6 +148,14 @@ export const routeModes = pgTable(
     leadMin: integer('lead_min').notNull().default(0),
     afterMin: integer('after_min').notNull().default(0),
     uses: jsonb('uses').$type<LimitUse[]>().notNull(),
+    /** What one batch takes in [kg]; null: the duty's own. */
+    sizeKg: doublePrecision('size_kg'),
+    /** Containers of one load; null: the duty's own. */
+    pieces: integer('pieces'),
+    /** Containers a minute of a filler; null: the duty's own, else one load in `minutes`. */
+    piecesPerMin: doublePrecision('pieces_per_min'),
+    /** kg in containers for every kg that goes in; null: 1, less what the duty boils off. */
+    yield: doublePrecision('yield'),
   },
   (t) => [unique('route_modes_stage_unit').on(t.productId, t.position, t.unitId)],
 );

@@ -13,11 +13,15 @@ export const orders = pgTable(
       .notNull()
       .references(() => products.id),
     quantityKg: doublePrecision('quantity_kg').notNull(),
+    /** As it was typed: shown and edited in it. */
+    quantityUnit: text('quantity_unit').$type<'cases' | 'kg'>().notNull().default('cases'),
     earliestAt: instant('earliest_at'),
     latestStartAt: instant('latest_start_at'),
     dueAt: instant('due_at').notNull(),
     priority: integer('priority').notNull().default(1),
     createdAt: createdAt(),
+    /** Counts every change; a save names the one that it read. */
+    revision: integer('revision').notNull().default(0),
   },
   (t) => [index('orders_due').on(t.plantId, t.dueAt)],
 );

@@ -55,8 +55,9 @@ export function reworkedModes(
   modeOf: (stage: StageOnUnit) => Result<Mode>,
 ): Reworked {
   const faults: string[] = [];
+  const sized = run.modes.find((mode) => mode.sized)?.sized;
   const worked = (row: StageOnUnit, kept: Mode | null): Mode[] => {
-    const mode = modeOf(row);
+    const mode = modeOf(sized ? { ...row, sized } : row);
     if (!mode.ok) faults.push(mode.error.message);
     if (!mode.ok) return kept ? [kept] : [];
     const uses = kept ? usesWithin(kept.uses, row.uses, kept.minutes, mode.value.minutes) : mode.value.uses;

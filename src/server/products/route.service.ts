@@ -10,7 +10,7 @@ import { badInput, conflict, notFound, type HttpProblem } from '../http/problem'
 import { newId } from '../id';
 import { record } from '../record/record';
 import { routeMark } from './productsDto';
-import { limitRows, lockProduct, routeRows } from './products.repo';
+import { limitRows, lockProduct, routeRows, type RouteRow } from './products.repo';
 import type { SavedProduct } from './products.service';
 import { stageModes } from './stageModes';
 
@@ -36,7 +36,7 @@ export function saveRoute(
     const faults = await faultsOf(tx, actor, request);
     if (faults[0]) return fail({ ...badInput('ROUTE', faults[0].message), fields: faults });
     await tx.delete(routeModes).where(and(eq(routeModes.plantId, actor.plantId), eq(routeModes.productId, productId)));
-    const rows = rowsOf(actor.plantId, productId, request);
+    const rows = rowsOf(actor.plantId, productId, request, before);
     if (rows.length > 0) await tx.insert(routeModes).values(rows);
     await record(tx, actor, 'product.route', productId, { stages: request.stages });
     await notify(tx, actor.plantId, { kind: 'plant' });
@@ -44,10 +44,19 @@ export function saveRoute(
   });
 }
 
-const rowsOf = (plantId: string, productId: string, { stages }: RouteRequest) =>
-  stages.flatMap(({ stage, units, uses }, position) =>
-    units.map((unit) => ({ id: newId(), plantId, productId, position, stage, ...unit, uses: [...uses] })),
+/** New rows; what orders are split by stays with its stage and unit. */
+function rowsOf(plantId: string, productId: string, { stages }: RouteRequest, before: readonly RouteRow[]) {
+  const splitBy = (stage: RouteRow['stage'], unitId: string) => {
+    const row = before.find((old) => old.stage === stage && old.unitId === unitId);
+    return row ? { sizeKg: row.sizeKg, pieces: row.pieces, piecesPerMin: row.piecesPerMin, yield: row.yield } : {};
+  };
+  return stages.flatMap(({ stage, units, uses }, position) =>
+    units.map((unit) => {
+      const own = { id: newId(), plantId, productId, position, stage, uses: [...uses] };
+      return { ...own, ...unit, ...splitBy(stage, unit.unitId) };
+    }),
   );
+}
 
 /** Every unit, duty or limit that the plant does not have, and every stage that can't be worked out, at its field. */
 async function faultsOf(tx: Db, actor: Actor, { stages }: RouteRequest): Promise<Field[]> {

@@ -17,6 +17,8 @@ export interface StageOnUnit {
   readonly leadMin: number;
   readonly afterMin: number;
   readonly uses: readonly LimitUse[];
+  /** Duty inputs that hang on a run's quantity, instead of the duty's own; left out: none. */
+  readonly sized?: Mode['sized'];
 }
 
 /** Works the mode of a stage on a unit out from the library as it is now; each once. */
@@ -29,12 +31,12 @@ export async function stageModes(tx: Db, plantId: string): Promise<StageMode> {
   const units = new Map((await unitRows(tx, plantId)).map(({ unit }) => [unit.id, unit]));
   const duties = new Map((await dutyRows(tx, plantId)).map((duty) => [duty.id, duty]));
 
-  const dutyOf = (dutyId: string | null): Result<DutyModel | null> => {
+  const dutyOf = ({ dutyId, sized }: StageOnUnit): Result<DutyModel | null> => {
     if (dutyId === null) return ok(null);
     const row = duties.get(dutyId);
     if (!row || row.retiredAt)
       return fail(problem('ROUTE-DUTY', 'The duty is not there any more: choose another.', 'dutyId'));
-    return parseDuty(row.model, row.inputs);
+    return parseDuty(row.model, { ...row.inputs, ...sized });
   };
   const supplyFor = (unitId: string): Result<SteamSupply | null> => {
     const unit = units.get(unitId);
@@ -43,17 +45,20 @@ export async function stageModes(tx: Db, plantId: string): Promise<StageMode> {
     return header && place ? supplyOf(header, place.altitudeM) : ok(null);
   };
   const work: StageMode = (stage) => {
-    const duty = dutyOf(stage.dutyId);
+    const duty = dutyOf(stage);
     const supply = supplyFor(stage.unitId);
     if (!supply.ok) return supply;
     if (!duty.ok) return duty;
-    return workMode({ ...stage, duty: duty.value, supply: supply.value });
+    const { sized, ...plain } = stage;
+    const mode = workMode({ ...plain, duty: duty.value, supply: supply.value });
+    return mode.ok && sized ? ok({ ...mode.value, sized }) : mode;
   };
   const known = new Map<string, Result<Mode>>();
   return (stage) => {
-    const { unitId, dutyId, minutes, leadMin, afterMin, uses } = stage;
-    const key = JSON.stringify([unitId, dutyId, minutes, leadMin, afterMin, uses]);
-    const found = known.get(key) ?? work({ unitId, dutyId, minutes, leadMin, afterMin, uses });
+    const { unitId, dutyId, minutes, leadMin, afterMin, uses, sized } = stage;
+    const key = JSON.stringify([unitId, dutyId, minutes, leadMin, afterMin, uses, sized]);
+    const own = { unitId, dutyId, minutes, leadMin, afterMin, uses };
+    const found = known.get(key) ?? work(sized ? { ...own, sized } : own);
     known.set(key, found);
     return found;
   };
