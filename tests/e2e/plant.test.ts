@@ -60,6 +60,7 @@ describe('the plant’s library', () => {
     expect(await page.getByRole('row', { name: /Boiler 3/ }).innerText()).toContain(net);
 
     await page.goto(`${app.url}/capacity/2026-11-30`);
+    await page.getByRole('button', { name: /^Hot header/ }).click();
     await page.getByText('Boiler 3').first().waitFor();
     expect(troubles).toEqual([]);
   });

@@ -38,7 +38,7 @@ async function moveWithKeys(page: Page): Promise<void> {
   await page.keyboard.press('ArrowRight');
   await page.keyboard.press('ArrowRight');
   await page.keyboard.press('Enter');
-  await page.getByRole('button', { name: /^A01-1 .*07:40/ }).waitFor();
+  await page.getByRole('button', { name: /^A01-1 .*06:55/ }).waitFor();
   await page.getByRole('button', { name: 'Undo' }).and(page.locator(':enabled')).waitFor();
 }
 
