@@ -2,6 +2,7 @@ import { drawnMode, isNeverMoved, type Activity, type Link, type LinkEnd, type M
 import { releaseAfterMin, type PlantModel, type Unit } from '../plant/plant';
 import type { Week } from '../schedule/week';
 import { mergeIntervals } from '../time/interval';
+import { passedCleanings, type PassedCleaning, type PassedCleanings } from './passedCleanings';
 import { fullOptions, type FullOptions, type LevellingOptions } from './options';
 import {
   PROBLEM_VERSION,
@@ -26,7 +27,8 @@ export function toProblem(week: Week, options: LevellingOptions = {}): Problem {
   const placed = week.activities.filter((a) => a.placement !== null && a.modes.length > 0).sort(byId);
   const links = toLinks(week.links, placed);
   const linkIds = new Set(links.map((l) => l.id));
-  const activities = placed.map((a) => toActivity(a, week, full, linkIds));
+  const passed = passedCleanings(week);
+  const activities = placed.map((a) => toActivity(a, week, full, linkIds, passed));
   return {
     version: PROBLEM_VERSION,
     horizonMin: week.horizonMin,
@@ -67,9 +69,15 @@ function toCleaning(plant: PlantModel): ProblemCleaning[] {
 
 const cleaningKey = (c: ProblemCleaning): string => [c.unitIds[0], c.fromFamilyId, c.toFamilyId].join('|');
 
-function toActivity(a: Activity, week: Week, options: FullOptions, linkIds: ReadonlySet<string>): ProblemActivity {
+function toActivity(
+  a: Activity,
+  week: Week,
+  options: FullOptions,
+  linkIds: ReadonlySet<string>,
+  passed: PassedCleanings,
+): ProblemActivity {
   const placement = a.placement ?? { unitId: '', start: 0 };
-  const movable = isMovable(a, options, week.horizonMin);
+  const movable = isMovable(a, options, week.horizonMin) && !passed.still.has(a.id);
   const [earliest, latest] = startBounds(a, placement.start, options, week.horizonMin);
   const takenOffBy = a.occupiesUntil === 'end' ? null : a.occupiesUntil.linkId;
   return {
@@ -77,7 +85,9 @@ function toActivity(a: Activity, week: Week, options: FullOptions, linkIds: Read
     batchId: a.batchId ?? a.id,
     familyId: a.kind === 'stage' ? a.familyId : null,
     ...(a.kind === 'cleaning' ? { isCleaning: true } : {}),
-    modes: toModes(a, week.plant, movable && options.mayChangeUnit),
+    modes: toModes(a, week.plant, movable && options.mayChangeUnit).map((m) =>
+      withCleaning(m, passed.after.get(a.id), week),
+    ),
     plan: { unitId: placement.unitId, start: placement.start },
     movable,
     takenOffBy: takenOffBy !== null && linkIds.has(takenOffBy) ? takenOffBy : null,
@@ -87,6 +97,17 @@ function toActivity(a: Activity, week: Week, options: FullOptions, linkIds: Read
     due: a.due,
     weight: a.weight,
   };
+}
+
+/** A run's mode with the draws of a cleaning that follows it past what comes next on its unit. */
+function withCleaning(mode: ProblemMode, cleaning: PassedCleaning | undefined, { plant }: Week): ProblemMode {
+  if (!cleaning) return mode;
+  const { rule, offsetMin } = cleaning;
+  const headerId = plant.units.find(({ id }) => id === mode.unitId)?.headerId ?? null;
+  const draws = [...steamUses(rule.phases, steamResources(plant, headerId)), ...limitUses(rule.uses)];
+  const besides = draws.map((use) => ({ ...use, offsetMin: use.offsetMin + offsetMin }));
+  const warm = mode.warm?.map((one) => ({ ...one, uses: [...one.uses, ...besides] }));
+  return { ...mode, uses: [...mode.uses, ...besides], ...(warm ? { warm } : {}) };
 }
 
 function isMovable(a: Activity, options: FullOptions, horizonMin: number): boolean {
