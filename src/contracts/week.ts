@@ -124,7 +124,7 @@ export type CommentRequest = z.infer<typeof commentRequestSchema>;
 
 /** Server-sent events on GET /api/events?week=...: names of what changed, never data. */
 export interface PlantNotice {
-  readonly kind: 'plan' | 'capacity' | 'issue' | 'floor' | 'levelling' | 'processData' | 'plant' | 'people';
+  readonly kind: 'plan' | 'capacity' | 'issue' | 'floor' | 'levelling' | 'processData' | 'plant' | 'people' | 'orders';
   readonly planId?: string;
   readonly revision?: number;
   readonly runId?: string;
