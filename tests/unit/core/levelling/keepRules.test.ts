@@ -103,3 +103,54 @@ describe('allergens of runs further back', () => {
     expect(movesOf('allergen')).toEqual([false]);
   });
 });
+
+describe('a planned clean', () => {
+  /** Soup to 60 and from 400 on; the wash between draws 600 kg/h beside `other`, over the limit of 1000 kg/h. */
+  const plan = (fixing: 'free' | 'fixed', practice: Partial<PracticeLimits>, earliestStart = 0) => {
+    const clean = activity('c1', {
+      ...({ kind: 'cleaning', stage: null, cleaning: 'wash', code: 'C1', title: 'Wash of kettle1', fixing } as const),
+      modes: [flatMode('kettle1', 30, 600)],
+      placement: { unitId: 'kettle1', start: 100 },
+      earliestStart,
+    });
+    const wash = { unitKind: 'kettle', fromFamilyId: 'soup', toFamilyId: 'sauce', minutes: 20, kind: 'wash' } as const;
+    const bare = plant({
+      units: KETTLES.map((id) => unit(id, { kind: 'kettle' })),
+      cleaning: [{ ...wash, phases: [], uses: [] }],
+    });
+    const source = week({
+      plant: { ...bare, rules: { ...bare.rules, practice: { ...NONE, ...practice } } },
+      capacities: [capacity('main', 1000)],
+      activities: [
+        run('before', 'kettle1', 0, { fixing: 'fixed' }),
+        clean,
+        run('after', 'kettle1', 400, { fixing: 'fixed' }),
+        run('other', 'kettle2', 90, { fixing: 'fixed' }),
+      ],
+    });
+    const { proposal, withheld } = levelWeek(source, { budget: { iterations: 600 } }, { now: undefined });
+    const placements = proposal.moves.map(({ activityId, to }) => ({ activityId, placement: to }));
+    const { breaches, over } = evaluateWeek(withPlacements(source, placements));
+    const codes = breaches.map(({ code }) => code);
+    return { moves: proposal.moves.map((move) => [move.activityId, move.to.start]), withheld, codes, kg: over.kg };
+  };
+
+  it('moves like any other activity so that its steam fits, and judging agrees', () => {
+    const clear = { withheld: false, codes: [], kg: 0 };
+    expect(plan('free', { greatestRunningMin: 100 })).toEqual({ moves: [['c1', 60]], ...clear });
+  });
+
+  it('stays where it is fixed', () => {
+    const { kg, ...fixed } = plan('fixed', {});
+    expect(fixed).toEqual({ moves: [], withheld: false, codes: ['overLimit'] });
+    // 30 min at 200 kg/h over.
+    expect(kg).toBeCloseTo(100, 9);
+  });
+
+  it('is not moved to where it would no longer cure what it was added for', () => {
+    expect(plan('free', {}, 100).moves).toEqual([['c1', 150]]);
+    expect(plan('free', { greatestStandingDirtyMin: 90 }, 100).moves).toEqual([['c1', 150]]);
+    const kept = plan('free', { greatestStandingDirtyMin: 89 }, 100);
+    expect(kept).toMatchObject({ moves: [], withheld: false, codes: ['overLimit'] });
+  });
+});
