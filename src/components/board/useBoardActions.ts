@@ -88,9 +88,11 @@ export function useBoardActions(model: BoardModel) {
     [latest],
   );
 
+  const firstMinuteFor = ({ id }: Activity): number => liftAt.current.get(id) ?? Math.max(0, model.nowMin);
+
   const lift = (activity: Activity | null): void => {
     if (!activity || !model.mayEdit) return;
-    const at = liftAt.current.get(activity.id) ?? Math.max(0, model.nowMin);
+    const at = firstMinuteFor(activity);
     if (!model.carry.lift(activity, 'keys', { atMinute: at })) {
       setSaid(
         isPlanned(activity)
@@ -160,7 +162,11 @@ export function useBoardActions(model: BoardModel) {
     const ids = new Set(group.activities.map((activity) => activity.id));
     const { week } = model.dto;
     const asBatch = week.activities.map((a) => (ids.has(a.id) ? { ...a, batchId: group.key } : a));
-    const edit = placeBatch({ ...week, activities: asBatch }, group.key, Math.max(0, model.nowMin));
+    const edit = placeBatch(
+      { ...week, activities: asBatch },
+      group.key,
+      Math.max(...group.activities.map(firstMinuteFor)),
+    );
     if (!make(edit, 'Placed where there is room.') || !edit.ok) return;
     const first = edit.value.changes.find((change) => change.after.placement !== null);
     if (!first?.after.placement) return;
@@ -183,7 +189,7 @@ export function useBoardActions(model: BoardModel) {
   return {
     selected,
     say: setSaid,
-    /** Has keys first hold an activity that waits at that minute. */
+    /** From when a place is looked for, by keys or where there is room, for an activity that waits. */
     liftLater: (id: string, minute: number) => void liftAt.current.set(id, minute),
     selectedId,
     setSelectedId,
