@@ -24,6 +24,8 @@ export function setSecurityHeaders(headers: Headers, appUrl = process.env.APP_UR
   const carried = appUrl?.startsWith('https:') ? { ...ALWAYS, ...OVER_HTTPS } : ALWAYS;
   for (const [name, value] of Object.entries(carried)) headers.set(name, value);
   const policy = headers.get('content-security-policy');
+  // A page that gives way to another, such as the one for what is not there, passes here twice.
+  if (policy?.includes('style-src-attr')) return;
   if (policy) {
     const closed = policy.replace(/;\s*$/, '');
     headers.set('content-security-policy', `${closed}; style-src-attr 'unsafe-inline'`);

@@ -76,6 +76,9 @@ describe('headers', () => {
     const headers = new Headers({ 'content-type': 'text/html', 'content-security-policy': "default-src 'self';" });
     setSecurityHeaders(headers, APP);
     expect(headers.get('content-security-policy')).toBe("default-src 'self'; style-src-attr 'unsafe-inline'");
+    // Once more, as where a page gives way to another.
+    setSecurityHeaders(headers);
+    expect(headers.get('content-security-policy')).toBe("default-src 'self'; style-src-attr 'unsafe-inline'");
     expect(headers.get('x-content-type-options')).toBe('nosniff');
     expect(headers.get('strict-transport-security')).toBe('max-age=31536000');
   });
