@@ -92,6 +92,8 @@ export interface OrderDto {
   readonly earliest: string | null;
   readonly latestStart: string | null;
   readonly due: string;
+  /** The first day of the week that it is due in. */
+  readonly dueWeek: string;
   readonly priority: number;
   readonly revision: number;
   readonly state: OrderStateDto;

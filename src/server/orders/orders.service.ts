@@ -19,7 +19,7 @@ import { lockPlanById, setPlanRevision } from '../plans/plans.repo';
 import { productRows, routeRows, type ProductRow } from '../products/products.repo';
 import { record } from '../record/record';
 import { plantRow } from '../weeks/plantParts.repo';
-import { instantOf, wallMinute, weekTimeOf } from '../weeks/weekTime';
+import { instantOf, wallMinute, weekStartOf, weekTimeOf, type WeekRule } from '../weeks/weekTime';
 import * as repo from './orders.repo';
 import { orderProducts } from './productRoutes';
 
@@ -38,7 +38,7 @@ export async function listOrders(actor: Authorized<'plan.read'>): Promise<Result
   const orders = rows.flatMap((row): OrderDto[] => {
     const product = products.get(row.productId);
     const far = progress.find(({ orderId }) => orderId === row.id);
-    return product ? [orderDto(row, product, plant.timeZone, stateOf(far, issued.has(row.id)))] : [];
+    return product ? [orderDto(row, product, plant, stateOf(far, issued.has(row.id)))] : [];
   });
   return ok({ timeZone: plant.timeZone, orders, products: await orderProducts(db, plantId) });
 }
@@ -56,9 +56,9 @@ const caseKg = ({ casePieces, fillKg }: ProductRow): number => casePieces * fill
 /** A quantity in cases comes back as it was typed, without rounding noise. */
 const shown = (value: number): number => Number(value.toPrecision(12));
 
-function orderDto(row: repo.OrderRow, product: ProductRow, timeZone: string, state: OrderStateDto): OrderDto {
+function orderDto(row: repo.OrderRow, product: ProductRow, plant: WeekRule, state: OrderStateDto): OrderDto {
   const { id, number, productId, quantityKg, priority, revision } = row;
-  const wall = (at: Date): string => zonedText(at, timeZone, "yyyy-MM-dd'T'HH:mm");
+  const wall = (at: Date): string => zonedText(at, plant.timeZone, "yyyy-MM-dd'T'HH:mm");
   return {
     ...{ id, number, productId, productName: product.name, quantityKg, priority, revision, state },
     quantity: shown(row.quantityUnit === 'cases' ? quantityKg / caseKg(product) : quantityKg),
@@ -66,6 +66,7 @@ function orderDto(row: repo.OrderRow, product: ProductRow, timeZone: string, sta
     earliest: row.earliestAt && wall(row.earliestAt),
     latestStart: row.latestStartAt && wall(row.latestStartAt),
     due: wall(row.dueAt),
+    dueWeek: weekStartOf(row.dueAt, plant),
   };
 }
 
