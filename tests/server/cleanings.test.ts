@@ -11,7 +11,11 @@ import { POST as EDIT } from '@/pages/api/weeks/[week]/edits';
 import { POST as EVENT } from '@/pages/api/weeks/[week]/floor-events';
 import { POST as ISSUE } from '@/pages/api/weeks/[week]/issues';
 import { GET as SHEET } from '@/pages/api/weeks/[week]/shift-sheet';
+import { GET as OUT_OF_DATE, POST as REWORK } from '@/pages/api/weeks/[week]/rework';
+import type { Actor } from '@/server/auth/actor';
+import { authorize } from '@/server/auth/permissions';
 import { loadWeek } from '@/server/weeks/loadWeek';
+import { loadWorking } from '@/server/working/loadWorking';
 import { callApi, outcome } from '../support/api';
 import {
   activityIn,
@@ -26,6 +30,11 @@ import {
 import { phase } from '../support/builders';
 
 let sessions: Readonly<Record<Person, string>>;
+
+const READER: Actor = {
+  ...{ personId: 'sam', name: 'Sam Example', plantId: 'quay', plantName: 'quay works' },
+  ...{ isDemo: false, roles: ['lineSupervisor'] },
+};
 
 /** Invented: water for a wash, heated over ten minutes. */
 const washWater = { kind: 'wash', waterKg: 600, fromC: 15, toC: 82, minutes: 10 };
@@ -166,6 +175,34 @@ describe('a planned clean in the plan', () => {
     const peak = activityIn(await load(), activityId).modes[0]?.phases[0]?.steamKgPerH ?? 0;
     expect(peak).toBeGreaterThan(100);
     expect((await at()) - before).toBeCloseTo(peak, 6);
+  });
+
+  it('opens its working, waiting or placed', async () => {
+    const { activityId } = await added('K1', 'wash');
+    const reader = authorize(READER, 'plan.read');
+    if (!reader.ok) throw new Error(reader.error.message);
+    const waiting = await loadWorking(reader.value, activityId);
+    expect(waiting).toMatchObject({ ok: true, value: { code: 'C1', unitName: 'K1', duty: { name: 'Wash water' } } });
+    await place(activityId, 0, 560);
+    expect(await loadWorking(reader.value, activityId)).toEqual(waiting);
+  });
+
+  it('is worked out anew with the library’s other runs when its rule’s duty has changed', async () => {
+    const { activityId } = await added('K1', 'wash');
+    const rework = (body?: unknown) =>
+      callApi(body ? REWORK : OUT_OF_DATE, {
+        session: sessions.kim,
+        params: { week: WEEK },
+        ...(body ? { body } : {}),
+      });
+    expect(await (await rework()).json()).toMatchObject({ activities: [] });
+    await db.update(duties).set({ inputs: { ...washWater, waterKg: 900 } });
+    expect(await (await rework()).json()).toMatchObject({ activities: [{ id: activityId, code: 'C1' }] });
+    const peakOf = async () => activityIn(await load(), activityId).modes[0]?.phases[0]?.steamKgPerH ?? 0;
+    const before = await peakOf();
+    expect(await (await rework({ activityIds: [activityId] })).json()).toEqual({ planRevision: 2, reworked: 1 });
+    expect(await peakOf()).toBeCloseTo(1.5 * before, 6);
+    await db.update(duties).set({ inputs: washWater });
   });
 
   it('is on the issue and the shift sheet, and the floor records it', async () => {

@@ -1,22 +1,21 @@
 import type { CleaningPlanDto, CleaningPlanRequest } from '@/contracts/cleanings';
-import type { CleaningKind, Mode } from '@/core/plant/activity';
 import { fail, ok, type Result } from '@/core/result';
-import { longestRule, nextCleaningCode, plannedCleaningTitle } from '@/core/schedule/plannedCleaning';
+import { nextCleaningCode, plannedCleaningTitle } from '@/core/schedule/plannedCleaning';
 import { db, type Db } from '@/db/client';
 import type { Actor } from '../auth/actor';
 import type { Authorized } from '../auth/permissions';
 import { notify } from '../events/notify';
-import { badInput, conflict, notFound, withStatus, type HttpProblem } from '../http/problem';
+import { conflict, notFound, type HttpProblem } from '../http/problem';
 import { newId } from '../id';
 import { activityStates } from '../plans/stale';
 import { lockActivities, setPlanRevision, type ActivityRow, type PlanRow } from '../plans/plans.repo';
 import { activityName } from '../plans/words';
-import { unitRows, type UnitRow } from '../products/products.repo';
-import { stageModes } from '../products/stageModes';
+import { unitRows } from '../products/products.repo';
 import { record } from '../record/record';
 import { findWeek, planOf } from '../weeks/findWeek';
 import type { WeekTime } from '../weeks/weekTime';
-import { codesOf, deleteActivity, insertActivity, isRecorded, issueWith, rulesOf } from './cleanings.repo';
+import { cleaningMode } from './cleaningMode';
+import { codesOf, deleteActivity, insertActivity, isRecorded, issueWith } from './cleanings.repo';
 
 /**
  * Adds a clean of one unit to a week, not yet placed: as long as the plant's longest rule of the kind, its steam worked
@@ -67,27 +66,6 @@ export function removeCleaning(
     const planRevision = await changed(tx, actor, plan, 'plan.removeCleaning', { code, activityId, title });
     return ok({ activityId, code, planRevision });
   });
-}
-
-const ONE_OF: Readonly<Record<CleaningKind, string>> = {
-  rinse: 'a rinse',
-  wash: 'a wash',
-  allergen: 'an allergen clean',
-};
-
-/** What a clean takes on a unit. A unit without a header draws no steam, as with cleanings that follow. */
-export async function cleaningMode(tx: Db, unit: UnitRow, kind: CleaningKind): Promise<Result<Mode, HttpProblem>> {
-  const rule = longestRule(await rulesOf(tx, unit.plantId, unit.kind, kind), unit.kind, kind);
-  if (!rule) {
-    const message = `No cleaning rule says what ${ONE_OF[kind]} of a ${unit.kind} takes; nothing was added.`;
-    return fail(badInput('CLEANING-RULE', message, 'kind'));
-  }
-  const { minutes, phases, uses, dutyId } = rule;
-  const plain: Mode = { unitId: unit.id, minutes, phases: unit.headerId === null ? [] : phases, uses, dutyId: null };
-  if (dutyId === null || unit.headerId === null) return ok(plain);
-  const modeOf = await stageModes(tx, unit.plantId);
-  const worked = modeOf({ unitId: unit.id, dutyId, minutes, leadMin: 0, afterMin: 0, uses });
-  return worked.ok ? worked : fail(withStatus(409, worked.error));
 }
 
 async function whyKept(tx: Db, plan: PlanRow, row: ActivityRow, time: WeekTime): Promise<HttpProblem | null> {

@@ -6,6 +6,7 @@ import { db, type Db } from '@/db/client';
 import type { Actor } from '../auth/actor';
 import type { Authorized } from '../auth/permissions';
 import { now } from '../clock';
+import { cleaningMode } from '../cleanings/cleaningMode';
 import { refreshCleaning } from '../duties/refreshCleaning';
 import { notify } from '../events/notify';
 import { notFound, type HttpProblem } from '../http/problem';
@@ -14,7 +15,7 @@ import { insertEdit, writeModes } from '../plans/edits.repo';
 import { activityRows, lockActivities, setPlanRevision, type ActivityRow, type PlanRow } from '../plans/plans.repo';
 import { record } from '../record/record';
 import { findWeek, planOf } from '../weeks/findWeek';
-import { routeRows } from './products.repo';
+import { routeRows, unitRows } from './products.repo';
 import { changeWords, reworkedModes, sameModes } from './reworkedModes';
 import { stageModes } from './stageModes';
 
@@ -83,12 +84,35 @@ async function outOfDate(tx: Db, actor: Pick<Actor, 'plantId'>, rows: readonly A
   const routes = await routeRows(tx, actor.plantId);
   const modeOf = await stageModes(tx, actor.plantId);
   const faults = new Set<string>();
-  const found = rows.flatMap((row): OutOfDate[] => {
-    if (row.kind !== 'stage' || row.productId === null || row.fixing === 'started' || row.fixing === 'done') return [];
+  const planned = rows.filter(({ fixing }) => fixing === 'free' || fixing === 'fixed');
+  const found = planned.flatMap((row): OutOfDate[] => {
+    if (row.kind !== 'stage' || row.productId === null) return [];
     const stages = routes.filter(({ productId, stage }) => productId === row.productId && stage === row.stage);
     const reworked = reworkedModes(row, stages, modeOf);
     reworked.faults.forEach((fault) => faults.add(`${row.title}: ${fault}`));
     return sameModes(row.modes, reworked.modes) ? [] : [{ row, modes: reworked.modes }];
   });
-  return { found, faults: [...faults] };
+  return { found: [...found, ...(await cleansOutOfDate(tx, actor, planned))], faults: [...faults] };
+}
+
+/** Planned cleans that the plant's rules would draw otherwise; one without a rule or a unit any more keeps its draws. */
+async function cleansOutOfDate(
+  tx: Db,
+  { plantId }: Pick<Actor, 'plantId'>,
+  rows: readonly ActivityRow[],
+): Promise<OutOfDate[]> {
+  const cleans = rows.filter(({ kind, cleaning }) => kind === 'cleaning' && cleaning !== null);
+  if (cleans.length === 0) return [];
+  const units = new Map((await unitRows(tx, plantId)).map(({ unit }) => [unit.id, unit]));
+  const worked = new Map<string, Awaited<ReturnType<typeof cleaningMode>>>();
+  const found: OutOfDate[] = [];
+  for (const row of cleans) {
+    const unit = units.get(row.modes[0]?.unitId ?? '');
+    if (!unit || !row.cleaning) continue;
+    const key = `${unit.id} ${row.cleaning}`;
+    const mode = worked.get(key) ?? (await cleaningMode(tx, unit, row.cleaning));
+    worked.set(key, mode);
+    if (mode.ok && !sameModes(row.modes, [mode.value])) found.push({ row, modes: [mode.value] });
+  }
+  return found;
 }
