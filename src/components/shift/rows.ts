@@ -25,8 +25,9 @@ const RETORT_ACTIONS: ReadonlySet<FloorEventKind> = new Set([
   'empty',
 ]);
 
-/** The floor's name of an event; a unit that is no retort is only begun and emptied. */
+/** The floor's name of an event; a unit that is no retort is only begun and emptied or, without a stage, cleaned. */
 export function eventName(kind: FloorEventKind, stage: Stage | null): string {
+  if (stage === null && kind === 'empty') return 'Clean';
   if (stage !== 'retort') return kind === 'cratesIn' ? 'Begun' : kind === 'empty' ? 'Empty' : kind;
   const names: Readonly<Record<FloorEventKind, string>> = {
     cratesIn: 'Crates in',

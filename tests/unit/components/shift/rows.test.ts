@@ -102,5 +102,6 @@ describe('words', () => {
     expect(eventName('timingStarted', 'retort')).toBe('Process timing started');
     expect(eventName('cratesIn', 'cook')).toBe('Begun');
     expect(eventName('empty', 'cook')).toBe('Empty');
+    expect([eventName('cratesIn', null), eventName('empty', null)]).toEqual(['Begun', 'Clean']);
   });
 });
