@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { PROBLEM_VERSION, type Problem } from '../core/levelling/problem';
 import { admitPlan, admitProblem } from '../core/levelling/problemDoor';
 import type { Plan } from '../core/levelling/problem';
+import { PHASE_KINDS } from './dutyInputs';
 import { fail, problem as fault, type Problem as Fault, type Result } from '../core/result';
 
 /**
@@ -19,20 +20,7 @@ const stepFunction = z
   .refine((steps) => steps.every((s, i) => i === 0 || s.from > (steps[i - 1]?.from ?? 0)), {
     message: 'Steps must ascend in “from”, each minute once.',
   });
-const phase = z.enum([
-  'warmUp',
-  'run',
-  'idle',
-  'heatUp',
-  'boilOff',
-  'hold',
-  'vent',
-  'comeUp',
-  'process',
-  'cool',
-  'rinse',
-  'wash',
-]);
+const phase = z.enum(PHASE_KINDS);
 const use = z.strictObject({
   resourceId: id,
   offsetMin: minute,
