@@ -15,10 +15,7 @@ export type QuantityUnit = (typeof QUANTITY_UNITS)[number];
 /** A time on the plant's clock, such as 2026-12-04T14:00. */
 const WALL = /^\d{4}-(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])T([01]\d|2[0-3]):[0-5]\d$/;
 const isMoment = (text: string): boolean => WALL.test(text) && !Number.isNaN(Date.parse(`${text}:00Z`));
-const moment = (missing: string) =>
-  z
-    .string({ error: missing })
-    .refine(isMoment, { error: `${missing} Such as 2026-12-04T14:00, by the plant’s clock.` });
+const moment = (missing: string) => z.string({ error: missing }).refine(isMoment, { error: `${missing}` });
 
 /** POST /api/orders */
 export const orderSchema = z

@@ -36,7 +36,7 @@ const BLANK: Blank<OrderRequest> = {
 /** An order typed in or edited where it stands. Enter saves, Escape leaves it. */
 export function OrderForm({ orders, order, onClose, onSaved }: Props) {
   const start = order ? { ...BLANK, ...fieldsOf(order) } : BLANK;
-  const form = useZodForm(orderSchema, start as Blank<OrderRequest>);
+  const form = useZodForm(orderSchema, start);
   const path = order ? `/api/orders/${order.id}` : '/api/orders';
   const save = useSave(
     form,
@@ -137,16 +137,17 @@ interface MomentProps {
 /** A day and time by the plant's clock; empty: none. */
 function Moment({ control, name, label, hint }: MomentProps) {
   const { field, fieldState } = useController({ control, name });
+  const { ref, value, onBlur, onChange } = field;
   const empty = name === 'due' ? '' : null;
   return (
     <Field
       {...{ label, hint, name }}
-      ref={field.ref}
+      ref={ref}
       type="datetime-local"
       error={fieldState.error?.message}
-      value={field.value ?? ''}
-      onBlur={field.onBlur}
-      onChange={(event) => field.onChange(event.target.value === '' ? empty : event.target.value.slice(0, 16))}
+      value={value ?? ''}
+      onBlur={onBlur}
+      onChange={(event) => onChange(event.target.value === '' ? empty : event.target.value.slice(0, 16))}
     />
   );
 }

@@ -90,7 +90,7 @@ function Offers({ orders, order, product, onPlanned }: Props & { readonly produc
         <SelectField label="Week" value={weekStart} onChange={(event) => setWeekStart(event.target.value)}>
           {[0, -7].map((days) => {
             const week = daysAfter(order.dueWeek, days);
-            const which = days === 0 ? 'it is due' : 'the one before';
+            const which = days === 0 ? 'when it is due' : 'the week before';
             return (
               <option key={week} value={week}>
                 {wallText(`${week}T00:00`).slice(0, -6)}: {which}

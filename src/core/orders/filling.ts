@@ -38,7 +38,8 @@ export function steadyFilling(pieces: number, perMin: number): Filling {
  * @param batches containers that each kettle fills; `ownPerMin` the filler's rate, `perMin` what is kept up [1/min].
  */
 export function kettleFilling(batches: readonly number[], ownPerMin: number, perMin: number): Filling {
-  const before = batches.map((_, k) => batches.slice(0, k).reduce((total, pieces) => total + pieces, 0));
+  const before: number[] = [];
+  batches.forEach((pieces, k) => before.push(k === 0 ? 0 : (before[k - 1] ?? 0) + (batches[k - 1] ?? pieces)));
   const needed = before.map((pieces) => down(pieces / perMin));
   const at = (batch: number, pieces: number): number =>
     (needed[batch] ?? 0) + (pieces - (before[batch] ?? 0)) / ownPerMin;

@@ -51,6 +51,9 @@ export interface OrderSplit {
 /** Of the longest wait, what the order's own queue for the retorts may take; the rest is for what else holds them. */
 const SHARE_OF_WAIT = 0.75;
 
+/** Batches, and loads, that one order may become: more than a week has room for. */
+const MOST_PARTS = 400;
+
 interface Parts {
   readonly fill: RunStage;
   readonly batch: BatchStage | null;
@@ -59,12 +62,18 @@ interface Parts {
 
 /**
  * Splits containers over a route. Runs go at their own rate as long as kettles and retorts keep up, else at theirs.
- * @returns ORDER-ROUTE for a route that no order can be split over, ORDER-SMALL where nothing is left to plan.
+ * @returns ORDER-ROUTE for a route that no order can be split over, ORDER-SMALL where nothing is left to plan,
+ * ORDER-LARGE where it is more than a week can hold.
  */
 export function splitOrder(route: OrderRoute, pieces: number, part: PartLoad): Result<OrderSplit> {
   const parts = partsOf(route);
   if (!parts.ok) return parts;
   const { fill, batch, load } = parts.value;
+  const batchPieces = batch ? batchOutKg(batch) / route.fillKg : Infinity;
+  if (pieces / Math.min(batchPieces, load?.pieces ?? Infinity) > MOST_PARTS) {
+    const message = `It would be more than ${MOST_PARTS} batches or loads; make several orders of it.`;
+    return fail(problem('ORDER-LARGE', message));
+  }
   const { loads, carried } = load ? splitLoads(pieces, load.pieces, part) : { loads: [], carried: 0 };
   const planned = pieces - carried;
   if (planned < 1) {

@@ -10,7 +10,7 @@ import type { Actor } from '../auth/actor';
 import type { Authorized } from '../auth/permissions';
 import { now } from '../clock';
 import { notify } from '../events/notify';
-import { badInput, conflict, notFound, withStatus, type HttpProblem } from '../http/problem';
+import { conflict, notFound, withStatus, type HttpProblem } from '../http/problem';
 import { newId } from '../id';
 import { lockPlanById, setPlanRevision, type PlanRow } from '../plans/plans.repo';
 import { productRows } from '../products/products.repo';
@@ -22,9 +22,6 @@ import { steamOnMin } from './orderRoute';
 import * as repo from './orders.repo';
 import { later, orderAsRead, told } from './orders.service';
 import { plannable, type PlannableProduct } from './productRoutes';
-
-/** Runs, batches and loads that one order may become. */
-const MOST_PARTS = 400;
 
 /** Splits an order over its product's route and adds its net to a week, not yet placed. */
 export function planOrder(
@@ -50,10 +47,6 @@ export function planOrder(
       request.part,
     );
     if (!split.ok) return fail(withStatus(400, split.error));
-    if (split.value.batches.length + split.value.loads.length > MOST_PARTS) {
-      const message = `${order.number} would be more than ${MOST_PARTS} batches and loads; make several orders of it.`;
-      return fail(badInput('ORDER-LARGE', message));
-    }
     const plan = await planOf(tx, week.value, true);
     const code = freeCode(order.number, await codesOf(tx, plan));
     const net = netOf(order, product.value, split.value, { code, time: week.value.time });

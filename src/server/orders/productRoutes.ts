@@ -42,7 +42,7 @@ export async function plannable(tx: Db, plantId: string): Promise<(product: Prod
     const longestWaitMin = longestWait(data);
     const route = orderRoute(stages.value, { fillKg: product.fillKg, longestWaitMin });
     if (!route.ok) return fail(problem(route.error.code, `${product.name}: ${route.error.message}`));
-    const fits = splitOrder(route.value, 1_000_000, 'levelled');
+    const fits = splitOrder(route.value, 1, 'levelled');
     if (!fits.ok) return fail(problem(fits.error.code, `${product.name}: ${fits.error.message}`));
     return ok({ product, stages: stages.value, route: route.value, data: isThermal(rows) ? data : null, modeOf });
   };
