@@ -2,6 +2,7 @@ import { useTable } from '@tanstack/react-table';
 import { Fragment, useMemo, type KeyboardEvent, type ReactNode } from 'react';
 import type { OrderDto } from '../../contracts/orders';
 import { Button } from '../ui/Button';
+import { useHydrated } from '../ui/useHydrated';
 import { useUnits } from '../ui/units';
 import { COLUMN_NAMES, ORDER_FEATURES, orderColumns } from './orderColumns';
 import { OrderTools } from './OrderTools';
@@ -129,6 +130,7 @@ interface ActionsProps {
 
 function RowActions({ order, mayEdit, onEdit, onSplit }: ActionsProps) {
   const { id, number, state } = order;
+  const isReady = useHydrated();
   return (
     <>
       {state.weekStart === null ? null : (
@@ -138,10 +140,16 @@ function RowActions({ order, mayEdit, onEdit, onSplit }: ActionsProps) {
       )}
       {mayEdit ? (
         <>
-          <Button look="quiet" size="small" onClick={() => onEdit(id)} aria-label={`Change ${number}`}>
+          <Button
+            look="quiet"
+            size="small"
+            disabled={!isReady}
+            onClick={() => onEdit(id)}
+            aria-label={`Change ${number}`}
+          >
             Change
           </Button>
-          <Button size="small" onClick={() => onSplit(id)} aria-label={`Split ${number}`}>
+          <Button size="small" disabled={!isReady} onClick={() => onSplit(id)} aria-label={`Split ${number}`}>
             {state.kind === 'notPlanned' ? 'Split…' : 'Planned…'}
           </Button>
         </>

@@ -2,6 +2,7 @@ import type { ReactTable } from '@tanstack/react-table';
 import type { OrderDto } from '../../contracts/orders';
 import { Button } from '../ui/Button';
 import { Field, SelectField } from '../ui/Field';
+import { useHydrated } from '../ui/useHydrated';
 import { COLUMN_NAMES, type ORDER_FEATURES } from './orderColumns';
 
 interface Props {
@@ -19,12 +20,14 @@ export function OrderTools({ table, shown, all, onNew }: Props) {
   const state = table.getColumn('state');
   const product = table.getColumn('productName');
   const names = [...new Set(table.getCoreRowModel().rows.map(({ original }) => original.productName))].sort();
+  const isReady = useHydrated();
   return (
     <div className="mb-2 flex flex-wrap items-start gap-x-4 gap-y-1">
       <Field
         className="w-full sm:w-56"
         label="Search"
         type="search"
+        disabled={!isReady}
         value={String(table.state.globalFilter ?? '')}
         hint={shown === all ? `${all} orders` : `${shown} of ${all} orders`}
         onChange={(event) => table.setGlobalFilter(event.target.value)}
@@ -32,6 +35,7 @@ export function OrderTools({ table, shown, all, onNew }: Props) {
       <SelectField
         className="min-w-36 max-sm:flex-1"
         label="State"
+        disabled={!isReady}
         value={String(state?.getFilterValue() ?? '')}
         onChange={(event) => state?.setFilterValue(event.target.value || undefined)}
       >
@@ -45,6 +49,7 @@ export function OrderTools({ table, shown, all, onNew }: Props) {
       <SelectField
         className="max-w-64 min-w-36 max-sm:flex-1"
         label="Product"
+        disabled={!isReady}
         value={String(product?.getFilterValue() ?? '')}
         onChange={(event) => product?.setFilterValue(event.target.value || undefined)}
       >
@@ -77,7 +82,7 @@ export function OrderTools({ table, shown, all, onNew }: Props) {
         </ul>
       </details>
       {onNew ? (
-        <Button look="main" className="mt-5.5 min-h-10 sm:ml-auto" onClick={onNew}>
+        <Button look="main" className="mt-5.5 min-h-10 sm:ml-auto" disabled={!isReady} onClick={onNew}>
           New order
         </Button>
       ) : null}
