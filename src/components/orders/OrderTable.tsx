@@ -17,7 +17,7 @@ interface Props {
   readonly onSplit: (id: string) => void;
 }
 
-const CELL = 'px-3 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
+const CELL = 'px-2.5 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
 
 /** Moves the focus between rows with the arrows. */
 function step(event: KeyboardEvent<HTMLTableRowElement>, by: 1 | -1): void {
@@ -63,7 +63,7 @@ export function OrderTable({ orders, mayEdit, editing, form, onEdit, onNew, onSp
                     key={column.id}
                     scope="col"
                     aria-sort={sorted === 'asc' ? 'ascending' : sorted === 'desc' ? 'descending' : 'none'}
-                    className="label px-1 py-1 text-left font-medium"
+                    className="label px-0.5 py-1 text-left font-medium"
                   >
                     <button
                       type="button"
@@ -95,13 +95,13 @@ export function OrderTable({ orders, mayEdit, editing, form, onEdit, onNew, onSp
                   {row.getVisibleCells().map((cell) => (
                     <td
                       key={cell.id}
-                      className={`${CELL} ${cell.column.id === 'number' ? 'font-semibold' : ''} ${cell.column.id === 'productName' ? '' : 'whitespace-nowrap'}`}
+                      className={`${CELL} ${cell.column.id === 'number' ? 'font-semibold' : ''} ${cell.column.id === 'productName' ? 'min-w-52 max-md:min-w-0' : 'whitespace-nowrap'}`}
                     >
                       <span className="mr-2 text-sm text-ink-muted md:hidden">{COLUMN_NAMES[cell.column.id]}</span>
                       <table.FlexRender cell={cell} />
                     </td>
                   ))}
-                  <td className="py-2 text-right whitespace-nowrap max-md:block max-md:text-left">
+                  <td className="py-1.5 pl-2 text-right align-top whitespace-nowrap max-md:block max-md:text-left">
                     <RowActions order={row.original} {...{ mayEdit, onEdit, onSplit }} />
                   </td>
                 </tr>
