@@ -53,7 +53,7 @@ export function OrderTable({ orders, mayEdit, editing, form, onEdit, onNew, onSp
       <OrderTools table={table} shown={rows.length} all={orders.length} onNew={mayEdit ? onNew : null} />
       {editing === '' ? <div className="mb-4 border-y border-rule">{form}</div> : null}
       <div className="overflow-x-auto">
-        <table className="w-full border-t border-rule text-base max-md:block" aria-label="Orders">
+        <table className="w-full border-t border-rule text-sm max-md:block max-md:text-base" aria-label="Orders">
           <thead className="max-md:sr-only">
             <tr className="border-b border-rule">
               {table.getVisibleLeafColumns().map((column) => {
@@ -95,7 +95,7 @@ export function OrderTable({ orders, mayEdit, editing, form, onEdit, onNew, onSp
                   {row.getVisibleCells().map((cell) => (
                     <td
                       key={cell.id}
-                      className={`${CELL} ${cell.column.id === 'number' ? 'font-semibold' : ''} ${cell.column.id === 'productName' ? 'min-w-52 max-md:min-w-0' : 'whitespace-nowrap'}`}
+                      className={`${CELL} ${cell.column.id === 'number' ? 'font-semibold' : ''} ${cell.column.id === 'productName' ? 'min-w-48 max-md:min-w-0' : 'whitespace-nowrap'}`}
                     >
                       <span className="mr-2 text-sm text-ink-muted md:hidden">{COLUMN_NAMES[cell.column.id]}</span>
                       <table.FlexRender cell={cell} />
