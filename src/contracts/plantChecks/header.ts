@@ -1,3 +1,4 @@
+import { stationBalance } from '../../core/header/station';
 import { shortNumber } from '../../core/quantity/range';
 import type { Thing } from '../plantLibrary';
 import { ambientOf, inUse, others, steamOfHeader, type CheckContext, type Fault, type Given } from './context';
@@ -62,6 +63,27 @@ function feedingHeader({ feedFromHeaderId, pressureBarG }: Header, context: Chec
   return [{ path: 'pressureBarG', message: `A letdown’s pressure is below its feed’s: this is ${pressures}.` }];
 }
 
+/** Steam stated with more heat than the valve can bring: nothing between the two headers heats it. */
+function hotterThanFed(header: Header, context: CheckContext): Fault[] {
+  const { name = '', feedFromHeaderId, pressureBarG, dryness, superheatK } = header;
+  const from = feedFromHeaderId ? inUse(context.library, 'headers', feedFromHeaderId) : undefined;
+  if (!from || pressureBarG === undefined || dryness === undefined || superheatK === undefined) return [];
+  const ambient = ambientOf(context.library);
+  const upstream = steamOfHeader(from.values, ambient);
+  const stated = steamOfHeader({ pressureBarG, dryness, superheatK }, ambient);
+  if (!upstream.ok || !stated.ok) return [];
+  const balance = stationBalance({
+    upstreamName: from.values.name,
+    upstream: upstream.value,
+    headerName: name || 'This header',
+    stated: stated.value,
+    kgPerH: 1,
+    ambient,
+  });
+  if (balance.ok || balance.error.code !== 'STATION-HOTTER') return [];
+  return [{ path: balance.error.field ?? 'dryness', message: balance.error.message }];
+}
+
 function letdownFlow({ greatestKgPerH, leastKgPerH }: Header): Fault[] {
   if (greatestKgPerH === null) {
     return [{ path: 'greatestKgPerH', message: 'Give the greatest flow that the letdown passes.' }];
@@ -81,7 +103,9 @@ function feed(header: Header, context: CheckContext): Fault[] {
   const onIt: Fault[] = boilers
     ? [{ path: 'feedKind', message: `${boilers} stands on this header: it is fed by boilers.` }]
     : [];
-  return [...onIt, ...feedingHeader(header, context), ...letdownFlow(header)];
+  const feeding = feedingHeader(header, context);
+  const hotter = feeding.length === 0 ? hotterThanFed(header, context) : [];
+  return [...onIt, ...feeding, ...hotter, ...letdownFlow(header)];
 }
 
 function flashPressure(header: Header, from: { name: string; pressureBarG: number }): Fault[] {

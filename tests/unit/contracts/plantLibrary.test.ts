@@ -63,6 +63,17 @@ describe('a header', () => {
     ]);
   });
 
+  it('is never stated hotter than its letdown can bring', () => {
+    // 7 bar g at x 0.98 is 2727.43 kJ/kg: at 3 bar g x 0.9949; dry steam there has 2738.21 (IAPWS-IF97).
+    const low = { ...header({ name: 'Low', pressureBarG: 3 }), feedKind: 'letdown' as const, feedFromHeaderId: 'main' };
+    const at = (state: object) => faultsOf('headers', { ...low, greatestKgPerH: 900, ...state });
+    const main = library().things.headers.find(({ id }) => id === 'main')?.values;
+    expect(main).toMatchObject({ pressureBarG: 7, dryness: 0.98 });
+    expect(at({ dryness: 0.994 })).toEqual([]);
+    expect(at({ dryness: 1 })).toEqual([['dryness', expect.stringMatching(/lower the dryness/)]]);
+    expect(at({ dryness: null, superheatK: 20 })).toEqual([['superheatK', expect.stringMatching(/lower the/)]]);
+  });
+
   it('stays between its boilers and the headers let down from it', () => {
     const main = (pressureBarG: number) => header({ name: 'Main header', pressureBarG });
     const context = { library: library(), id: 'main' };
